@@ -1,10 +1,5 @@
 declare module 'eslint-plugin-jsx-a11y' {
-  import type { Linter } from 'eslint';
-  const plugin: {
-    flatConfigs: Record<
-      'recommended' | 'strict',
-      { plugins: Record<string, unknown>; rules: Linter.RulesRecord }
-    >;
-  };
+  import type { ESLint, Linter } from 'eslint';
+  const plugin: ESLint.Plugin & { flatConfigs: Record<'strict', { rules: Linter.RulesRecord }> };
   export default plugin;
 }
