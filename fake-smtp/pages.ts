@@ -109,10 +109,10 @@ ${cell('State', 'kept here, sent to nobody')}
 <div class="cell do"><a class="button" href="${escapeHtml(here)}">Look again</a></div>
 </div>`;
   const main = `${rules.length > 0 ? `<section class="told" aria-label="Told to misbehave"><ul>${rules.map(ruleHtml).join('')}</ul></section>` : ''}
-<form class="filter" action="/" method="get"><label for="to">Mail to</label><input id="to" name="to" type="email" autocomplete="off" value="${escapeHtml(to ?? '')}"><button class="button">Show</button></form>
+<form class="filter" action="/" method="get"><label for="to">Mail to</label><input id="to" name="to" type="email" autocomplete="off" value="${escapeHtml(to ?? '')}"><button class="button" type="submit">Show</button></form>
 ${messages.length === 0 ? empty : `<ol class="messages">\n${messages.map(rowHtml).join('\n')}\n</ol>`}
 ${olderHref ? `<p><a href="${olderHref}">Older mail</a></p>` : ''}
-${count === 0 ? '' : '<form action="/messages/delete" method="post"><button class="button danger">Delete all messages</button></form>'}`;
+${count === 0 ? '' : '<form action="/messages/delete" method="post"><button class="button danger" type="submit">Delete all messages</button></form>'}`;
   return page('Outbox', block, main);
 }
 
@@ -124,7 +124,7 @@ function headerRows(message: Message): string {
     ['Goes back to, if it cannot be delivered', envelope.from || 'nobody'],
     ['Replies go to', replyTo],
     ['Written', date && WHEN.format(new Date(date))],
-    ['Its own name', messageId],
+    ['Message-ID', messageId],
     ['Part of the list', first('list-id')],
     ['Leaving the list', first('list-unsubscribe')],
     ['Leaving in one click', headers['list-unsubscribe-post'] && 'yes'],
@@ -153,9 +153,9 @@ ${cell('Kept', timeHtml(receivedAt))}
 ${headerRows(message)}
 </dl>
 ${html === undefined ? '' : `<section><h2>As a mail program shows it</h2><iframe title="The mail as it is shown" sandbox="allow-popups allow-popups-to-escape-sandbox" src="/messages/${id}/shown"></iframe></section>`}
-<section><h2>As plain text</h2><pre class="text" tabindex="0" role="region" aria-label="The plain text">${linkedText(text)}</pre></section>
+<section><h2>As plain text</h2><pre class="text">${linkedText(text)}</pre></section>
 ${files.length === 0 ? '' : `<section><h2>Attached</h2><ul>${files.join('')}</ul></section>`}
-<details><summary>Source, ${sizeText(Buffer.byteLength(source))}</summary><pre tabindex="0" role="region" aria-label="The source">${escapeHtml(source.slice(0, 65_536))}</pre></details>
+<details><summary>Source, ${sizeText(Buffer.byteLength(source))}</summary><pre>${escapeHtml(source.slice(0, 65_536))}</pre></details>
 <p><a href="/messages/${id}.eml">Download the message as a file</a></p>`;
   return page(`${subject || 'Without a subject'} · Outbox`, block, main);
 }
