@@ -1,0 +1,27 @@
+import { type Logger } from 'pino';
+
+/** How the page cache took part: `miss` is a public page rendered now, `none` everything else. */
+export type CacheUse = 'hit' | 'miss' | 'none';
+
+export type RequestFacts = {
+  readonly requestId: string;
+  readonly method: string | undefined;
+  /** Without its query: queries carry what people typed. */
+  readonly path: string;
+  readonly status: number;
+  /** Times from `performance.now()`. */
+  readonly startedAt: number;
+  readonly cache: CacheUse;
+  /** The client left before the answer was whole. */
+  readonly aborted?: boolean;
+};
+
+/** Writes the one line of a request. */
+export function logRequest(log: Logger, facts: RequestFacts): void {
+  const { requestId, method, path, status, startedAt, cache, aborted } = facts;
+  const ms = Math.round((performance.now() - startedAt) * 10) / 10;
+  log.info(
+    { requestId, method, path, status, ms, cache, ...(aborted === true ? { aborted } : {}) },
+    'request',
+  );
+}
