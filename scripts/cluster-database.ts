@@ -42,3 +42,13 @@ export async function ensureDatabase(superuserUrl: string, password: string): Pr
     await client.end();
   }
 }
+
+/** Takes the product's database away with everything in it. */
+export async function dropDatabase(superuserUrl: string): Promise<void> {
+  const client = await connect(superuserUrl);
+  try {
+    await client.query('drop database if exists centrepop with (force)');
+  } finally {
+    await client.end();
+  }
+}

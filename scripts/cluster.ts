@@ -26,6 +26,10 @@ export type ClusterOptions = {
   readonly dataDir: string;
   /** False for throwaway clusters: faster, and lost when the machine fails. */
   readonly durable?: boolean;
+  /** The port that others already connect to, when it is started again under them. */
+  readonly port?: number;
+  /** Called as soon as there is a process to stop. */
+  readonly onSpawn?: (running: Running) => void;
 };
 
 const THROWAWAY = ['fsync=off', 'full_page_writes=off', 'synchronous_commit=off', 'max_wal_size=4GB'];
@@ -90,13 +94,14 @@ async function becomesReady(ended: Promise<string>, superuserUrl: string, logFil
  * Starts the private cluster of a copy, making it first when there is none.
  * @throws Trouble in one sentence when it cannot be used
  */
-export async function startCluster({ dataDir, durable = true }: ClusterOptions): Promise<Cluster> {
+export async function startCluster(options: ClusterOptions): Promise<Cluster> {
+  const { dataDir, durable = true } = options;
   const folder = ensureCluster(dataDir, durable);
   await endOrphan(folder);
   const kept = keepOrMakeUp(dataDir);
   const logFile = join(dataDir, 'postgres.log');
   for (let attempt = 1; ; attempt += 1) {
-    const port = await choosePort(dataDir, 'postgres');
+    const port = options.port ?? (await choosePort(dataDir, 'postgres'));
     const before = readLog(logFile);
     const child = spawnServer(folder, port, logFile, durable);
     const ended = watchEnd(child);
@@ -105,6 +110,7 @@ export async function startCluster({ dataDir, durable = true }: ClusterOptions):
         ['SIGINT', 20],
         ['SIGQUIT', 5],
       ]);
+    options.onSpawn?.({ pid: child.pid, ended, stop });
     const superuserUrl = urlFor('postgres', kept.superuserPassword, port, 'postgres');
     try {
       if (await becomesReady(ended, superuserUrl, logFile)) {

@@ -20,7 +20,7 @@ function forwardSignals() {
   forwarding = true;
   for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP'])) {
     process.on(signal, () => {
-      if (running.size === 0) return;
+      if (running.size === 0 && process.listenerCount(signal) === 1) process.exit(130);
       for (const child of running) child.kill(signal);
     });
   }
