@@ -2,6 +2,7 @@ import { readdir, readFile, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import { createTransport } from 'nodemailer';
 import { afterEach, beforeEach, expect, test } from 'vitest';
+import { startFakeSmtp } from '../../../fake-smtp/start.ts';
 import { openOutbox, type Outbox } from '../../support/outbox.ts';
 import { throwawayFolder } from '../../support/throwaway.ts';
 import { converse, converseToData } from './conversation.ts';
@@ -129,6 +130,18 @@ test('a folder that cannot be written to is named in the refusal to start', asyn
   await writeFile(file, '');
   await expect(openOutbox({ path: path.join(file, 'mail'), remove: folder.remove })).rejects.toThrow(
     `The folder ${path.join(file, 'mail')} cannot be used`,
+  );
+  folder.remove();
+});
+
+test('a port that is taken, by mail or by the page, is named and leaves nothing running', async () => {
+  const folder = throwawayFolder('outbox');
+  const pagePort = Number(new URL(outbox.page).port);
+  await expect(startFakeSmtp({ folder: folder.path, pagePort })).rejects.toThrow(
+    `Port ${String(pagePort)} on 127.0.0.1 is in use by another program.`,
+  );
+  await expect(startFakeSmtp({ folder: folder.path, port: outbox.port })).rejects.toThrow(
+    `Port ${String(outbox.port)} on 127.0.0.1 is in use by another program.`,
   );
   folder.remove();
 });

@@ -89,23 +89,15 @@ async function failure(env: Record<string, string>) {
 }
 
 test('what keeps it from starting is said in a sentence, and it ends with 1', async () => {
-  const { child, port, pagePort } = await start();
-  const inUse = (taken: number) => `Port ${String(taken)} on 127.0.0.1 is in use by another program.\n`;
-  const other = path.join(folder.path, 'other');
+  const { child, port } = await start();
   const failures = await Promise.all([
     failure({ FAKE_SMTP_DIR: '' }),
-    failure({ FAKE_SMTP_DIR: `${MAIN}/mail` }),
-    failure({ FAKE_SMTP_DIR: other, FAKE_SMTP_PORT: String(port) }),
-    failure({ FAKE_SMTP_DIR: other, FAKE_SMTP_PAGE_PORT: String(pagePort) }),
+    failure({ FAKE_SMTP_DIR: path.join(folder.path, 'other'), FAKE_SMTP_PORT: String(port) }),
   ]);
-  expect(failures).toEqual(
-    [
-      'FAKE_SMTP_DIR must name the folder to keep mail in.\n',
-      `The folder ${MAIN}/mail cannot be used (ENOTDIR).\n`,
-      inUse(port),
-      inUse(pagePort),
-    ].map((err) => ({ code: 1, out: '', err })),
-  );
+  expect(failures).toEqual([
+    { code: 1, out: '', err: 'FAKE_SMTP_DIR must name the folder to keep mail in.\n' },
+    { code: 1, out: '', err: `Port ${String(port)} on 127.0.0.1 is in use by another program.\n` },
+  ]);
   child.disconnect();
   expect(await once(child, 'exit')).toEqual([0, null]);
 });
