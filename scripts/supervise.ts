@@ -68,7 +68,9 @@ async function startAll(
 ) {
   const { root, mode } = options;
   const dataDir = resolve(root, settings.DATA_DIR);
+  // Before the port: to whoever starts it twice this says more than that the port is in use.
   await openDataDir(dataDir);
+  await checkWebPort(settings.HOST, settings.PORT);
   const place = { root, dataDir, given, settings, print: printAs };
   const standIns = await startStandIns(supervisor, place, options.durable ?? true);
   const env = serviceEnvironment({ ...given, DATA_DIR: dataDir }, settings, keepOrMakeUp(dataDir), standIns);
@@ -94,6 +96,7 @@ async function startOne(
   const env = { ...given, DATA_DIR: resolve(root, settings.DATA_DIR) };
   const services: ServiceOptions = { root, mode, env, settings, print: () => console.log };
   const isWeb = settings.ROLE === 'web';
+  if (isWeb) await checkWebPort(settings.HOST, settings.PORT);
   await supervisor.start(isWeb ? webPart(services) : workerPart(services));
   supervisor.tell(isWeb ? `The web server is running: ${settings.PUBLIC_URL}` : 'The worker is running.');
   sayReady(env);
@@ -112,7 +115,6 @@ export async function supervise(options: SuperviseOptions): Promise<number> {
   });
   stopWhenAsked(supervisor);
   try {
-    if (settings.ROLE !== 'worker') await checkWebPort(settings.HOST, settings.PORT);
     await (settings.ROLE === 'all' ? startAll : startOne)(supervisor, options, given, settings);
   } catch (error) {
     await supervisor.fail(error);
