@@ -15,6 +15,20 @@ export default defineConfig({
     // The front server has checked Host and overwritten x-forwarded-* before a request comes here.
     allowedDomains: [{}],
   },
+  experimental: {
+    // Hashes only, sent as a header; the middleware adds what is known at run time.
+    csp: {
+      directives: [
+        "default-src 'self'",
+        "object-src 'none'",
+        "base-uri 'none'",
+        "form-action 'self'",
+        "frame-ancestors 'none'",
+        "img-src 'self' data:",
+        "font-src 'self'",
+      ],
+    },
+  },
   vite: {
     plugins: [tailwindcss()],
     ssr: { noExternal: ['zod'] },

@@ -13,7 +13,9 @@ interface Journal {
 }
 
 /** Thrown when this code cannot work with the database it was given. */
-export class DatabaseVersionError extends Error {}
+export class DatabaseVersionError extends Error {
+  override readonly name = 'DatabaseVersionError';
+}
 
 function migrationsFolder(): string {
   // From src/db when run by tsx, from dist when bundled.
@@ -26,10 +28,12 @@ function readJournal(): Journal {
 }
 
 async function lastApplied(client: pg.ClientBase): Promise<number> {
+  const { rows: tables } = await client.query<{ made: boolean }>(
+    `select to_regclass('drizzle.__drizzle_migrations') is not null as made`,
+  );
+  if (!tables[0]?.made) return 0;
   const { rows } = await client.query<{ at: string | null }>(
-    `select case when to_regclass('drizzle.__drizzle_migrations') is null then null
-            else (xpath('/row/at/text()', query_to_xml('select max(created_at) as at from drizzle.__drizzle_migrations', false, true, '')))[1]::text
-            end as at`,
+    'select max(created_at) as at from drizzle.__drizzle_migrations',
   );
   return Number(rows[0]?.at ?? 0);
 }

@@ -179,3 +179,13 @@ export function readServiceSettings(source?: Readonly<Record<string, string | un
   }
   return { ...settings, INSTALLATION_ID: settings.INSTALLATION_ID ?? 'centrepop' } as ServiceSettings;
 }
+
+/**
+ * The database alone, for commands that need nothing else.
+ * @throws SettingsError when DATABASE_URL is not set
+ */
+export function readDatabaseUrl(source?: Readonly<Record<string, string | undefined>>): string {
+  const url = (source ?? process.env)['DATABASE_URL'];
+  if (url === undefined || url === '') throw new SettingsError(['DATABASE_URL must be set.']);
+  return url;
+}

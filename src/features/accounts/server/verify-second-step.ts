@@ -1,0 +1,19 @@
+import { callAuth } from '../../../server/auth/call-auth.ts';
+import { hintCookie } from '../../../server/auth/cookies.ts';
+import { verb } from '../../../server/verb.ts';
+import { DONE } from '../account.ts';
+
+/** The second step of signing in: the app's six digits, or one of the recovery codes, which is used up. */
+export const verifySecondStep = verb(
+  { may: 'account.enter', transaction: false },
+  async (context, { kind, code }: { kind: 'code' | 'recovery'; code: string }) => {
+    const { api } = context.services.auth;
+    await callAuth(context, (headers) =>
+      kind === 'code'
+        ? api.verifyTOTP({ body: { code: code.replace(/\s/g, '') }, headers, returnHeaders: true })
+        : api.verifyBackupCode({ body: { code }, headers, returnHeaders: true }),
+    );
+    context.setCookies.push(hintCookie(context.services.settings, true));
+    return DONE;
+  },
+);

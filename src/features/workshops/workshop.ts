@@ -1,0 +1,129 @@
+import { z } from 'zod';
+import { INVITED_ROLES, TEAM_ROLES } from '../../domain/roles.ts';
+import { email } from '../../domain/email-address.ts';
+
+export const WORKSHOP_NAME_LENGTH = 80;
+export const SLUG_LENGTH = { min: 3, max: 40 } as const;
+
+/** Address names that the product keeps for itself, or that would mislead. */
+export const RESERVED_SLUGS: readonly string[] = [
+  'admin',
+  'api',
+  'bench',
+  'centrepop',
+  'everyone',
+  'feed',
+  'help',
+  'media',
+  'new',
+  'official',
+  'search',
+  'settings',
+  'staff',
+  'support',
+  'team',
+  'www',
+];
+
+export const workshopName = z
+  .string('Enter a name.')
+  .trim()
+  .normalize('NFC')
+  .min(1, 'Enter a name.')
+  .max(WORKSHOP_NAME_LENGTH, `Keep the name to ${String(WORKSHOP_NAME_LENGTH)} characters.`)
+  .refine((name) => /[\p{L}\p{N}]/u.test(name), 'Use at least one letter or digit.')
+  .refine((name) => !/[\p{Cc}\p{Cf}]/u.test(name), 'Leave out invisible characters.');
+
+/** The workshop's name in addresses. */
+export const workshopSlug = z
+  .string('Enter an address name.')
+  .trim()
+  .toLowerCase()
+  .min(SLUG_LENGTH.min, `Use at least ${String(SLUG_LENGTH.min)} characters.`)
+  .max(SLUG_LENGTH.max, `Use at most ${String(SLUG_LENGTH.max)} characters.`)
+  .regex(/^[a-z0-9]+(-[a-z0-9]+)*$/, 'Use the letters a to z, digits, and single hyphens between them.')
+  .refine((slug) => !RESERVED_SLUGS.includes(slug), 'That name is kept for the product. Choose another.');
+
+const timeZone = z
+  .string('Choose a time zone.')
+  .refine(
+    (zone) => Intl.supportedValuesOf('timeZone').includes(zone) || zone === 'UTC',
+    'Choose a time zone from the list.',
+  );
+
+/** Languages that captions and pages can be marked as; BCP 47 primary subtags. */
+export const LANGUAGES = [
+  { value: 'en', label: 'English' },
+  { value: 'de', label: 'German' },
+  { value: 'es', label: 'Spanish' },
+  { value: 'fr', label: 'French' },
+  { value: 'it', label: 'Italian' },
+  { value: 'nl', label: 'Dutch' },
+  { value: 'pl', label: 'Polish' },
+  { value: 'pt', label: 'Portuguese' },
+  { value: 'sv', label: 'Swedish' },
+] as const;
+const language = z.enum(
+  LANGUAGES.map(({ value }) => value),
+  'Choose a language from the list.',
+);
+
+/**
+ * An address name to start from.
+ * @returns the name in plain letters with hyphens; empty when nothing of it can be kept
+ */
+export function suggestSlug(name: string): string {
+  return name
+    .normalize('NFKD')
+    .replace(/\p{M}/gu, '')
+    .toLowerCase()
+    .replace(/[^a-z0-9]+/g, '-')
+    .replace(/^-+|-+$/g, '')
+    .slice(0, SLUG_LENGTH.max)
+    .replace(/-+$/, '');
+}
+
+export const MakeWorkshopInput = z
+  .object({ name: workshopName, slug: z.string().trim().optional(), timeZone })
+  .transform((input, context) => {
+    const parsed = workshopSlug.safeParse(input.slug || suggestSlug(input.name));
+    if (parsed.success) return { ...input, slug: parsed.data };
+    context.addIssue({ code: 'custom', path: ['slug'], message: parsed.error.issues[0]?.message ?? '' });
+    return z.NEVER;
+  });
+
+const version = z.coerce.number('Open the page again.').int().min(1);
+export const workshopParam = z.object({ workshop: z.string().min(1) });
+
+export const ChangeSettingsInput = z.object({
+  name: workshopName,
+  slug: workshopSlug,
+  timeZone,
+  language,
+  editorsMaySeeOrders: z.union([z.literal('on').transform(() => true), z.boolean()]).default(false),
+  version,
+});
+export type ChangeSettings = z.output<typeof ChangeSettingsInput>;
+
+export const InviteInput = z.object({ email, role: z.enum(INVITED_ROLES, 'Choose editor or moderator.') });
+export type Invite = z.output<typeof InviteInput>;
+
+export const ChangeRoleInput = z.object({ role: z.enum(TEAM_ROLES, 'Choose owner, editor or moderator.') });
+export const idParam = z.uuid('That is not an id of ours.');
+
+/** How long an invitation holds, in days. */
+export const INVITATION_DAYS = 14;
+
+export const MadeWorkshop = z.object({ slug: z.string() });
+export const MadeId = z.object({ id: z.uuid() });
+export const AcceptInput = z.object({
+  token: z.string('The link is not whole. Open it from the mail again.').max(200),
+});
+
+/** The time zones to choose from. */
+export function timeZoneOptions(): { value: string; label: string }[] {
+  return ['UTC', ...Intl.supportedValuesOf('timeZone').filter((zone) => zone !== 'UTC')].map((zone) => ({
+    value: zone,
+    label: zone.replaceAll('_', ' '),
+  }));
+}

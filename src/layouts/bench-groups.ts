@@ -1,0 +1,53 @@
+import { may } from '../domain/permissions.ts';
+import { type Standing } from '../domain/roles.ts';
+import { paths } from '../paths.ts';
+
+/** A labelled group of links in the menu of the signed-in side. */
+export interface BenchGroup {
+  readonly label?: string | undefined;
+  readonly items: readonly {
+    readonly label: string;
+    readonly href: string;
+    readonly current?: boolean | undefined;
+    /** How many things wait there. */
+    readonly count?: number | undefined;
+  }[];
+}
+
+/**
+ * The menu of one workshop's bench for a role.
+ * @param here the path of the page that shows it
+ */
+export function benchGroups(
+  workshop: { readonly slug: string; readonly name: string },
+  role: Standing,
+  here: string,
+): readonly BenchGroup[] {
+  const item = (label: string, href: string) => ({ label, href, current: here === href });
+  return [
+    { items: [item('Today', paths.today(workshop.slug))] },
+    {
+      label: workshop.name,
+      items: [
+        item('Team', paths.team(workshop.slug)),
+        ...(may(role, 'workshop.change-settings')
+          ? [item('Settings', paths.workshopSettings(workshop.slug))]
+          : []),
+      ],
+    },
+  ];
+}
+
+/** The menu outside any workshop. */
+export function accountGroups(
+  workshops: readonly { readonly slug: string; readonly name: string }[],
+  here: string,
+): readonly BenchGroup[] {
+  const item = (label: string, href: string) => ({ label, href, current: here === href });
+  return [
+    ...(workshops.length > 0
+      ? [{ label: 'Workshops', items: workshops.map(({ name, slug }) => item(name, paths.today(slug))) }]
+      : []),
+    { label: 'You', items: [item('Account', paths.account()), item('Make a workshop', paths.newWorkshop())] },
+  ];
+}

@@ -1,0 +1,80 @@
+import { TOTP } from 'otpauth';
+import { confirmAddress } from '../features/accounts/server/confirm-address.ts';
+import { confirmSecondFactor } from '../features/accounts/server/confirm-second-factor.ts';
+import { signUp } from '../features/accounts/server/sign-up.ts';
+import { startSecondFactor } from '../features/accounts/server/start-second-factor.ts';
+import { readSession } from '../server/auth/session.ts';
+import { type Context } from '../server/context.ts';
+import { type Services } from '../server/services.ts';
+import { findTenant } from '../server/tenant.ts';
+
+/** Someone of the demo, signed in. */
+export interface Person {
+  readonly name: string;
+  readonly email: string;
+  readonly headers: Headers;
+}
+
+/** The demo's people all have the same password: it exists only on a loopback address. */
+export const DEMO_PASSWORD = 'press-and-mill';
+
+/**
+ * The context in which someone of the demo acts.
+ * @param person null for nobody signed in
+ */
+export async function contextFor(
+  services: Services,
+  person: Person | null,
+  workshopSlug: string | null,
+): Promise<Context> {
+  const headers = person?.headers ?? new Headers();
+  const { actor } = await readSession(services.auth, services.settings, headers);
+  const tenant = workshopSlug === null ? null : await findTenant(services.db, workshopSlug, actor);
+  return {
+    db: services.db,
+    actor,
+    workshop: tenant?.workshop ?? null,
+    role: tenant?.role ?? (actor.kind === 'account' ? 'viewer' : 'anyone'),
+    now: new Date(),
+    requestId: 'seed',
+    services,
+    headers,
+    setCookies: [],
+  };
+}
+
+/**
+ * Signs someone up, confirms the address and signs in.
+ * @param tokenFor gives the token of the confirmation mail that was made for a name
+ */
+export async function makePerson(
+  services: Services,
+  person: { readonly name: string; readonly email: string },
+  tokenFor: (name: string) => string,
+): Promise<Person> {
+  const context = await contextFor(services, null, null);
+  await signUp(context, { ...person, password: DEMO_PASSWORD });
+  await confirmAddress(context, { token: tokenFor(person.name), password: DEMO_PASSWORD });
+  return { ...person, headers: cookieHeaders(context.setCookies) };
+}
+
+/**
+ * Sets up a second factor.
+ * @returns the person with the session that has it, and the key for an authenticator app
+ */
+export async function addSecondFactor(
+  services: Services,
+  person: Person,
+): Promise<{ readonly person: Person; readonly key: string }> {
+  const context = await contextFor(services, person, null);
+  const { secret } = await startSecondFactor(context, { password: DEMO_PASSWORD });
+  await confirmSecondFactor(context, { code: new TOTP({ secret }).generate() });
+  return { person: { ...person, headers: cookieHeaders(context.setCookies) }, key: secret };
+}
+
+function cookieHeaders(setCookies: readonly string[]): Headers {
+  const jar = new Map(
+    setCookies.map((line) => (line.split(';')[0] ?? '').split(/=(.*)/s) as [string, string]),
+  );
+  return new Headers({ cookie: [...jar].map(([name, value]) => `${name}=${value}`).join('; ') });
+}

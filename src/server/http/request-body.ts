@@ -1,0 +1,40 @@
+import { BadRequest } from '../errors.ts';
+
+export interface RequestBody {
+  readonly kind: 'json' | 'form' | 'none';
+  readonly values: Readonly<Record<string, unknown>>;
+}
+
+/**
+ * Reads a body as a record of values, once.
+ * @throws BadRequest when it is neither JSON nor a plain form, or not what it says
+ */
+export async function readBody(request: Request): Promise<RequestBody> {
+  const type = request.headers.get('content-type')?.split(';')[0]?.trim().toLowerCase() ?? '';
+  if (type === 'application/x-www-form-urlencoded')
+    return { kind: 'form', values: formValues(await request.text()) };
+  if (type === 'application/json') return { kind: 'json', values: jsonValues(await request.text()) };
+  if ((await request.text()) === '') return { kind: 'none', values: {} };
+  throw new BadRequest('Send a form or JSON. Nothing was changed.');
+}
+
+function jsonValues(text: string): Record<string, unknown> {
+  try {
+    const value: unknown = JSON.parse(text);
+    if (typeof value === 'object' && value !== null && !Array.isArray(value))
+      return value as Record<string, unknown>;
+  } catch {
+    // Said below, in one sentence for all that is not an object.
+  }
+  throw new BadRequest('The body is not a JSON object. Nothing was changed.');
+}
+
+function formValues(text: string): Record<string, unknown> {
+  const form = new URLSearchParams(text);
+  return Object.fromEntries(
+    [...new Set(form.keys())].map((key) => {
+      const all = form.getAll(key);
+      return [key, all.length > 1 ? all : all[0]];
+    }),
+  );
+}

@@ -1,0 +1,126 @@
+import { type SQL, sql } from 'drizzle-orm';
+import PgBoss from 'pg-boss';
+import { v5 as uuidv5 } from 'uuid';
+import { type Database } from '../../db/client.ts';
+import { type EventIds, type EventName } from '../../domain/events.ts';
+import { type Services } from '../services.ts';
+
+const EVENTS_QUEUE = 'events';
+export const DEAD_LETTERS = 'dead-letters';
+
+export interface EventJob {
+  readonly event: EventName;
+  readonly ids: EventIds;
+}
+
+/** Reads the rows again by their ids; running it twice does no harm, and rows that are gone end it quietly. */
+export type JobHandler = (services: Services, ids: EventIds) => Promise<void>;
+
+/** A job: its queue's name, how often to try, and its handler, imported when it first runs. */
+export interface JobDefinition {
+  readonly name: string;
+  readonly on: EventName;
+  readonly tries: number;
+  readonly retryDelaySeconds: number;
+  readonly load: () => Promise<JobHandler>;
+}
+
+export interface JobQueue {
+  readonly boss: PgBoss;
+  /**
+   * Tells what happened, in the caller's transaction: it is told exactly if that commits.
+   * @throws when the queue does not take it
+   */
+  enqueue(db: Database, event: EventName, ids: EventIds): Promise<void>;
+  close(): Promise<void>;
+}
+
+/**
+ * Joins the job queue. The worker looks after the queue's tables; other processes only send.
+ * @param url postgres://…
+ * @param options.maintain true in the worker
+ */
+export async function openJobQueue(
+  url: string,
+  options: { readonly maintain: boolean; readonly onError: (error: Error) => void },
+): Promise<JobQueue> {
+  const boss = new PgBoss({
+    connectionString: url,
+    max: options.maintain ? 6 : 2,
+    migrate: false,
+    supervise: options.maintain,
+    schedule: options.maintain,
+    // A killed worker's job comes back after this long, not after two minutes.
+    maintenanceIntervalSeconds: 15,
+    monitorStateIntervalSeconds: 30,
+  });
+  boss.on('error', options.onError);
+  await boss.start();
+  await createQueue(boss, DEAD_LETTERS);
+  await createQueue(boss, EVENTS_QUEUE);
+  return {
+    boss,
+    async enqueue(db, event, ids) {
+      const id = await boss.send(EVENTS_QUEUE, { event, ids } satisfies EventJob, {
+        db: { executeSql: (text, values) => executeInTransaction(db, text, values) },
+        retryLimit: 5,
+        retryBackoff: true,
+        expireInSeconds: 60,
+      });
+      if (id === null) throw new Error(`The event ${event} was not taken by the queue.`);
+    },
+    close: () => boss.stop({ graceful: true, wait: true, timeout: 10_000 }),
+  };
+}
+
+async function createQueue(boss: PgBoss, name: string): Promise<void> {
+  await boss.createQueue(name, name === DEAD_LETTERS ? { name } : { name, deadLetter: DEAD_LETTERS });
+}
+
+/** Runs pg-boss's numbered placeholders through Drizzle, so that its insert is part of our transaction. */
+async function executeInTransaction(
+  db: Database,
+  text: string,
+  values: unknown[],
+): Promise<{ rows: unknown[] }> {
+  const pieces = text.split(/\$(\d+)/);
+  const statement = pieces.map((piece, index): SQL =>
+    index % 2 === 0 ? sql.raw(piece) : sql`${sql.param(values[Number(piece) - 1])}`,
+  );
+  const { rows } = await db.execute(sql.join(statement));
+  return { rows };
+}
+
+/**
+ * Works through the queue: each event goes to the queue of every job that asked for it; each job then runs by
+ * itself and is tried again by itself.
+ * @param definitions the static table of jobs
+ * @param run given a job and its ids; throws to be tried again
+ */
+export async function workQueue(
+  queue: JobQueue,
+  definitions: readonly JobDefinition[],
+  run: (definition: JobDefinition, ids: EventIds, jobId: string) => Promise<void>,
+): Promise<void> {
+  const { boss } = queue;
+  for (const definition of definitions) await createQueue(boss, definition.name);
+  await boss.work<EventJob>(EVENTS_QUEUE, { pollingIntervalSeconds: 0.5 }, async ([job]) => {
+    if (!job) return;
+    for (const definition of definitions) {
+      if (definition.on !== job.data.event) continue;
+      await boss.send(definition.name, job.data.ids, {
+        // Handed out twice by a worker killed between send and completion, it still runs once.
+        id: uuidv5(definition.name, job.id),
+        retryLimit: definition.tries - 1,
+        retryDelay: definition.retryDelaySeconds,
+        retryBackoff: true,
+        expireInSeconds: 120,
+      });
+    }
+  });
+  for (const definition of definitions) {
+    await boss.work<EventIds>(definition.name, { pollingIntervalSeconds: 0.5 }, async ([job]) => {
+      if (job) await run(definition, job.data, job.id);
+    });
+  }
+}

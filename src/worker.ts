@@ -1,0 +1,22 @@
+import { sendInvitationJob } from './features/workshops/jobs.ts';
+import { liveUntilStopped, startProcess } from './process-life.ts';
+import { openProcessServices } from './process-services.ts';
+import { readServiceSettings } from './server/env.ts';
+import { type JobDefinition, workQueue } from './server/jobs/queue.ts';
+
+/** Every job there is. */
+const JOBS: readonly JobDefinition[] = [sendInvitationJob];
+
+await startProcess(async () => {
+  const services = await openProcessServices(readServiceSettings(), 'worker');
+  await workQueue(services.jobs, JOBS, async (definition, ids, jobId) => {
+    const handle = await definition.load();
+    try {
+      await handle(services, ids);
+    } catch (error) {
+      services.log.warn({ job: definition.name, jobId, err: error }, 'A job failed and is tried again.');
+      throw error;
+    }
+  });
+  liveUntilStopped({}, () => services.close());
+});
