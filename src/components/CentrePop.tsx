@@ -52,7 +52,7 @@ export function PopDot({ tone }: { readonly tone: PopTone }) {
     <>
       <circle r="6" className={tone === 'mark' ? 'fill-none' : 'fill-sheet'} stroke="currentColor" />
       {tone === 'brass' ? (
-        <circle r="2.5" fill="none" stroke="currentColor" />
+        <circle r="2.75" fill="none" stroke="currentColor" strokeWidth="1.5" />
       ) : (
         <circle r="3" fill="currentColor" className={tone === 'mark' ? 'fill-brass' : undefined} />
       )}
