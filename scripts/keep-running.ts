@@ -1,4 +1,3 @@
-import { setTimeout as wait } from 'node:timers/promises';
 import { type Part } from './part.ts';
 import { type Running } from './running.ts';
 import { describe } from './trouble.mjs';
@@ -47,7 +46,7 @@ export function keepRunning<T extends Running>(
       return false;
     }
     tell(`${part.name} ${how}; starting it again.`);
-    await wait(100 * 2 ** recent);
+    await new Promise((resolve) => setTimeout(resolve, 100 * 2 ** recent));
     return !stopping;
   }
 
