@@ -15,6 +15,7 @@ import { createHash } from 'node:crypto';
 import { readdir } from 'node:fs/promises';
 import { join } from 'node:path';
 import { afterEach, beforeEach, expect, test } from 'vitest';
+import { filesIn, waitFor } from './disk-watch.ts';
 import { sendSigned } from './raw-request.ts';
 import { BUCKET, bytesOf, refusal, startStandIn, type StandIn } from './stand-in.ts';
 
@@ -73,6 +74,19 @@ test('an upload of three parts becomes one object, readable in ranges across the
   expect(Buffer.from(await range.Body!.transformToByteArray()).equals(whole.subarray(from, to + 1))).toBe(
     true,
   );
+});
+
+test('a reader of an object that is replaced meanwhile gets every part of it, and then they are gone', async () => {
+  // The first part is more than the connection buffers, so the second is opened after the replacement.
+  const pieces = [bytesOf(16 * MIB), Buffer.from('the end')];
+  const uploadId = await create();
+  const parts = await Promise.all(pieces.map((piece, index) => upload(uploadId, index + 1, piece)));
+  await complete(uploadId, parts);
+  const reading = await get();
+  await standIn.s3.send(new PutObjectCommand({ Bucket, Key, Body: 'replaced' }));
+  const read = Buffer.from(await reading.Body!.transformToByteArray());
+  expect(read.equals(Buffer.concat(pieces))).toBe(true);
+  await waitFor(() => filesIn(join(standIn.folder, 'data')) === 1);
 });
 
 test('parts and uploads are listed while under way, and neither afterwards', async () => {
