@@ -1,5 +1,9 @@
 const part = encodeURIComponent;
 
+function onBench(workshop: string, build: string, rest = ''): string {
+  return `/bench/${part(workshop)}/${part(build)}${rest === '' ? '' : `/${rest}`}`;
+}
+
 /** A path that stays on this site: anything else, such as //elsewhere.example, becomes the front page of the bench. */
 export function ownPath(path: string | null | undefined): string {
   return path !== null && path !== undefined && /^\/(?![/\\])[^\\\s]*$/.test(path) ? path : paths.bench();
@@ -9,6 +13,19 @@ export function ownPath(path: string | null | undefined): string {
 export const paths = {
   frontDoor: () => '/',
   workshop: (workshop: string) => `/w/${part(workshop)}`,
+  workshopFeed: (workshop: string) => `/w/${part(workshop)}/feed.xml`,
+  build: (workshop: string, build: string) => `/w/${part(workshop)}/${part(build)}`,
+  buildFeed: (workshop: string, build: string) => `/w/${part(workshop)}/${part(build)}/feed.xml`,
+  /** @param at seconds into the episode, the one time form in addresses */
+  episode: (workshop: string, build: string, number: number, at?: number) =>
+    `/w/${part(workshop)}/${part(build)}/episodes/${String(number)}${at === undefined ? '' : `?t=${String(at)}`}`,
+  episodePrint: (workshop: string, build: string, number: number) =>
+    `/w/${part(workshop)}/${part(build)}/episodes/${String(number)}/print`,
+  episodeCaptions: (workshop: string, build: string, number: number, captions: string) =>
+    `/w/${part(workshop)}/${part(build)}/episodes/${String(number)}/captions/${part(captions)}.vtt`,
+  part: (workshop: string, build: string, partId: string) =>
+    `/w/${part(workshop)}/${part(build)}/parts/${part(partId)}`,
+  media: (file: string, variant: string) => `/media/${part(file)}/${part(variant)}`,
 
   signUp: () => '/sign-up',
   checkMail: () => '/sign-up/check-mail',
@@ -30,6 +47,23 @@ export const paths = {
   today: (workshop: string) => `/bench/${part(workshop)}`,
   team: (workshop: string) => `/bench/${part(workshop)}/team`,
   workshopSettings: (workshop: string) => `/bench/${part(workshop)}/settings`,
+  newBuild: (workshop: string) => `/bench/${part(workshop)}/new`,
+  storage: (workshop: string) => `/bench/${part(workshop)}/storage`,
+  benchBuild: (workshop: string, build: string) => onBench(workshop, build),
+  diary: (workshop: string, build: string) => onBench(workshop, build, 'diary'),
+  stages: (workshop: string, build: string) => onBench(workshop, build, 'stages'),
+  parts: (workshop: string, build: string) => onBench(workshop, build, 'parts'),
+  importParts: (workshop: string, build: string) => onBench(workshop, build, 'parts/import'),
+  footage: (workshop: string, build: string) => onBench(workshop, build, 'footage'),
+  buildSettings: (workshop: string, build: string) => onBench(workshop, build, 'settings'),
+  episodes: (workshop: string, build: string) => onBench(workshop, build, 'episodes'),
+  episodesOutAlready: (workshop: string, build: string) => onBench(workshop, build, 'episodes/out-already'),
+  desk: (workshop: string, build: string, episode: string) =>
+    onBench(workshop, build, `episodes/${part(episode)}`),
+  publish: (workshop: string, build: string, episode: string) =>
+    onBench(workshop, build, `episodes/${part(episode)}/publish`),
+  preview: (workshop: string, build: string, episode: string) =>
+    onBench(workshop, build, `episodes/${part(episode)}/preview`),
 
   api: {
     me: () => '/api/me',
@@ -44,6 +78,10 @@ export const paths = {
     removeMember: (workshop: string, member: string) =>
       `/api/workshops/${part(workshop)}/team/${part(member)}/remove`,
     leaveTeam: (workshop: string) => `/api/workshops/${part(workshop)}/team/leave`,
+    /** @param rest what of the workshop, such as `builds` or `builds/press/parts`; ids and names are safe in it */
+    inWorkshop: (workshop: string, rest: string) => `/api/workshops/${part(workshop)}/${rest}`,
+    inBuild: (workshop: string, build: string, rest: string) =>
+      `/api/workshops/${part(workshop)}/builds/${part(build)}/${rest}`,
     acceptInvitation: (invitation: string) => `/api/invitations/${part(invitation)}/accept`,
   },
 } as const;

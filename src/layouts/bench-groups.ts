@@ -17,19 +17,42 @@ export interface BenchGroup {
 /**
  * The menu of one workshop's bench for a role.
  * @param here the path of the page that shows it
+ * @param build the build that the page is about, if it is about one
  */
 export function benchGroups(
   workshop: { readonly slug: string; readonly name: string },
   role: Standing,
   here: string,
+  build?: { readonly slug: string; readonly name: string },
 ): readonly BenchGroup[] {
-  const item = (label: string, href: string) => ({ label, href, current: here === href });
+  const item = (label: string, href: string) => ({
+    label,
+    href,
+    current: here === href || (build !== undefined && here.startsWith(`${href}/`)),
+  });
+  const today = paths.today(workshop.slug);
   return [
-    { items: [item('Today', paths.today(workshop.slug))] },
+    { items: [{ label: 'Today', href: today, current: here === today }] },
+    ...(build
+      ? [
+          {
+            label: build.name,
+            items: [
+              item('Diary', paths.diary(workshop.slug, build.slug)),
+              item('Stages', paths.stages(workshop.slug, build.slug)),
+              item('Parts', paths.parts(workshop.slug, build.slug)),
+              item('Footage', paths.footage(workshop.slug, build.slug)),
+              item('Episodes', paths.episodes(workshop.slug, build.slug)),
+              item('This build', paths.buildSettings(workshop.slug, build.slug)),
+            ],
+          },
+        ]
+      : []),
     {
       label: workshop.name,
       items: [
         item('Team', paths.team(workshop.slug)),
+        item('Storage', paths.storage(workshop.slug)),
         ...(may(role, 'workshop.change-settings')
           ? [item('Settings', paths.workshopSettings(workshop.slug))]
           : []),

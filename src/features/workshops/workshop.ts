@@ -1,9 +1,10 @@
 import { z } from 'zod';
+import { lineOfText } from '../../domain/plain-text.ts';
+import { slugSchema, suggestSlug } from '../../domain/slugs.ts';
 import { INVITED_ROLES, TEAM_ROLES } from '../../domain/roles.ts';
 import { email } from '../../domain/email-address.ts';
 
 export const WORKSHOP_NAME_LENGTH = 80;
-export const SLUG_LENGTH = { min: 3, max: 40 } as const;
 
 /** Address names that the product keeps for itself, or that would mislead. */
 export const RESERVED_SLUGS: readonly string[] = [
@@ -25,24 +26,13 @@ export const RESERVED_SLUGS: readonly string[] = [
   'www',
 ];
 
-export const workshopName = z
-  .string('Enter a name.')
-  .trim()
-  .normalize('NFC')
-  .min(1, 'Enter a name.')
-  .max(WORKSHOP_NAME_LENGTH, `Keep the name to ${String(WORKSHOP_NAME_LENGTH)} characters.`)
-  .refine((name) => /[\p{L}\p{N}]/u.test(name), 'Use at least one letter or digit.')
-  .refine((name) => !/[\p{Cc}\p{Cf}]/u.test(name), 'Leave out invisible characters.');
+export const workshopName = lineOfText('Enter a name.', WORKSHOP_NAME_LENGTH).refine(
+  (name) => /[\p{L}\p{N}]/u.test(name),
+  'Use at least one letter or digit.',
+);
 
 /** The workshop's name in addresses. */
-export const workshopSlug = z
-  .string('Enter an address name.')
-  .trim()
-  .toLowerCase()
-  .min(SLUG_LENGTH.min, `Use at least ${String(SLUG_LENGTH.min)} characters.`)
-  .max(SLUG_LENGTH.max, `Use at most ${String(SLUG_LENGTH.max)} characters.`)
-  .regex(/^[a-z0-9]+(-[a-z0-9]+)*$/, 'Use the letters a to z, digits, and single hyphens between them.')
-  .refine((slug) => !RESERVED_SLUGS.includes(slug), 'That name is kept for the product. Choose another.');
+export const workshopSlug = slugSchema(RESERVED_SLUGS);
 
 const timeZone = z
   .string('Choose a time zone.')
@@ -67,21 +57,6 @@ const language = z.enum(
   LANGUAGES.map(({ value }) => value),
   'Choose a language from the list.',
 );
-
-/**
- * An address name to start from.
- * @returns the name in plain letters with hyphens; empty when nothing of it can be kept
- */
-export function suggestSlug(name: string): string {
-  return name
-    .normalize('NFKD')
-    .replace(/\p{M}/gu, '')
-    .toLowerCase()
-    .replace(/[^a-z0-9]+/g, '-')
-    .replace(/^-+|-+$/g, '')
-    .slice(0, SLUG_LENGTH.max)
-    .replace(/-+$/, '');
-}
 
 export const MakeWorkshopInput = z
   .object({ name: workshopName, slug: z.string().trim().optional(), timeZone })
@@ -113,6 +88,9 @@ export const idParam = z.uuid('That is not an id of ours.');
 
 /** How long an invitation holds, in days. */
 export const INVITATION_DAYS = 14;
+
+/** What the token of an invitation's link is signed for. */
+export const INVITATION_PURPOSE = 'invitation';
 
 export const MadeWorkshop = z.object({ slug: z.string() });
 export const MadeId = z.object({ id: z.uuid() });
