@@ -48,10 +48,14 @@ export async function ensurePackages(root) {
   if (packagesMatch(root)) return;
   console.log('Installing the npm packages …');
   // NODE_ENV=production would leave out the packages that build and check.
-  const { status, output } = await runCommand('npm', ['ci', '--include=dev', '--no-audit', '--no-fund'], {
-    cwd: root,
-    env: { npm_config_progress: 'false' },
-  });
+  const { status, output } = await runCommand(
+    'npm',
+    ['ci', '--include=dev', '--prefer-offline', '--no-audit', '--no-fund'],
+    {
+      cwd: root,
+      env: { npm_config_progress: 'false' },
+    },
+  );
   if (status === 0) return;
   console.error(output.trimEnd());
   if (/ENOSPC/.test(output)) {

@@ -7,6 +7,10 @@ export type Summary = {
   readonly accounts: readonly DemoAccount[];
 };
 
+function inWords(name: string): string {
+  return name.replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`);
+}
+
 /** The lines that are printed when everything runs. */
 export function summarise({ url, outboxUrl, accounts }: Summary): string {
   const lines = ['', `Centrepop is running: ${url}`];
@@ -14,8 +18,9 @@ export function summarise({ url, outboxUrl, accounts }: Summary): string {
   if (accounts.length > 0) {
     lines.push('Demo accounts:');
     const width = Math.max(...accounts.map(({ email = '' }) => email.length));
-    for (const { email = '', password = '', ...rest } of accounts) {
-      lines.push(`  ${email.padEnd(width)}  ${password}  ${Object.values(rest).join(', ')}`.trimEnd());
+    for (const { email = '', password = '', role = '', ...rest } of accounts) {
+      const more = Object.entries(rest).map(([name, value]) => `, ${inWords(name)}: ${value}`);
+      lines.push(`  ${email.padEnd(width)}  ${password}  ${role}${more.join('')}`.trimEnd());
     }
   }
   lines.push('Ctrl-C stops it.', '');

@@ -6,7 +6,7 @@ test('the summary names the address, the outbox and the accounts in columns', ()
     url: 'http://127.0.0.1:4321',
     outboxUrl: 'http://127.0.0.1:20001',
     accounts: [
-      { email: 'ada@workshop.test', password: 'first', role: 'owner' },
+      { email: 'ada@workshop.test', password: 'first', role: 'owner', secondFactorKey: 'ABC' },
       { email: 'jo@workshop.test', password: 'second', role: 'moderator' },
     ],
   });
@@ -16,7 +16,7 @@ test('the summary names the address, the outbox and the accounts in columns', ()
       'Centrepop is running: http://127.0.0.1:4321',
       'Its mail is kept here:  http://127.0.0.1:20001',
       'Demo accounts:',
-      '  ada@workshop.test  first  owner',
+      '  ada@workshop.test  first  owner, second factor key: ABC',
       '  jo@workshop.test   second  moderator',
       'Ctrl-C stops it.',
       '',
