@@ -3,7 +3,9 @@ import { type AddressInfo } from 'node:net';
 import { DEFAULT_TIMES, type FrontServerOptions } from './front-options.ts';
 import { prepareGracefulStop } from './graceful-stop.ts';
 import { createRequestHandler } from './handle-request.ts';
+import { openKeptPageLane } from './kept-page-lane.ts';
 import { DEFAULT_CACHE_BYTES, PageCache } from './page-cache.ts';
+import { keptPageAnswers } from './serve-kept-page.ts';
 
 export type FrontServer = {
   /** The port listened on. */
@@ -35,8 +37,17 @@ export async function startFrontServer(options: FrontServerOptions): Promise<Fro
   server.maxHeadersCount = MOST_HEADERS;
   server.timeout = times.stalled;
 
-  const graceful = prepareGracefulStop(server, times.drain);
-  const handle = createRequestHandler(options, times, cache, () => graceful.isDraining());
+  const host = new URL(options.publicUrl).host;
+  const isDraining = () => graceful.isDraining();
+  const lane = openKeptPageLane(server, {
+    answer: keptPageAnswers({ cache, host, log: options.log, isDraining }, times.keepAlive),
+    firstMs: times.headers,
+    idleMs: times.keepAlive,
+  });
+  const graceful = prepareGracefulStop(server, times.drain, () => {
+    lane.close();
+  });
+  const handle = createRequestHandler(options, times, cache, isDraining);
   server.on('request', (req, res) => {
     handle(req, res);
   });

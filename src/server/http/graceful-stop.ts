@@ -13,8 +13,9 @@ export type GracefulStop = {
 /**
  * Watches a server's connections so that it can be stopped without cutting requests off.
  * @param drainMs how long requests in flight may take to finish
+ * @param onStop called as the stop begins, for connections that the server does not know
  */
-export function prepareGracefulStop(server: Server, drainMs: number): GracefulStop {
+export function prepareGracefulStop(server: Server, drainMs: number, onStop: () => void): GracefulStop {
   const sockets = new Set<Socket>();
   let stopping: Promise<void> | undefined;
   server.on('connection', (socket) => {
@@ -28,6 +29,7 @@ export function prepareGracefulStop(server: Server, drainMs: number): GracefulSt
         resolve();
       });
     });
+    onStop();
     // Browsers open connections ahead of need; Node counts those as busy until their first request.
     for (const socket of sockets) if (socket.bytesRead === 0) socket.destroy();
     // An answer whose headers left before the stop keeps its connection; it is idle once the answer is done.
@@ -35,7 +37,7 @@ export function prepareGracefulStop(server: Server, drainMs: number): GracefulSt
       server.closeIdleConnections();
     }, IDLE_CHECK_MS);
     const deadline = setTimeout(() => {
-      server.closeAllConnections();
+      for (const socket of sockets) socket.destroy();
     }, drainMs);
     server.closeIdleConnections();
     await closed;

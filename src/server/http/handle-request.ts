@@ -26,7 +26,7 @@ export function createRequestHandler(
   const { log } = options;
   const publicUrl = new URL(options.publicUrl);
   const everyAnswer = securityHeaders(options.publicUrl);
-  const serveKeptPage = keptPageServer(cache, publicUrl.host, isDraining, log);
+  const serveKeptPage = keptPageServer({ cache, host: publicUrl.host, log, isDraining });
   const judgeHost = hostChecker(publicUrl);
   const findClientAddress = clientAddressFinder(options.trustedProxies);
   const runApplication = createApplication(options, {

@@ -3,23 +3,31 @@ import { type PageForm } from './page-forms.ts';
 import { matchesEtag } from './page-negotiation.ts';
 import { type CapturedAnswer } from './page-render.ts';
 
+type Asked = {
+  readonly requestId: string;
+  readonly ifNoneMatch: string | undefined;
+  /** Asked by HEAD. */
+  readonly bodyless: boolean;
+};
+
 /**
  * Sends one form of a page, or 304 when the client has it.
  * @returns the status sent
  */
 export function sendPageForm(
-  req: IncomingMessage,
   res: ServerResponse,
   form: PageForm,
-  requestId: string,
+  { requestId, ifNoneMatch, bodyless }: Asked,
 ): number {
-  const fresh = matchesEtag(req.headers['if-none-match'], form.etag);
-  const head = [...(fresh ? form.notModifiedHead : form.head), 'X-Request-Id', requestId];
-  const status = fresh ? 304 : 200;
-  res.writeHead(status, head);
-  if (fresh || req.method === 'HEAD') res.end();
+  if (matchesEtag(ifNoneMatch, form.etag)) {
+    res.writeHead(304, [...form.notModifiedHead, 'X-Request-Id', requestId]);
+    res.end();
+    return 304;
+  }
+  res.writeHead(200, [...form.head, 'X-Request-Id', requestId]);
+  if (bodyless) res.end();
   else res.end(form.body);
-  return status;
+  return 200;
 }
 
 /** Sends an answer that was rendered for a public path but is not kept: a redirect, an error. */

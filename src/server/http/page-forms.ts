@@ -11,6 +11,9 @@ export type PageForm = {
   readonly body: Buffer;
   readonly head: readonly string[];
   readonly notModifiedHead: readonly string[];
+  /** The same as they go on the wire, status line first, without the empty line at the end. */
+  readonly headText: string;
+  readonly notModifiedText: string;
 };
 
 /** A page as it is kept: every form, made once. */
@@ -76,25 +79,34 @@ export async function makePageForm(
   const etag = encoding === 'identity' ? `"${hash}"` : `"${hash}-${encoding}"`;
   const body = await encode(answer.body, encoding);
   const freshness = ['Cache-Control', 'public, no-cache', 'Vary', 'Accept-Encoding', 'ETag', etag];
+  const head = [
+    ...sharedHead(answer, everyAnswer),
+    ...freshness,
+    ...(encoding === 'identity' ? [] : ['Content-Encoding', encoding]),
+    'Content-Length',
+    String(body.length),
+  ];
+  // The browser keeps the page's own headers with the page; a 304 repeats only what concerns the keeping.
+  const notModifiedHead = [...freshness, ...everyAnswer.flat()];
   return {
     etag,
     body,
-    // The browser keeps the page's own headers with the page; a 304 repeats only what concerns the keeping.
-    notModifiedHead: [...freshness, ...everyAnswer.flat()],
-    head: [
-      ...sharedHead(answer, everyAnswer),
-      ...freshness,
-      ...(encoding === 'identity' ? [] : ['Content-Encoding', encoding]),
-      'Content-Length',
-      String(body.length),
-    ],
+    head,
+    notModifiedHead,
+    headText: `HTTP/1.1 200 OK\r\n${headerLines(head)}`,
+    notModifiedText: `HTTP/1.1 304 Not Modified\r\n${headerLines(notModifiedHead)}`,
   };
+}
+
+/** Names and values have been looked over by Node when they were set. */
+function headerLines(flat: readonly string[]): string {
+  return flat.map((text, at) => (at % 2 === 0 ? `${text}: ` : `${text}\r\n`)).join('');
 }
 
 /** The bytes that keeping a page costs, its headers counted roughly. */
 export function keptSize(page: KeptPage): number {
   return [page.identity, page.gzip, page.br].reduce(
-    (sum, form) => sum + form.body.length + form.head.join('').length + form.notModifiedHead.join('').length,
+    (sum, form) => sum + form.body.length + 2 * (form.headText.length + form.notModifiedText.length),
     1_000,
   );
 }

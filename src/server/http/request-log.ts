@@ -16,10 +16,15 @@ export type RequestFacts = {
   readonly aborted?: boolean;
 };
 
+/** Milliseconds since a time of `performance.now()`, to a tenth. */
+export function millisecondsSince(startedAt: number): number {
+  return Math.round((performance.now() - startedAt) * 10) / 10;
+}
+
 /** Writes the one line of a request. */
 export function logRequest(log: Logger, facts: RequestFacts): void {
   const { requestId, method, path, status, startedAt, cache, aborted } = facts;
-  const ms = Math.round((performance.now() - startedAt) * 10) / 10;
+  const ms = millisecondsSince(startedAt);
   log.info(
     { requestId, method, path, status, ms, cache, ...(aborted === true ? { aborted } : {}) },
     'request',

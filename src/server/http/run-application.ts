@@ -79,7 +79,8 @@ export function createApplication(options: FrontServerOptions, setup: Applicatio
       answer.kind === 'page' && (await answer.form(choosePageEncoding(req.headers['accept-encoding'])));
     if (res.destroyed) return;
     if (form !== false) {
-      sendPageForm(req, res, form, requestId);
+      const bodyless = req.method === 'HEAD';
+      sendPageForm(res, form, { requestId, ifNoneMatch: req.headers['if-none-match'], bodyless });
     } else if (answer.kind === 'other') {
       compress(req, res, () => {
         sendCaptured(req, res, answer.answer, query);
