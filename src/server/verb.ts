@@ -25,6 +25,8 @@ type ContextFor<P extends Permission> = P extends WorkshopPermission
 export interface Ruled<Input, Result> {
   (context: Context, input: Input): Promise<Result>;
   readonly rule: Rule & { readonly kind: 'write' | 'read' };
+  /** The rule alone, before anything of the input is looked at. @throws as the verb itself does */
+  readonly check: (context: Context) => void;
 }
 
 /**
@@ -35,14 +37,17 @@ export function verb<P extends Permission, Input, Result>(
   rule: Rule<P>,
   handler: (context: ContextFor<P>, input: Input) => Promise<Result>,
 ): Ruled<Input, Result> {
-  async function ruled(context: Context, input: Input): Promise<Result> {
+  const check = (context: Context) => {
     requireMay(context, rule.may);
+  };
+  async function ruled(context: Context, input: Input): Promise<Result> {
+    check(context);
     if (rule.transaction === false) return handler(context as ContextFor<P>, input);
     return (context.db as NodePgDatabase).transaction((db) =>
       handler({ ...context, db } as Context as ContextFor<P>, input),
     );
   }
-  return Object.assign(ruled, { rule: { ...rule, kind: 'write' as const } });
+  return Object.assign(ruled, { rule: { ...rule, kind: 'write' as const }, check });
 }
 
 /** A read: checks the rule, then runs the handler. Never writes. */
@@ -50,11 +55,14 @@ export function read<P extends Permission, Input, Result>(
   rule: Rule<P>,
   handler: (context: ContextFor<P>, input: Input) => Promise<Result>,
 ): Ruled<Input, Result> {
-  async function ruled(context: Context, input: Input): Promise<Result> {
+  const check = (context: Context) => {
     requireMay(context, rule.may);
+  };
+  async function ruled(context: Context, input: Input): Promise<Result> {
+    check(context);
     return handler(context as ContextFor<P>, input);
   }
-  return Object.assign(ruled, { rule: { ...rule, kind: 'read' as const } });
+  return Object.assign(ruled, { rule: { ...rule, kind: 'read' as const }, check });
 }
 
 function requireMay(context: Context, permission: Permission): void {

@@ -40,7 +40,8 @@ export interface RuledRoute extends APIRoute {
 export const NONE = z.object({});
 
 /**
- * Makes an Astro endpoint of a verb or a read: origin and limits checked, input parsed once, errors mapped once.
+ * Makes an Astro endpoint of a verb or a read: origin, rule and limits checked, input parsed once, errors mapped
+ * once. The workshop is the one that the path names as `[workshop]`.
  * JSON in gives JSON out; a plain form in gives 303, or its page again with what was entered.
  */
 export function apiRoute<P extends Shape, B extends Shape, Result, A extends z.ZodType>(
@@ -54,14 +55,15 @@ export function apiRoute<P extends Shape, B extends Shape, Result, A extends z.Z
       if (writes && rule.origin !== 'any')
         requireOwnOrigin(context.request.headers, parts.services.settings.PUBLIC_URL);
       body = writes ? await readBody(context.request) : queryOf(context.url);
+      const asked = await contextOf(parts, context.params['workshop'] ?? null);
+      // Before the input is looked at: who may not learns nothing of what would have been taken.
+      rule.verb.check(asked);
       const input = {
         ...parse(rule.params, context.params),
         ...parse(rule.body, body.values),
       } as z.output<P> & z.output<B>;
       await countTries(rule.limit ?? [], parts, input);
-      const workshop =
-        'workshop' in input && typeof input['workshop'] === 'string' ? input['workshop'] : null;
-      const result = await rule.verb(await contextOf(parts, workshop), input);
+      const result = await rule.verb(asked, input);
       if (body.kind === 'form' && rule.form) return await answerForm(context, rule.form, result, input);
       return Response.json(rule.answer.parse(result) ?? null, { headers: { 'cache-control': 'no-store' } });
     } catch (error) {
