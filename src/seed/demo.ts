@@ -1,13 +1,6 @@
-import { eq } from 'drizzle-orm';
-import { invitations } from '../db/schema/workshops.ts';
-import { type InvitedRole } from '../domain/roles.ts';
-import { acceptInvitation } from '../features/workshops/server/accept-invitation.ts';
-import { inviteMember } from '../features/workshops/server/invite-member.ts';
-import { INVITATION_PURPOSE } from '../features/workshops/server/load-open-invitation.ts';
 import { makeWorkshop } from '../features/workshops/server/make-workshop.ts';
-import { signToken } from '../server/auth/signed-token.ts';
 import { type Services } from '../server/services.ts';
-import { addSecondFactor, contextFor, DEMO_PASSWORD, makePerson, type Person } from './people.ts';
+import { addSecondFactor, contextFor, DEMO_PASSWORD, joinTeam, makePerson } from './people.ts';
 
 const SLUG = 'marram-lane';
 
@@ -39,8 +32,18 @@ export async function seedDemo(
     timeZone: 'Europe/London',
   });
   const { person: owner, key } = await addSecondFactor(services, made);
-  await join(services, owner, await makePerson(services, PEOPLE.editor, tokenFor), 'editor');
-  await join(services, owner, await makePerson(services, PEOPLE.moderator, tokenFor), 'moderator');
+  await joinTeam(
+    services,
+    { owner, slug: SLUG },
+    await makePerson(services, PEOPLE.editor, tokenFor),
+    'editor',
+  );
+  await joinTeam(
+    services,
+    { owner, slug: SLUG },
+    await makePerson(services, PEOPLE.moderator, tokenFor),
+    'moderator',
+  );
   await makePerson(services, PEOPLE.viewer, tokenFor);
   await makePerson(services, PEOPLE.builder, tokenFor);
   return Object.entries(PEOPLE).map(([who, { email }]) => ({
@@ -49,17 +52,4 @@ export async function seedDemo(
     password: DEMO_PASSWORD,
     ...(who === 'owner' && { secondFactorKey: key }),
   }));
-}
-
-async function join(services: Services, owner: Person, person: Person, role: InvitedRole): Promise<void> {
-  await inviteMember(await contextFor(services, owner, SLUG), { email: person.email, role });
-  const [invitation] = await services.db
-    .select({ id: invitations.id })
-    .from(invitations)
-    .where(eq(invitations.email, person.email));
-  if (!invitation) throw new Error(`The invitation of ${person.email} was not kept.`);
-  await acceptInvitation(await contextFor(services, person, null), {
-    invitation: invitation.id,
-    token: signToken(services.settings.AUTH_SECRET, INVITATION_PURPOSE, invitation.id),
-  });
 }

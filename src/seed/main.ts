@@ -4,6 +4,7 @@ import { startProcess } from '../process-life.ts';
 import { isLoopback, readServiceSettings } from '../server/env.ts';
 import { openServices } from '../server/services.ts';
 import { seedDemo } from './demo.ts';
+import { keepConfirmations } from './people.ts';
 
 // Prints one line of JSON an account.
 await startProcess(async () => {
@@ -16,25 +17,14 @@ await startProcess(async () => {
       },
     );
   }
-  const tokens = new Map<string, string>();
-  const mails = accountMails(settings.PUBLIC_URL);
+  const { mails, tokenFor } = keepConfirmations(accountMails(settings.PUBLIC_URL));
   const services = await openServices({
     settings,
     log: pino({ name: 'seed', level: 'warn' }, pino.destination(2)),
-    accountMails: {
-      ...mails,
-      confirmAddress: (props) => {
-        tokens.set(props.name, props.token);
-        return mails.confirmAddress(props);
-      },
-    },
+    accountMails: mails,
     worker: false,
   });
-  const accounts = await seedDemo(services, (name) => {
-    const token = tokens.get(name);
-    if (token === undefined) throw new Error(`No confirmation was mailed to ${name}.`);
-    return token;
-  });
+  const accounts = await seedDemo(services, tokenFor);
   await services.close();
   process.stdout.write(accounts.map((account) => `${JSON.stringify(account)}\n`).join(''));
 });

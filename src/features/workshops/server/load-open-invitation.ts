@@ -4,9 +4,7 @@ import { invitations, workshops, workshopSlugs } from '../../../db/schema/worksh
 import { isSignedToken } from '../../../server/auth/signed-token.ts';
 import { type Context } from '../../../server/context.ts';
 import { NotFound } from '../../../server/errors.ts';
-
-/** What the token of an invitation's link is signed for. */
-export const INVITATION_PURPOSE = 'invitation';
+import { INVITATION_PURPOSE } from '../workshop.ts';
 
 /** Reads an invitation that still holds, by its mailed link. @throws NotFound */
 export async function loadOpenInvitation({ db, services, now }: Context, id: string, token: string) {

@@ -5,8 +5,7 @@ import { paths } from '../../../paths.ts';
 import { signToken } from '../../../server/auth/signed-token.ts';
 import { type JobHandler } from '../../../server/jobs/queue.ts';
 import { invitationMail } from '../emails.ts';
-import { INVITATION_DAYS } from '../workshop.ts';
-import { INVITATION_PURPOSE } from './load-open-invitation.ts';
+import { INVITATION_DAYS, INVITATION_PURPOSE } from '../workshop.ts';
 
 /** Mails an invitation that still waits. Its link is the same however often it is mailed. */
 export const sendInvitation: JobHandler = async ({ db, mailer, settings }, ids) => {
