@@ -8,6 +8,7 @@ import {
   pgEnum,
   pgTable,
   primaryKey,
+  smallint,
   text,
   unique,
   uuid,
@@ -37,6 +38,12 @@ export const files = pgTable(
     failure: text('failure'),
     /** Of the multipart upload, while state is uploading. */
     uploadId: text('upload_id'),
+    /** SHA-256 of the first and the last MiB: by it a file chosen again is known. */
+    fingerprint: text('fingerprint'),
+    /** How often checking has begun: what breaks the worker each time is given up. */
+    checkTries: smallint('check_tries').notNull().default(0),
+    /** Of the playable copy, in hundredths, while it is made. */
+    progress: smallint('progress'),
     /** Found by content once accepted. */
     kind: fileKind('kind'),
     contentType: text('content_type'),
@@ -76,6 +83,8 @@ export const fileVariants = pgTable(
     bytes: bigint('bytes', { mode: 'number' }).notNull(),
     width: integer('width'),
     height: integer('height'),
+    /** Of a filmstrip: how many pictures stand side by side, at even times. */
+    frames: integer('frames'),
     createdAt: timestamps().createdAt,
   },
   (table) => [
