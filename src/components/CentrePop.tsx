@@ -15,7 +15,7 @@ const LINES: Record<PopTone, string> = {
   dye: 'text-dye',
   brass: 'text-brass-text',
   primer: 'text-primer',
-  mark: 'text-on-dye',
+  mark: 'text-on-dye forced-colors:text-[LinkText]',
   faint: 'text-ink-faint',
 };
 

@@ -18,7 +18,7 @@ export function Segments({ label, hideLabel = false, name, options, value, onCha
         {options.map((option) => (
           <label
             key={option.value}
-            className="flex min-h-7 cursor-pointer items-center border-ink px-3 text-sm font-medium not-first:border-s hover:bg-dye-wash has-checked:bg-ink has-checked:font-bold has-checked:text-sheet has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-brass forced-colors:has-checked:bg-[Highlight] forced-colors:has-checked:text-[HighlightText]"
+            className="flex min-h-7 cursor-pointer items-center border-ink px-3 text-sm font-medium not-first:border-s hover:bg-dye-wash has-checked:bg-ink has-checked:font-bold has-checked:text-sheet has-focus-visible:outline-2 has-focus-visible:outline-offset-2 has-focus-visible:outline-brass forced-colors:has-checked:bg-[Highlight] forced-colors:has-checked:text-[HighlightText] forced-colors:has-checked:forced-color-adjust-none"
           >
             <input
               type="radio"
