@@ -53,6 +53,8 @@ export const ACCOUNT_PERMISSIONS = {
   'workshop.make': ['viewer'],
   'invitation.read': ['viewer', 'anyone'],
   'invitation.accept': ['viewer'],
+  // An address of media names no workshop; who may see it follows from where it is shown.
+  'media.ask': ['viewer', 'anyone'],
 } as const satisfies Record<string, readonly Standing[]>;
 
 export type WorkshopPermission = keyof typeof WORKSHOP_PERMISSIONS;

@@ -8,6 +8,7 @@ import { type ServiceSettings } from './env.ts';
 import { type JobQueue, openJobQueue } from './jobs/queue.ts';
 import { openRateLimiter, type RateLimiter } from './limits/rate-limiter.ts';
 import { type Mailer, openMailer } from './mail/send-mail.ts';
+import { openStorage, type Storage } from './storage/storage.ts';
 
 /** What one process works with; opened once, handed on in the context. */
 export interface Services {
@@ -16,6 +17,7 @@ export interface Services {
   readonly auth: Auth;
   readonly mailer: Mailer;
   readonly jobs: JobQueue;
+  readonly storage: Storage;
   readonly limiter: RateLimiter;
   readonly log: Logger;
   /** Whether the database answers. */
@@ -46,6 +48,7 @@ export async function openServices(parts: {
     onError: (error) => log.warn({ error: error.message }, 'The job queue met an error.'),
   });
   const mailer = openMailer(settings, log);
+  const storage = openStorage(settings, log);
   const onTheirWay = new Set<Promise<void>>();
   function sendLater(to: string, mail: Mail): void {
     const sending = mailer
@@ -62,6 +65,7 @@ export async function openServices(parts: {
     auth: openAuth({ settings, db: database.db, mails: parts.accountMails, log, sendLater }),
     mailer,
     jobs,
+    storage,
     limiter: openRateLimiter(database.pool),
     log,
     isHealthy: async () => {
@@ -71,6 +75,7 @@ export async function openServices(parts: {
     close: async () => {
       await Promise.allSettled(onTheirWay);
       await mailer.close();
+      storage.close();
       await jobs.close();
       await database.close();
     },

@@ -8,6 +8,10 @@ import { type Services } from '../services.ts';
 const EVENTS_QUEUE = 'events';
 export const DEAD_LETTERS = 'dead-letters';
 
+/** A job whose worker says nothing for so long is given to another. */
+const LIVING_SECONDS = 120;
+const TELL_MS = 20_000;
+
 export interface EventJob {
   readonly event: EventName;
   readonly ids: EventIds;
@@ -19,7 +23,10 @@ export type JobHandler = (services: Services, ids: EventIds) => Promise<void>;
 /** A job: its queue's name, how often to try, and its handler, imported when it first runs. */
 export interface JobDefinition {
   readonly name: string;
-  readonly on: EventName;
+  /** The event it follows, or when it runs by itself: five fields of cron, in UTC. */
+  readonly on: EventName | { readonly cron: string };
+  /** Set for long work: a job of a worker that lives may take so long; of one that was killed it is back sooner. */
+  readonly longestSeconds?: number;
   readonly tries: number;
   readonly retryDelaySeconds: number;
   readonly load: () => Promise<JobHandler>;
@@ -114,13 +121,41 @@ export async function workQueue(
         retryLimit: definition.tries - 1,
         retryDelay: definition.retryDelaySeconds,
         retryBackoff: true,
-        expireInSeconds: 120,
+        expireInSeconds: definition.longestSeconds ?? LIVING_SECONDS,
       });
     }
   });
   for (const definition of definitions) {
+    if (typeof definition.on === 'object') await boss.schedule(definition.name, definition.on.cron);
     await boss.work<EventIds>(definition.name, { pollingIntervalSeconds: 0.5 }, async ([job]) => {
-      if (job) await run(definition, job.data, job.id);
+      if (!job) return;
+      // What a schedule sends has no ids.
+      const work = () => run(definition, (job.data as EventIds | null) ?? {}, job.id);
+      await (definition.longestSeconds === undefined
+        ? work()
+        : whileAlive(boss, definition.name, job.id, work));
     });
+  }
+}
+
+/** Runs long work and keeps telling the queue that its worker lives, so that a killed one is noticed soon. */
+async function whileAlive(boss: PgBoss, name: string, id: string, work: () => Promise<void>): Promise<void> {
+  const database = boss.getDb();
+  const tell = () =>
+    database.executeSql(
+      // The queue asks whether started_on + expire_in has passed; trying again sets started_on anew.
+      `update pgboss.job set started_on = now() - expire_in + $3 * interval '1 second'
+       where name = $1 and id = $2 and state = 'active'`,
+      [name, id, LIVING_SECONDS],
+    );
+  await tell();
+  const timer = setInterval(() => {
+    // A database that is away for a moment is told the next time.
+    void tell().catch(() => undefined);
+  }, TELL_MS);
+  try {
+    await work();
+  } finally {
+    clearInterval(timer);
   }
 }
