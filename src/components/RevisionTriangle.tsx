@@ -28,7 +28,8 @@ export function RevisionTriangle({ letter, state = 'released', size = 28 }: Revi
       <text x="14" y="22" textAnchor="middle" className="fill-current font-mono text-[13px] font-semibold">
         {letter}
       </text>
-      {past && <path d="M3 21L25 13" stroke="currentColor" strokeWidth="1.25" />}
+      {past && <path d="M3 21L25 13" stroke="currentColor" />}
+      {state === 'withdrawn' && <path d="M3 13L25 21" stroke="currentColor" />}
     </svg>
   );
 }

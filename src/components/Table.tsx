@@ -33,12 +33,12 @@ export function Table({ caption, hideCaption = false, columns, rows = [], empty,
     return (
       // A frame that scrolls has to be reachable by keyboard.
       // eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex
-      <div className="overflow-x-auto" role="region" aria-label={caption} tabIndex={0}>
+      <section className="overflow-x-auto" aria-label={caption} tabIndex={0}>
         <table className="ruled-table">
           {head}
           {children}
         </table>
-      </div>
+      </section>
     );
   }
   return (

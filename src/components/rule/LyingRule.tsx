@@ -1,14 +1,10 @@
 import { useId } from 'react';
-import { joinClasses } from '../join-classes.ts';
-import { BalloonMark, PopMark } from './RuleMarks.tsx';
 import { RuleChapters } from './RuleChapters.tsx';
 import { type RuleData } from './rule-data.ts';
 import { RuleScale } from './RuleScale.tsx';
-import { placeForAllWidths } from './rule-widths.ts';
+import { BalloonStrips, PopStrips } from './RuleStrips.tsx';
 
 const FACE = 46;
-const BALLOON_GAP = 31;
-const POP_GAP = 24;
 
 /** All strips start at the rule's zero; the face goes on past both ends, with the hole to hang it by. */
 const STRIP = 'ms-4 w-[calc(100%-3.75rem)] overflow-visible';
@@ -26,41 +22,10 @@ export function LyingRule({
 }: RuleData) {
   const hatch = useId();
   const percent = (at: number) => `${String(Math.round((at / length) * 100_000) / 1000)}%`;
-  const shares = (marks: readonly { readonly at: number }[]) => marks.map(({ at }) => at / length);
-  const above = balloons.toSorted(byTime);
-  const below = pops.toSorted(byTime);
-
+  const strip = { length, percent, className: STRIP };
   return (
     <div className="@container">
-      {placeForAllWidths(shares(above), BALLOON_GAP).map(({ className, places, rows }) => {
-        const height = 14 + rows * 30;
-        return (
-          <svg
-            key={className ?? 'all'}
-            height={height}
-            className={joinClasses(STRIP, className ?? 'block')}
-            aria-hidden={above.every(({ href }) => href === undefined)}
-          >
-            {above.map((mark, index) => (
-              <BalloonMark
-                key={mark.id}
-                mark={mark}
-                place={places[index] ?? { shift: 0, row: 0 }}
-                length={length}
-                edge={height}
-              />
-            ))}
-            {now !== undefined && (
-              <svg x={percent(now)} overflow="visible" data-rule-now="">
-                <path
-                  d={`M-6 ${String(height - 9)}H6L0 ${String(height)}Z`}
-                  className="fill-brass stroke-brass-text"
-                />
-              </svg>
-            )}
-          </svg>
-        );
-      })}
+      <BalloonStrips {...strip} marks={balloons.toSorted(byTime)} now={now} />
       <div className="steel border border-steel-edge">
         <svg height={FACE} className={`${STRIP} block`} aria-hidden="true">
           <pattern
@@ -95,22 +60,7 @@ export function LyingRule({
           )}
         </svg>
       </div>
-      {placeForAllWidths(shares(below), POP_GAP).map(({ className, places, rows }) => (
-        <svg
-          key={className ?? 'all'}
-          height={6 + rows * 24}
-          className={joinClasses(STRIP, className ?? 'block')}
-        >
-          {below.map((mark, index) => (
-            <PopMark
-              key={mark.id}
-              mark={mark}
-              place={places[index] ?? { shift: 0, row: 0 }}
-              length={length}
-            />
-          ))}
-        </svg>
-      ))}
+      <PopStrips {...strip} marks={pops.toSorted(byTime)} />
       <RuleChapters chapters={chapters.toSorted(byTime)} length={length} className={`${STRIP} block`} />
     </div>
   );

@@ -18,73 +18,72 @@ export function numberSize(label: string): string {
   return label.length <= 3 ? 'text-[12px]' : label.length === 4 ? 'text-[10px]' : 'text-[8px]';
 }
 
-type MarkProps<Mark> = { readonly mark: Mark; readonly place: PlacedMark; readonly length: number };
+/** From a balloon's centre down to the rule's upper edge, and from its lower edge down to a pop's centre. */
+const balloonY = (place: PlacedMark, edge: number) => edge - 28 - place.row * 30;
+const popY = (place: PlacedMark) => 14 + place.row * 24;
 
-/** A part above the rule, on its leader. `edge` is the rule's upper edge. */
-export function BalloonMark({
-  mark,
-  place,
-  length,
-  edge,
-}: MarkProps<RuleBalloon> & { readonly edge: number }) {
-  const y = edge - 28 - place.row * 30;
+type LeaderProps = { readonly x: string; readonly place: PlacedMark; readonly className: string };
+
+/** Leaders are drawn before all balloons, so that none crosses a number. */
+export function BalloonLeader({ x, place, edge, className }: LeaderProps & { readonly edge: number }) {
+  const y = balloonY(place, edge) + RADIUS;
+  return (
+    <svg x={x} overflow="visible" className={className}>
+      <path d={`M${String(place.shift)} ${String(y)}L0 ${String(edge - 1)}`} stroke="currentColor" />
+    </svg>
+  );
+}
+
+export function PopLeader({ x, place, className }: LeaderProps) {
+  return (
+    <svg x={x} overflow="visible" className={className}>
+      <path d={`M0 -5V0L${String(place.shift)} ${String(popY(place))}`} stroke="currentColor" fill="none" />
+    </svg>
+  );
+}
+
+type MarkProps<Mark> = { readonly mark: Mark; readonly place: PlacedMark; readonly x: string };
+
+/** A part above the rule. `edge` is the rule's upper edge. */
+export function BalloonMark({ mark, place, x, edge }: MarkProps<RuleBalloon> & { readonly edge: number }) {
+  const filled = mark.filled === true;
+  const name = mark.name === undefined ? '' : `, ${mark.name}`;
   const drawing = (
-    <>
-      <title>{`${mark.label}${mark.name === undefined ? '' : `, ${mark.name}`}, from ${formatClock(mark.at)}`}</title>
+    <g transform={`translate(${String(place.shift)} ${String(balloonY(place, edge))})`}>
+      <title>{`${mark.label}${name}, from ${formatClock(mark.at)}`}</title>
       <circle
-        cx={place.shift}
-        cy={y}
         r={RADIUS}
         strokeDasharray={mark.dashed === true ? '3 2.5' : undefined}
-        className={mark.filled === true ? 'fill-brass stroke-ink' : 'fill-sheet stroke-dye'}
+        className={filled ? 'fill-brass stroke-ink' : 'fill-sheet stroke-dye'}
       />
       <text
-        x={place.shift}
-        y={y}
         dy="0.35em"
         textAnchor="middle"
         className={joinClasses(
           'font-mono font-semibold',
           numberSize(mark.label),
-          mark.filled === true ? 'fill-on-brass' : 'fill-dye',
+          filled ? 'fill-on-brass' : 'fill-dye',
         )}
       >
         {mark.label}
       </text>
-    </>
+    </g>
   );
   return (
-    <svg
-      x={`${String((mark.at / length) * 100)}%`}
-      overflow="visible"
-      data-balloon={mark.id}
-      data-at={mark.at}
-    >
-      <path
-        d={`M${String(place.shift)} ${String(y + RADIUS)}L0 ${String(edge - 1)}`}
-        className={mark.filled === true ? 'stroke-brass-text' : 'stroke-dye'}
-      />
-      {mark.href === undefined ? <g>{drawing}</g> : <a href={mark.href}>{drawing}</a>}
+    <svg x={x} overflow="visible" data-balloon={mark.id} data-at={mark.at}>
+      {mark.href === undefined ? drawing : <a href={mark.href}>{drawing}</a>}
     </svg>
   );
 }
 
 /** A note below the rule: a link to its moment. Drawn from the rule's lower edge down. */
-export function PopMark({ mark, place, length }: MarkProps<RulePop>) {
+export function PopMark({ mark, place, x }: MarkProps<RulePop>) {
   const { label, tone } = NOTE_KINDS[mark.kind];
-  const y = 14 + place.row * 24;
   return (
-    <svg
-      x={`${String((mark.at / length) * 100)}%`}
-      overflow="visible"
-      className={TONE_TEXT[tone]}
-      data-pop={mark.id}
-      data-at={mark.at}
-    >
-      <path d={`M0 -5V0L${String(place.shift)} ${String(y)}`} stroke="currentColor" fill="none" />
+    <svg x={x} overflow="visible" className={TONE_TEXT[tone]} data-pop={mark.id} data-at={mark.at}>
       <a href={mark.href} aria-label={`${formatClock(mark.at)}, ${label}: ${mark.label}`}>
-        <title>{`${formatClock(mark.at)} ${label}: ${mark.label}`}</title>
-        <g transform={`translate(${String(place.shift)} ${String(y)})`}>
+        <g transform={`translate(${String(place.shift)} ${String(popY(place))})`}>
+          <title>{`${formatClock(mark.at)} ${label}: ${mark.label}`}</title>
           <rect x="-12" y="-12" width="24" height="24" fill="transparent" />
           <PopDot tone={tone} />
         </g>
