@@ -1,0 +1,48 @@
+import { eq } from 'drizzle-orm';
+import { anchors, notes } from '../../../db/schema/notes.ts';
+import { verb } from '../../../server/verb.ts';
+import { type Note, type NoteFields } from '../note.ts';
+import { announceNotes, requireMayChange } from './guard-published.ts';
+import { type EpisodeRef, loadEpisodeOfNotes } from './load-episode.ts';
+import { keepVersion, loadNoteAt } from './load-note.ts';
+import { loadNotes } from './load-notes.ts';
+import { anchorAt, requireKnown, writeParts } from './write-note.ts';
+
+type Change = NoteFields & EpisodeRef & { readonly note: string; readonly version: number };
+
+/**
+ * Changes a note; what it said before is kept. An unanswered question to one person stays unanswered.
+ * @throws Conflict with the stored note when someone saved it in the meantime
+ */
+export const changeNote = verb(
+  { may: 'draft-note.change' },
+  async (context, input: Change): Promise<Note> => {
+    const { db, now } = context;
+    const episode = await loadEpisodeOfNotes(context, input);
+    const { row, shown } = await loadNoteAt(context, episode, input);
+    if (!row.proposed) requireMayChange(context, episode, [row.kind, input.kind]);
+    await requireKnown(context, episode, input);
+    await keepVersion(context, shown);
+    const { kind, text, audience, askedId, standing, topic } = input;
+    const asked = audience === 'person' ? askedId : null;
+    await db
+      .update(notes)
+      .set({
+        kind,
+        text,
+        audience,
+        askedId: asked,
+        ...(asked !== row.askedId && { answer: null, answeredAt: null }),
+        standing,
+        topic,
+        version: row.version + 1,
+        updatedAt: now,
+      })
+      .where(eq(notes.id, row.id));
+    await db.update(anchors).set(anchorAt(input.position)).where(eq(anchors.id, row.anchorId));
+    await writeParts(context, row.id, input.partIds);
+    await announceNotes(context, episode);
+    const [note] = await loadNotes(db, eq(notes.id, row.id));
+    return note ?? shown;
+  },
+);

@@ -1,0 +1,21 @@
+import { and, eq } from 'drizzle-orm';
+import { notes } from '../../../db/schema/notes.ts';
+import { read } from '../../../server/verb.ts';
+import { loadNotes, ofEpisode } from './load-notes.ts';
+
+/** The notes of a published episode that viewers see. @param episodeId of an episode that was found to be on show */
+export const listShownNotes = read(
+  { may: 'published.read' },
+  async ({ db, workshop }, { episodeId }: { episodeId: string }) => {
+    const items = await loadNotes(
+      db,
+      and(
+        ofEpisode(episodeId),
+        eq(notes.workshopId, workshop.id),
+        eq(notes.audience, 'viewers'),
+        eq(notes.proposed, false),
+      ),
+    );
+    return { items, nextCursor: null };
+  },
+);

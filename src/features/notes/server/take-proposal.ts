@@ -1,0 +1,15 @@
+import { verb } from '../../../server/verb.ts';
+import { announceNotes } from './guard-published.ts';
+import { type EpisodeRef, loadEpisodeOfNotes } from './load-episode.ts';
+import { loadNoteAt } from './load-note.ts';
+import { setNote } from './set-note.ts';
+
+type Target = EpisodeRef & { readonly note: string; readonly version: number };
+
+/** Takes an editor's proposal: viewers see it from now on. Dropping it is deleting it. */
+export const takeProposal = verb({ may: 'published-number.change' }, async (context, input: Target) => {
+  const episode = await loadEpisodeOfNotes(context, input);
+  const { row } = await loadNoteAt(context, episode, input);
+  await announceNotes(context, episode);
+  return setNote(context, row, { proposed: false });
+});
