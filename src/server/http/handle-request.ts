@@ -67,14 +67,9 @@ export function createRequestHandler(
     // Answered already, when the limit was passed.
     if (error instanceof BodyTooLarge) return;
     log.error({ err: error, requestId }, 'a request failed');
+    const sentence = `Something went wrong here. Its number, should you ask us about it: ${requestId}`;
     if (res.headersSent) res.destroy();
-    else
-      refuse(
-        req,
-        res,
-        500,
-        `Something went wrong here. Its number, should you ask us about it: ${requestId}`,
-      );
+    else refuse(req, res, 500, sentence);
   }
 
   return (req, res, sendContinue) => {
@@ -108,15 +103,18 @@ export function createRequestHandler(
       refuse(req, res, target.status, target.sentence, target.status === 405 ? { Allow: ALLOW } : {});
       return;
     }
-    if (turnAway(req, res, target)) return;
-    const clientAddress = findClientAddress(req);
-    overwriteForwardedHeaders(req, clientAddress, publicUrl);
-    req.url = target.path + target.query;
-    sendContinue?.();
     const noteCache = (use: CacheUse) => {
       seen.cache = use;
     };
-    runApplication(req, res, { ...target, requestId, clientAddress, noteCache }).catch((error: unknown) => {
+    const goOn = async () => {
+      if (turnAway(req, res, target)) return;
+      const clientAddress = findClientAddress(req);
+      overwriteForwardedHeaders(req, clientAddress, publicUrl);
+      req.url = target.path + target.query;
+      sendContinue?.();
+      await runApplication(req, res, { ...target, requestId, clientAddress, noteCache });
+    };
+    goOn().catch((error: unknown) => {
       fail(req, res, requestId, error);
     });
   };
