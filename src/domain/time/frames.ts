@@ -87,5 +87,5 @@ export function convertFrame(frame: number, from: Rate, to: Rate): number {
  * becomes empty.
  */
 export function convertEndFrame(endFrame: number, from: Rate, to: Rate): number {
-  return -convertFrame(-endFrame, from, to);
+  return 0 - convertFrame(-endFrame, from, to);
 }
