@@ -5,7 +5,7 @@ import { type Running } from './running.ts';
 import { nodePart } from './part.ts';
 import { Trouble } from './trouble.mjs';
 
-/** An account of the demo, as the seed names it: at least an address and a password. */
+/** An account of the demo, as the seed names it: an address, a password and who it is. */
 export type DemoAccount = Readonly<Record<string, string>>;
 
 const UNFINISHED = 'demo-unfinished';

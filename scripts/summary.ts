@@ -18,9 +18,9 @@ export function summarise({ url, outboxUrl, accounts }: Summary): string {
   if (accounts.length > 0) {
     lines.push('Demo accounts:');
     const width = Math.max(...accounts.map(({ email = '' }) => email.length));
-    for (const { email = '', password = '', role = '', ...rest } of accounts) {
+    for (const { email = '', password = '', who = '', ...rest } of accounts) {
       const more = Object.entries(rest).map(([name, value]) => `, ${inWords(name)}: ${value}`);
-      lines.push(`  ${email.padEnd(width)}  ${password}  ${role}${more.join('')}`.trimEnd());
+      lines.push(`  ${email.padEnd(width)}  ${password}  ${who}${more.join('')}`.trimEnd());
     }
   }
   lines.push('Ctrl-C stops it.', '');

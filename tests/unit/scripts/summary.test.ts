@@ -6,8 +6,8 @@ test('the summary names the address, the outbox and the accounts in columns', ()
     url: 'http://127.0.0.1:4321',
     outboxUrl: 'http://127.0.0.1:20001',
     accounts: [
-      { email: 'ada@workshop.test', password: 'first', role: 'owner', secondFactorKey: 'ABC' },
-      { email: 'jo@workshop.test', password: 'second', role: 'moderator' },
+      { email: 'ada@workshop.test', password: 'first', who: 'owner', secondFactorKey: 'ABC' },
+      { email: 'jo@workshop.test', password: 'second', who: 'moderator' },
     ],
   });
   expect(text).toBe(
