@@ -12,7 +12,7 @@ const MADE_LATER = /^(\.data|\.astro|dist|node_modules|test-results)(\/|$)/;
 function isPath(span: string, top: ReadonlySet<string>): boolean {
   if (!PATH.test(span) || MADE_LATER.test(span)) return false;
   const [first = ''] = span.split('/');
-  return top.has(first) || /\.(md|mjs|ts|tsx|astro|json|css|sql)$/.test(span);
+  return top.has(first) || (span.includes('/') && /\.(md|mjs|ts|tsx|astro|json|css|sql)$/.test(span));
 }
 
 /** The paths that a document names in `code`, from the checkout; one with a * counts up to its folder. */
