@@ -4,11 +4,15 @@ import { type WorkshopContext } from '../../../server/context.ts';
 import { NotFound } from '../../../server/errors.ts';
 import { type Build } from '../build.ts';
 
+/** What an address name can look like; anything else is not looked up. */
+const LIKE_A_SLUG = /^[a-z0-9-]{1,100}$/;
+
 /**
  * A build of the workshop by its address name, an old one included; `slug` is the current one.
  * @throws NotFound
  */
 export async function loadBuild({ db, workshop }: WorkshopContext, slug: string): Promise<Build> {
+  if (!LIKE_A_SLUG.test(slug)) throw new NotFound('This build');
   const [asked] = await db
     .select({ build: builds, current: buildSlugs.current })
     .from(buildSlugs)
