@@ -53,6 +53,8 @@ export const paths = {
   diary: (workshop: string, build: string) => onBench(workshop, build, 'diary'),
   stages: (workshop: string, build: string) => onBench(workshop, build, 'stages'),
   parts: (workshop: string, build: string) => onBench(workshop, build, 'parts'),
+  benchPart: (workshop: string, build: string, partId: string) =>
+    onBench(workshop, build, `parts/${part(partId)}`),
   importParts: (workshop: string, build: string) => onBench(workshop, build, 'parts/import'),
   footage: (workshop: string, build: string) => onBench(workshop, build, 'footage'),
   buildSettings: (workshop: string, build: string) => onBench(workshop, build, 'settings'),

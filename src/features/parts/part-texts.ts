@@ -1,0 +1,58 @@
+import { PART_FIELDS, type PartField, type PartFields, PartInput } from './part.ts';
+
+/** A part as it is typed and shown: a text a column. */
+export type PartTexts = Readonly<Record<PartField, string>>;
+
+export const EMPTY_TEXTS: PartTexts = {
+  number: '',
+  name: '',
+  kind: '',
+  quantity: '',
+  material: '',
+  size: '',
+  aliases: '',
+  inPlans: '',
+  remark: '',
+};
+
+/** What a part's columns say. */
+export function textsOf(part: PartFields): PartTexts {
+  return {
+    ...part,
+    quantity: String(part.quantity),
+    aliases: part.aliases.join('; '),
+    inPlans: part.inPlans ? 'yes' : 'no',
+  };
+}
+
+/** A row that is begun: the columns that have a usual value say it. */
+export const NEW_TEXTS: PartTexts = { ...EMPTY_TEXTS, kind: 'made', quantity: '1', inPlans: 'yes' };
+
+export type ReadPart =
+  | { readonly ok: true; readonly value: PartFields }
+  | { readonly ok: false; readonly errors: Readonly<Partial<Record<PartField, string>>> };
+
+/** Reads a row that was typed: the part, or a sentence a column. */
+export function readPart(texts: Partial<PartTexts>): ReadPart {
+  const parsed = PartInput.safeParse(texts);
+  if (parsed.success) return { ok: true, value: parsed.data };
+  const errors: Partial<Record<PartField, string>> = {};
+  for (const { path, message } of parsed.error.issues) {
+    const field = PART_FIELDS.find((one) => one === path[0]);
+    if (field !== undefined) errors[field] ??= message;
+  }
+  return { ok: false, errors };
+}
+
+/**
+ * The text of a cell in its usual form, when it can be read: `b` becomes `bought`.
+ * @returns what was typed, when it cannot be read
+ */
+export function usualText(field: PartField, typed: string): string {
+  const parsed = PartInput.shape[field].safeParse(typed);
+  if (!parsed.success) return typed;
+  const { data } = parsed;
+  if (Array.isArray(data)) return data.join('; ');
+  if (typeof data === 'boolean') return data ? 'yes' : 'no';
+  return String(data);
+}
