@@ -2,6 +2,7 @@ import { type APIContext } from 'astro';
 import { defineMiddleware } from 'astro:middleware';
 import { isPublicPage, paths } from './paths.ts';
 import { readSession } from './server/auth/session.ts';
+import { amendPolicy, storageSources } from './server/http/content-policy.ts';
 import { toErrorAnswer } from './server/http/error-answer.ts';
 import { EMPTY_FORM } from './server/http/request-parts.ts';
 
@@ -30,6 +31,11 @@ export const onRequest = defineMiddleware(async (context, next) => {
   };
 
   const response = await answer();
+  const policy = response.headers.get('content-security-policy');
+  if (policy !== null && response.headers.get('content-type')?.startsWith('text/html')) {
+    const sources = storageSources(services.settings.S3_PUBLIC_ENDPOINT);
+    response.headers.set('content-security-policy', amendPolicy(policy, sources));
+  }
   for (const cookie of locals.parts.setCookies) response.headers.append('set-cookie', cookie);
   if (!isPublicPage(context.url.pathname) && !response.headers.has('cache-control')) {
     response.headers.set('cache-control', 'private, no-store');
