@@ -2,7 +2,8 @@ import { isAPIError } from 'better-auth/api';
 import { type Context } from '../context.ts';
 import { type FieldErrors, Invalid, TooMany } from '../errors.ts';
 
-const LINK_IS_OVER = 'This link no longer works: it was used, or is too old. Ask for a new one.';
+/** What a mailed link that is used, old or not ours answers. */
+export const LINK_IS_OVER = 'This link no longer works: it was used, or is too old. Ask for a new one.';
 
 /** better-auth's error codes as sentences, each at the field it is about; the empty name is the whole form. */
 const SENTENCES: Readonly<Record<string, FieldErrors>> = {
@@ -34,10 +35,20 @@ const SENTENCES: Readonly<Record<string, FieldErrors>> = {
   },
 };
 
+/** A refusal of better-auth that no reader can do anything about, by its own code. */
+export class AuthRefusal extends Error {
+  constructor(
+    statusCode: number,
+    readonly code: string,
+  ) {
+    super(`better-auth refused with ${String(statusCode)} ${code}`);
+  }
+}
+
 /**
  * Calls better-auth for a request: hands its cookies on and says its refusals in our words.
  * @param call one of auth.api's calls, given the request's headers, with returnHeaders
- * @throws Invalid or TooMany for what the reader can do something about
+ * @throws Invalid or TooMany for what the reader can do something about, AuthRefusal for the rest
  */
 export async function callAuth<Response>(
   context: Context,
@@ -59,5 +70,5 @@ function refusalOf(error: { statusCode: number; body?: { code?: string | undefin
   const sentence = SENTENCES[body?.code ?? ''];
   if (sentence) return new Invalid(sentence);
   if (statusCode === 429) return new TooMany(15 * 60);
-  return new Error(`better-auth refused with ${String(statusCode)} ${body?.code ?? ''}`);
+  return new AuthRefusal(statusCode, body?.code ?? '');
 }
