@@ -10,6 +10,7 @@ import { type Mail } from '../../domain/mail.ts';
 import { PASSWORD_LENGTH } from '../../domain/passwords.ts';
 import { type ServiceSettings } from '../env.ts';
 import { cookiePrefix } from './cookies.ts';
+import { makeRecoveryCodes } from './recovery-codes.ts';
 import { mayUseSignInLink } from './sign-in-links.ts';
 
 const HOUR = 3600;
@@ -133,7 +134,11 @@ export function openAuth({ settings, db, mails, log, sendLater }: AuthParts) {
       },
     },
     plugins: [
-      twoFactor({ issuer: 'Centrepop', twoFactorCookieMaxAge: 600 }),
+      twoFactor({
+        issuer: 'Centrepop',
+        twoFactorCookieMaxAge: 600,
+        backupCodeOptions: { customBackupCodesGenerate: makeRecoveryCodes },
+      }),
       magicLink({
         expiresIn: LINK_LIFE.signIn,
         disableSignUp: true,

@@ -1,5 +1,6 @@
 import { callAuth } from '../../../server/auth/call-auth.ts';
 import { hintCookie } from '../../../server/auth/cookies.ts';
+import { readRecoveryCode } from '../../../server/auth/recovery-codes.ts';
 import { verb } from '../../../server/verb.ts';
 import { DONE } from '../account.ts';
 
@@ -11,7 +12,7 @@ export const verifySecondStep = verb(
     await callAuth(context, (headers) =>
       kind === 'code'
         ? api.verifyTOTP({ body: { code: code.replace(/\s/g, '') }, headers, returnHeaders: true })
-        : api.verifyBackupCode({ body: { code }, headers, returnHeaders: true }),
+        : api.verifyBackupCode({ body: { code: readRecoveryCode(code) }, headers, returnHeaders: true }),
     );
     context.setCookies.push(hintCookie(context.services.settings, true));
     return DONE;
