@@ -9,11 +9,15 @@ export interface Tenant {
   readonly role: Standing;
 }
 
+/** What an address name can look like; anything else is not looked up. */
+const LIKE_A_SLUG = /^[a-z0-9-]{1,100}$/;
+
 /**
  * The workshop that an address names, by its current name or an old one, and what the asker is in it.
  * @returns null when there is none
  */
 export async function findTenant(db: Database, slug: string, actor: Actor): Promise<Tenant | null> {
+  if (!LIKE_A_SLUG.test(slug)) return null;
   const asked = workshopSlugs;
   const [row] = await db
     .select({ workshop: workshops, slug: asked.slug, current: asked.current })

@@ -16,10 +16,14 @@ const newPassword = z
   .min(PASSWORD_LENGTH.min, `Use at least ${String(PASSWORD_LENGTH.min)} characters.`)
   .max(PASSWORD_LENGTH.max, `Use at most ${String(PASSWORD_LENGTH.max)} characters.`);
 
-const password = z.string('Enter your password.').min(1, 'Enter your password.').max(PASSWORD_LENGTH.max);
-const token = z.string('The link is not whole. Open it from the mail again.').min(1).max(2000);
+const password = z
+  .string('Enter your password.')
+  .min(1, 'Enter your password.')
+  .max(PASSWORD_LENGTH.max, 'That is not your password.');
+const NOT_WHOLE = 'The link is not whole. Open it from the mail again.';
+const token = z.string(NOT_WHOLE).min(1, NOT_WHOLE).max(2000, NOT_WHOLE);
 /** Where to go afterwards; anything but a path of ours is ignored. */
-const next = z.string().max(500).optional();
+const next = z.string().max(500).optional().catch(undefined);
 
 export const SignUpInput = z.object({ name: personName, email, password: newPassword });
 export const AddressInput = z.object({ email });
@@ -27,8 +31,8 @@ export const TokenInput = z.object({ token });
 export const ConfirmAddressInput = z.object({ token, password });
 export const SignInInput = z.object({ email, password, next });
 export const SecondStepInput = z.object({
-  kind: z.enum(['code', 'recovery']).default('code'),
-  code: z.string('Enter the code.').trim().min(1, 'Enter the code.').max(40),
+  kind: z.enum(['code', 'recovery'], 'Choose which code it is.').default('code'),
+  code: z.string('Enter the code.').trim().min(1, 'Enter the code.').max(40, 'That is too long for a code.'),
   next,
 });
 export const ResetPasswordInput = z.object({ token, newPassword });

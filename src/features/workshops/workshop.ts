@@ -59,7 +59,7 @@ const language = z.enum(
 );
 
 export const MakeWorkshopInput = z
-  .object({ name: workshopName, slug: z.string().trim().optional(), timeZone })
+  .object({ name: workshopName, slug: z.string('Enter an address name.').trim().optional(), timeZone })
   .transform((input, context) => {
     const parsed = workshopSlug.safeParse(input.slug || suggestSlug(input.name));
     if (parsed.success) return { ...input, slug: parsed.data };
@@ -67,7 +67,13 @@ export const MakeWorkshopInput = z
     return z.NEVER;
   });
 
-const version = z.coerce.number('Open the page again.').int().min(1);
+const STALE = 'Open the page again.';
+/** As far as PostgreSQL's integer counts. */
+const version = z.coerce
+  .number(STALE)
+  .int(STALE)
+  .min(1, STALE)
+  .max(2 ** 31 - 1, STALE);
 export const workshopParam = z.object({ workshop: z.string().min(1) });
 
 export const ChangeSettingsInput = z.object({
@@ -75,7 +81,9 @@ export const ChangeSettingsInput = z.object({
   slug: workshopSlug,
   timeZone,
   language,
-  editorsMaySeeOrders: z.union([z.literal('on').transform(() => true), z.boolean()]).default(false),
+  editorsMaySeeOrders: z
+    .union([z.literal('on').transform(() => true), z.boolean()], 'Tick it or leave it.')
+    .default(false),
   version,
 });
 export type ChangeSettings = z.output<typeof ChangeSettingsInput>;
@@ -94,8 +102,9 @@ export const INVITATION_PURPOSE = 'invitation';
 
 export const MadeWorkshop = z.object({ slug: z.string() });
 export const MadeId = z.object({ id: z.uuid() });
+const NOT_WHOLE = 'The link is not whole. Open it from the mail again.';
 export const AcceptInput = z.object({
-  token: z.string('The link is not whole. Open it from the mail again.').max(200),
+  token: z.string(NOT_WHOLE).max(200, NOT_WHOLE),
 });
 
 /** The time zones to choose from. */

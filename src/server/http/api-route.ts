@@ -5,7 +5,7 @@ import { addressKey, type Limit } from '../limits/rate-limiter.ts';
 import { type Ruled } from '../verb.ts';
 import { type ErrorAnswer, jsonError, toErrorAnswer } from './error-answer.ts';
 import { requireOwnOrigin } from './origin.ts';
-import { readBody, type RequestBody } from './request-body.ts';
+import { readBody, type RequestBody, requireWholeText } from './request-body.ts';
 import { contextOf } from './request-context.ts';
 import { type RequestParts } from './request-parts.ts';
 
@@ -80,7 +80,8 @@ function queryOf(url: URL): RequestBody {
   return { kind: 'none', values: Object.fromEntries(url.searchParams) };
 }
 
-function parse<S extends Shape>(schema: S, values: unknown): z.output<S> {
+function parse<S extends Shape>(schema: S, values: Readonly<Record<string, unknown>>): z.output<S> {
+  requireWholeText(values);
   const parsed = schema.safeParse(values);
   if (parsed.success) return parsed.data;
   const fields: Record<string, string> = {};
@@ -129,11 +130,14 @@ async function answerFormError<P, I, R>(
   if (code === 'sign_in_needed' || code === 'second_factor_needed') {
     return context.redirect(context.locals.detourFor(code, form.page(context.params as P, values)), 303);
   }
-  return showFormPage(context, form.page(context.params as P, values), answer.status, {
+  const shown = await showFormPage(context, form.page(context.params as P, values), answer.status, {
     values,
     errors: fields,
     message,
   });
+  if (answer.retryAfterSeconds !== undefined)
+    shown.headers.set('retry-after', String(answer.retryAfterSeconds));
+  return shown;
 }
 
 function keptValues(body: RequestBody, secrets: readonly string[]): Record<string, string> {

@@ -1,4 +1,4 @@
-import { BadRequest } from '../errors.ts';
+import { BadRequest, Invalid } from '../errors.ts';
 
 export interface RequestBody {
   readonly kind: 'json' | 'form' | 'none';
@@ -16,6 +16,24 @@ export async function readBody(request: Request): Promise<RequestBody> {
   if (type === 'application/json') return { kind: 'json', values: jsonValues(await request.text()) };
   if ((await request.text()) === '') return { kind: 'none', values: {} };
   throw new BadRequest('Send a form or JSON. Nothing was changed.');
+}
+
+/**
+ * Refuses text that cannot be kept as it was sent: PostgreSQL takes no NUL, and half a surrogate pair is no character.
+ * @throws Invalid at the field
+ */
+export function requireWholeText(values: Readonly<Record<string, unknown>>): void {
+  for (const [field, value] of Object.entries(values)) {
+    const waiting: unknown[] = [value];
+    // Without recursion: a body may be nested as deep as it is long.
+    while (waiting.length > 0) {
+      const one = waiting.pop();
+      if (typeof one === 'string' && /[\0\p{Surrogate}]/u.test(one))
+        throw new Invalid({ [field]: 'There is a character in it that cannot be kept. Type it again.' });
+      if (typeof one === 'object' && one !== null)
+        for (const [key, inner] of Object.entries(one)) waiting.push(key, inner);
+    }
+  }
 }
 
 function jsonValues(text: string): Record<string, unknown> {
