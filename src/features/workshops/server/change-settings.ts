@@ -3,6 +3,7 @@ import { workshops, workshopSlugs } from '../../../db/schema/workshops.ts';
 import { onUniqueViolation } from '../../../server/constraint.ts';
 import { Conflict, Invalid } from '../../../server/errors.ts';
 import { announcePageChanges } from '../../../server/http/page-changes.ts';
+import { findTenant } from '../../../server/tenant.ts';
 import { verb } from '../../../server/verb.ts';
 import { type ChangeSettings } from '../workshop.ts';
 
@@ -12,7 +13,7 @@ import { type ChangeSettings } from '../workshop.ts';
  */
 export const changeSettings = verb(
   { may: 'workshop.change-settings' },
-  async ({ db, workshop, now }, input: ChangeSettings) => {
+  async ({ db, actor, workshop, now }, input: ChangeSettings) => {
     const { slug, version, ...settings } = input;
     const [saved] = await db
       .update(workshops)
@@ -20,8 +21,9 @@ export const changeSettings = verb(
       .where(and(eq(workshops.id, workshop.id), eq(workshops.version, version)))
       .returning({ id: workshops.id });
     if (!saved) {
+      const stored = await findTenant(db, workshop.slug, actor);
       throw new Conflict(
-        workshop,
+        stored?.workshop,
         'Someone else changed these settings in the meantime. What you entered is kept below; look it over and save again.',
       );
     }
