@@ -1,6 +1,6 @@
 import { and, eq, isNull } from 'drizzle-orm';
 import { invitations, memberships } from '../../../db/schema/workshops.ts';
-import { Forbidden } from '../../../server/errors.ts';
+import { Forbidden, NotFound } from '../../../server/errors.ts';
 import { verb } from '../../../server/verb.ts';
 import { loadOpenInvitation } from './load-open-invitation.ts';
 
@@ -23,12 +23,11 @@ export const acceptInvitation = verb(
       .set({ acceptedAt: now })
       .where(and(eq(invitations.id, id), isNull(invitations.acceptedAt), isNull(invitations.withdrawnAt)))
       .returning({ id: invitations.id });
-    if (taken) {
-      await db
-        .insert(memberships)
-        .values({ workshopId: invitation.workshopId, accountId: actor.id, role: invitation.role })
-        .onConflictDoNothing();
-    }
+    if (!taken) throw new NotFound('This invitation');
+    await db
+      .insert(memberships)
+      .values({ workshopId: invitation.workshopId, accountId: actor.id, role: invitation.role })
+      .onConflictDoNothing();
     return { slug: invitation.slug };
   },
 );

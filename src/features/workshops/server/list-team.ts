@@ -1,11 +1,14 @@
-import { and, asc, eq, gt, isNull } from 'drizzle-orm';
+import { and, asc, eq, isNull } from 'drizzle-orm';
 import { accounts } from '../../../db/schema/accounts.ts';
 import { invitations, memberships } from '../../../db/schema/workshops.ts';
 import { may } from '../../../domain/permissions.ts';
 import { read } from '../../../server/verb.ts';
 
-/** The team, in the order they joined, and the invitations that wait. Addresses are for the owner alone. */
-export const listTeam = read({ may: 'team.see' }, async ({ db, workshop, role, now }) => {
+/**
+ * The team, in the order they joined, and the invitations that nobody took up, those that have run out too.
+ * Addresses are for the owner alone.
+ */
+export const listTeam = read({ may: 'team.see' }, async ({ db, workshop, role }) => {
   const seesAddresses = may(role, 'team.change');
   const members = await db
     .select({
@@ -34,7 +37,6 @@ export const listTeam = read({ may: 'team.see' }, async ({ db, workshop, role, n
             eq(invitations.workshopId, workshop.id),
             isNull(invitations.acceptedAt),
             isNull(invitations.withdrawnAt),
-            gt(invitations.expiresAt, now),
           ),
         )
         .orderBy(asc(invitations.id))
