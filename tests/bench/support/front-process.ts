@@ -2,6 +2,7 @@
 // client folder, log file.
 import { readFileSync } from 'node:fs';
 import { pino } from 'pino';
+import { bufferLines } from '../../../src/server/http/buffered-log.ts';
 import { ChangeCounter } from '../../../src/server/http/change-counter.ts';
 import { startFrontServer } from '../../../src/server/http/front-server.ts';
 
@@ -14,7 +15,7 @@ const [port, path, pageFile, clientDir, logFile] = process.argv.slice(2) as [
 ];
 const page = readFileSync(pageFile);
 const changes = new ChangeCounter();
-const destination = pino.destination({ dest: logFile, sync: false, minLength: 8 * 1024 });
+const destination = bufferLines(pino.destination(logFile));
 
 const front = await startFrontServer({
   host: '127.0.0.1',
