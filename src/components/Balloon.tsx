@@ -16,7 +16,10 @@ type BalloonProps = {
 
 const SIZES = { small: 28, medium: 36, large: 60 };
 
-/** A part, as on an assembly drawing: its number in a circle. */
+/**
+ * A part, as on an assembly drawing: its number in a circle. `data-filled` on anything around it fills it too, so
+ * that a small script can follow the video.
+ */
 export function Balloon({
   number,
   name,
@@ -38,20 +41,18 @@ export function Balloon({
         r="13.5"
         strokeDasharray={dashed ? '3 2.3' : undefined}
         vectorEffect="non-scaling-stroke"
-        className={
-          filled
-            ? 'fill-brass stroke-ink'
-            : joinClasses('fill-sheet stroke-dye', href !== undefined && 'group-hover:fill-dye-wash')
-        }
+        className={joinClasses(
+          'fill-sheet stroke-dye in-data-filled:fill-brass in-data-filled:stroke-ink',
+          href !== undefined && 'group-hover:fill-dye-wash',
+        )}
       />
-      {filled && <circle r="11.5" className="fill-none stroke-on-brass" strokeWidth="0.5" />}
+      <circle r="11.5" className="hidden fill-none stroke-on-brass in-data-filled:inline" strokeWidth="0.5" />
       <text
         dy="0.35em"
         textAnchor="middle"
         className={joinClasses(
-          'font-mono font-semibold',
+          'fill-dye font-mono font-semibold in-data-filled:fill-on-brass',
           numberSize(number ?? ''),
-          filled ? 'fill-on-brass' : 'fill-dye',
         )}
       >
         {number ?? '–'}
@@ -59,13 +60,14 @@ export function Balloon({
     </svg>
   );
   const text = <span className="sr-only">{said.filter((part) => part !== undefined).join(', ')}</span>;
+  const mark = filled ? '' : undefined;
   return href === undefined ? (
-    <span className="inline-block shrink-0 align-middle">
+    <span data-filled={mark} className="inline-block shrink-0 align-middle">
       {drawing}
       {text}
     </span>
   ) : (
-    <a href={href} className="group inline-block shrink-0 rounded-full align-middle">
+    <a href={href} data-filled={mark} className="group inline-block shrink-0 rounded-full align-middle">
       {drawing}
       {text}
     </a>

@@ -25,7 +25,7 @@ export function SteelRule(props: SteelRuleProps) {
   return (
     <div role="group" aria-label={`Time rule, ${formatClock(props.length)} long`} data-length={props.length}>
       {empty ? null : props.orientation === 'upright' ? <UprightRule {...props} /> : <LyingRule {...props} />}
-      <RuleList {...props} />
+      {props.quiet !== true && <RuleList {...props} />}
     </div>
   );
 }

@@ -19,10 +19,11 @@ export function LyingRule({
   chapters = [],
   hatchings = [],
   now,
+  quiet = false,
 }: RuleData) {
   const hatch = useId();
   const percent = (at: number) => `${String(Math.round((at / length) * 100_000) / 1000)}%`;
-  const strip = { length, percent, className: STRIP };
+  const strip = { length, percent, className: STRIP, quiet };
   return (
     <div className="@container">
       <BalloonStrips {...strip} marks={balloons.toSorted(byTime)} now={now} />
@@ -61,7 +62,12 @@ export function LyingRule({
         </svg>
       </div>
       <PopStrips {...strip} marks={pops.toSorted(byTime)} />
-      <RuleChapters chapters={chapters.toSorted(byTime)} length={length} className={`${STRIP} block`} />
+      <RuleChapters
+        chapters={chapters.toSorted(byTime)}
+        length={length}
+        className={`${STRIP} block`}
+        quiet={quiet}
+      />
     </div>
   );
 }

@@ -5,15 +5,20 @@ type RuleChaptersProps = {
   readonly chapters: readonly RuleChapter[];
   readonly length: number;
   readonly className: string;
+  readonly quiet: boolean;
 };
 
 /** Chapter names under the rule, each as wide as its chapter and cut with an ellipsis when longer. */
-export function RuleChapters({ chapters, length, className }: RuleChaptersProps) {
+export function RuleChapters({ chapters, length, className, quiet }: RuleChaptersProps) {
   if (chapters.length === 0) return null;
   const percent = (seconds: number) => `${String(Math.round((seconds / length) * 100_000) / 1000)}%`;
   const look = 'block truncate border-s border-line-strong ps-1.5 text-sm text-ink-soft';
   return (
-    <svg height="24" className={className} aria-hidden={chapters.every(({ href }) => href === undefined)}>
+    <svg
+      height="24"
+      className={className}
+      aria-hidden={quiet || chapters.every(({ href }) => href === undefined)}
+    >
       {chapters.map(({ at, label, href }, index) => (
         <foreignObject
           key={at}
@@ -24,7 +29,12 @@ export function RuleChapters({ chapters, length, className }: RuleChaptersProps)
           {href === undefined ? (
             <span className={look}>{label}</span>
           ) : (
-            <a href={href} className={`${look} hover:text-dye hover:underline`}>
+            <a
+              href={href}
+              tabIndex={quiet ? -1 : undefined}
+              data-at={at}
+              className={`${look} hover:text-dye hover:underline`}
+            >
               {label}
             </a>
           )}

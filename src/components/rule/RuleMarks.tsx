@@ -42,11 +42,22 @@ export function PopLeader({ x, place, className }: LeaderProps) {
   );
 }
 
-type MarkProps<Mark> = { readonly mark: Mark; readonly place: PlacedMark; readonly x: string };
+type MarkProps<Mark> = {
+  readonly mark: Mark;
+  readonly place: PlacedMark;
+  readonly x: string;
+  /** The page lists the same beside the rule: its links are for pointers only. */
+  readonly quiet: boolean;
+};
 
 /** A part above the rule. `edge` is the rule's upper edge. */
-export function BalloonMark({ mark, place, x, edge }: MarkProps<RuleBalloon> & { readonly edge: number }) {
-  const filled = mark.filled === true;
+export function BalloonMark({
+  mark,
+  place,
+  x,
+  edge,
+  quiet,
+}: MarkProps<RuleBalloon> & { readonly edge: number }) {
   const name = mark.name === undefined ? '' : `, ${mark.name}`;
   const drawing = (
     <g transform={`translate(${String(place.shift)} ${String(balloonY(place, edge))})`}>
@@ -54,15 +65,14 @@ export function BalloonMark({ mark, place, x, edge }: MarkProps<RuleBalloon> & {
       <circle
         r={RADIUS}
         strokeDasharray={mark.dashed === true ? '3 2.5' : undefined}
-        className={filled ? 'fill-brass stroke-ink' : 'fill-sheet stroke-dye'}
+        className="fill-sheet stroke-dye in-data-filled:fill-brass in-data-filled:stroke-ink"
       />
       <text
         dy="0.35em"
         textAnchor="middle"
         className={joinClasses(
-          'font-mono font-semibold',
+          'fill-dye font-mono font-semibold in-data-filled:fill-on-brass',
           numberSize(mark.label),
-          filled ? 'fill-on-brass' : 'fill-dye',
         )}
       >
         {mark.label}
@@ -70,18 +80,34 @@ export function BalloonMark({ mark, place, x, edge }: MarkProps<RuleBalloon> & {
     </g>
   );
   return (
-    <svg x={x} overflow="visible" data-balloon={mark.id} data-at={mark.at}>
-      {mark.href === undefined ? drawing : <a href={mark.href}>{drawing}</a>}
+    <svg
+      x={x}
+      overflow="visible"
+      data-balloon={mark.id}
+      data-at={mark.at}
+      data-filled={mark.filled === true ? '' : undefined}
+    >
+      {mark.href === undefined ? (
+        drawing
+      ) : (
+        <a href={mark.href} tabIndex={quiet ? -1 : undefined}>
+          {drawing}
+        </a>
+      )}
     </svg>
   );
 }
 
 /** A note below the rule: a link to its moment. Drawn from the rule's lower edge down. */
-export function PopMark({ mark, place, x }: MarkProps<RulePop>) {
+export function PopMark({ mark, place, x, quiet }: MarkProps<RulePop>) {
   const { label, tone } = NOTE_KINDS[mark.kind];
   return (
     <svg x={x} overflow="visible" className={TONE_TEXT[tone]} data-pop={mark.id} data-at={mark.at}>
-      <a href={mark.href} aria-label={`${formatClock(mark.at)}, ${label}: ${mark.label}`}>
+      <a
+        href={mark.href}
+        tabIndex={quiet ? -1 : undefined}
+        aria-label={`${formatClock(mark.at)}, ${label}: ${mark.label}`}
+      >
         <g transform={`translate(${String(place.shift)} ${String(popY(place))})`}>
           <title>{`${formatClock(mark.at)} ${label}: ${mark.label}`}</title>
           <rect x="-12" y="-12" width="24" height="24" fill="transparent" />

@@ -39,4 +39,6 @@ export type RuleData = {
   readonly chapters?: readonly RuleChapter[] | undefined;
   readonly hatchings?: readonly RuleHatching[] | undefined;
   readonly now?: number | undefined;
+  /** The page lists the same beside the rule: it is not read out twice, and its links are for pointers only. */
+  readonly quiet?: boolean | undefined;
 };
