@@ -1,0 +1,128 @@
+import { type Page, type Response } from '@playwright/test';
+import { filesBelow } from '../architecture/import-graph.ts';
+import { PASSWORD, type TestPerson } from '../people.ts';
+import { enterPassword } from './steps.ts';
+import { newAddress, type Owner, type Product } from './product.ts';
+
+/** What the pages have to show: a workshop with its team and an invitation that waits. */
+export interface World {
+  readonly owner: Owner;
+  readonly editor: TestPerson;
+  readonly viewer: TestPerson;
+  readonly invitation: string;
+}
+
+export async function makeWorld(product: Product): Promise<World> {
+  const owner = await product.owner('Wilhelmina Featherstonehaugh', 'Shed at the End of Long Marsh Lane');
+  const editor = await product.person('Bo Lind');
+  await product.join(owner, editor, 'editor');
+  const invitation = await product.invite(owner, newAddress('someone-with-a-long-address'), 'moderator');
+  return { owner, editor, viewer: await product.person('Ida Kemp'), invitation };
+}
+
+/** One page in one state. */
+export interface PageState {
+  /** The route's file below src/pages, without its ending. */
+  readonly route: string;
+  /** What is special about this state. */
+  readonly state?: string;
+  readonly as?: (world: World) => TestPerson;
+  readonly at: (world: World) => string;
+  /** What brings the page into this state; ends in a navigation. */
+  readonly then?: (page: Page) => Promise<void>;
+}
+
+const owner = ({ owner: who }: World) => who;
+const editor = ({ editor: who }: World) => who;
+const viewer = ({ viewer: who }: World) => who;
+const bench =
+  (rest = '') =>
+  (world: World) =>
+    `/bench/${world.owner.workshop}${rest}`;
+
+async function startSecondFactor(page: Page): Promise<void> {
+  await page.getByLabel('Your password').fill(PASSWORD);
+  await page.getByRole('button', { name: 'Start' }).click();
+}
+
+async function sendNamelessSignUp(page: Page): Promise<void> {
+  await page.getByLabel('Your name').fill('<>');
+  await page.getByLabel('E-mail address').fill('someone@example.com');
+  await page.getByLabel('Password').fill(PASSWORD);
+  await page.getByRole('button', { name: 'Sign up' }).click();
+}
+
+async function askForLink(page: Page): Promise<void> {
+  await page.getByLabel('E-mail address').fill('nobody@example.com');
+  await page.getByRole('button', { name: 'Mail me a link' }).click();
+}
+
+/** Every page, in every state that looks different. */
+export const PAGES: readonly PageState[] = [
+  { route: 'index', at: () => '/' },
+  { route: '404', at: () => '/nowhere-at-all' },
+  { route: 'error', as: editor, at: bench('/settings') },
+  { route: 'w/[workshop]', at: (world) => `/w/${world.owner.workshop}` },
+  { route: 'sign-up/index', at: () => '/sign-up' },
+  { route: 'sign-up/index', state: 'sent back', at: () => '/sign-up', then: sendNamelessSignUp },
+  { route: 'sign-up/check-mail', at: () => '/sign-up/check-mail' },
+  { route: 'confirm', at: () => '/confirm?token=a.b.c' },
+  { route: 'sign-in/index', at: () => '/sign-in?next=/account' },
+  {
+    route: 'sign-in/index',
+    state: 'refused',
+    at: () => '/sign-in',
+    then: (page) => enterPassword(page, newAddress('nobody')),
+  },
+  { route: 'sign-in/code', at: () => '/sign-in/code' },
+  { route: 'sign-in/link', at: () => '/sign-in/link' },
+  { route: 'sign-in/link', state: 'asked', at: () => '/sign-in/link', then: askForLink },
+  { route: 'sign-in/open', at: () => '/sign-in/open?token=abc' },
+  { route: 'reset/index', at: () => '/reset' },
+  { route: 'reset/password', at: () => '/reset/password?token=abc' },
+  { route: 'invitations/[invitation]', at: ({ invitation }) => invitation },
+  { route: 'invitations/[invitation]', state: 'signed in', as: viewer, at: ({ invitation }) => invitation },
+  { route: 'account/index', as: owner, at: () => '/account' },
+  { route: 'account/new-address', as: viewer, at: () => '/account/new-address?token=abc' },
+  { route: 'account/second-factor', state: 'off', as: viewer, at: () => '/account/second-factor' },
+  {
+    route: 'account/second-factor',
+    state: 'started',
+    as: viewer,
+    at: () => '/account/second-factor',
+    then: startSecondFactor,
+  },
+  { route: 'account/second-factor', state: 'on', as: owner, at: () => '/account/second-factor' },
+  { route: 'bench/index', as: viewer, at: () => '/bench' },
+  { route: 'bench/new', as: viewer, at: () => '/bench/new' },
+  { route: 'bench/[workshop]/index', as: owner, at: bench() },
+  { route: 'bench/[workshop]/index', state: 'nothing waits', as: editor, at: bench() },
+  { route: 'bench/[workshop]/team', as: owner, at: bench('/team') },
+  { route: 'bench/[workshop]/team', state: 'for an editor', as: editor, at: bench('/team') },
+  { route: 'bench/[workshop]/settings', as: owner, at: bench('/settings') },
+];
+
+/** Has a spec of its own, because the product itself never shows it. */
+const ELSEWHERE = ['drawing-set'];
+
+/** The routes below src/pages that show a page. */
+export function pageRoutes(): string[] {
+  return filesBelow('src/pages')
+    .filter((file) => file.endsWith('.astro'))
+    .map((file) => file.replace(/^src\/pages\/|\.astro$/g, ''))
+    .filter((route) => !ELSEWHERE.includes(route));
+}
+
+/** Brings a page into its state. @returns the answer that the document came in */
+export async function openState(page: Page, { at, then }: PageState, world: World): Promise<Response> {
+  const answer = await page.goto(at(world));
+  if (answer === null) throw new Error('The page was not asked for.');
+  if (!then) return answer;
+  const document = page.waitForResponse((response) => {
+    const request = response.request();
+    return request.isNavigationRequest() && request.method() === 'POST' && response.status() !== 303;
+  });
+  await then(page);
+  await page.waitForLoadState();
+  return document;
+}

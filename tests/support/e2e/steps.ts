@@ -1,0 +1,30 @@
+import { type Page } from '@playwright/test';
+import { TOTP } from 'otpauth';
+import { PASSWORD } from '../people.ts';
+
+/** The six digits that an authenticator app would show now. */
+export function codeOf(key: string | null): string {
+  return new TOTP({ secret: key ?? '' }).generate();
+}
+
+/** Fills the sign-in form that is open and sends it. */
+export async function enterPassword(page: Page, email: string, password = PASSWORD): Promise<void> {
+  await page.getByLabel('E-mail address').fill(email);
+  await page.getByLabel('Password').fill(password);
+  await page.getByRole('button', { name: 'Sign in' }).click();
+}
+
+/** Fills the sign-up form that is open and sends it. */
+export async function enterSignUp(page: Page, name: string, email: string): Promise<void> {
+  await page.getByLabel('Your name').fill(name);
+  await page.getByLabel('E-mail address').fill(email);
+  await page.getByLabel('Password').fill(PASSWORD);
+  await page.getByRole('button', { name: 'Sign up' }).click();
+}
+
+/** Confirms an address on the page that the mailed link has opened. */
+export async function confirmWithPassword(page: Page, link: string): Promise<void> {
+  await page.goto(link);
+  await page.getByLabel('Password').fill(PASSWORD);
+  await page.getByRole('button', { name: 'Confirm and sign in' }).click();
+}
