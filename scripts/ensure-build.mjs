@@ -21,6 +21,8 @@ const STAMP = 'dist/built-from';
 const BUNDLES = [
   { from: 'src/web.ts', to: 'dist/web.mjs' },
   { from: 'src/worker.ts', to: 'dist/worker.mjs' },
+  // Plans are rewritten in a process of their own.
+  { from: 'src/server/media/rewrite-pdf-child.ts', to: 'dist/rewrite-pdf-child.mjs' },
 ];
 
 /**

@@ -3,6 +3,7 @@ import { spawn } from 'node:child_process';
 /** What keeps tools from calling home or asking questions. */
 export const QUIET_ENVIRONMENT = {
   ASTRO_TELEMETRY_DISABLED: '1',
+  ASTRO_DISABLE_UPDATE_CHECK: 'true',
   DO_NOT_TRACK: '1',
   NO_UPDATE_NOTIFIER: '1',
   npm_config_update_notifier: 'false',
