@@ -1,0 +1,49 @@
+import { eq } from 'drizzle-orm';
+import { anchors, chapters } from '../../../db/schema/notes.ts';
+import { type Position } from '../../../domain/positions.ts';
+import { onUniqueViolation } from '../../../server/constraint.ts';
+import { verb } from '../../../server/verb.ts';
+import { type Chapter } from '../episode.ts';
+import { announceEpisode } from './announce-episode.ts';
+import { loadChaptersWhere } from './load-chapters.ts';
+import { type EpisodeRef, loadEpisode } from './load-episode.ts';
+
+type Input = EpisodeRef & { readonly id: string; readonly title: string; readonly position: Position };
+
+/** Begins a chapter at a moment. */
+export const addChapter = verb(
+  { may: 'draft-note.change' },
+  async (context, input: Input): Promise<Chapter> => {
+    const { db, workshop } = context;
+    const { episode } = await loadEpisode(context, input);
+    const { frame, rate } = input.position;
+    const [anchor] = await db
+      .insert(anchors)
+      .values({
+        workshopId: workshop.id,
+        buildId: episode.buildId,
+        clock: 'episode',
+        episodeId: episode.id,
+        frame,
+        rateNum: rate.num,
+        rateDen: rate.den,
+      })
+      .returning({ id: anchors.id });
+    if (!anchor) throw new Error('The anchor was not kept.');
+    await onUniqueViolation(
+      { chapters_pkey: { id: 'This chapter is kept already. Open the page again.' } },
+      () =>
+        db.insert(chapters).values({
+          id: input.id,
+          workshopId: workshop.id,
+          episodeId: episode.id,
+          anchorId: anchor.id,
+          title: input.title,
+        }),
+    );
+    await announceEpisode(context, episode);
+    const [chapter] = await loadChaptersWhere(db, eq(chapters.id, input.id));
+    if (!chapter) throw new Error('The chapter was not kept.');
+    return chapter;
+  },
+);
