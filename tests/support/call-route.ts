@@ -9,7 +9,7 @@ import { PUBLIC_URL } from './services.ts';
 export interface RouteCall {
   /** Of the path: `{ workshop: 'marram-lane' }`. */
   readonly params?: Readonly<Record<string, string>>;
-  /** Sent as JSON; a string is sent as it stands. */
+  /** Sent as JSON, unless `headers` say otherwise; a string is sent as it stands. */
   readonly body?: unknown;
   /** Sent as a plain form instead. */
   readonly form?: Readonly<Record<string, string>>;
@@ -107,7 +107,7 @@ function requestOf(route: RuledRoute, call: RouteCall): Request {
   if (route.route.verb.rule.kind === 'read') return new Request(url, { headers });
   if (call.origin !== null) headers.set('origin', call.origin ?? PUBLIC_URL);
   if (call.form) return new Request(url, { method: 'POST', headers, body: new URLSearchParams(call.form) });
-  headers.set('content-type', 'application/json');
+  if (!headers.has('content-type')) headers.set('content-type', 'application/json');
   const body = typeof call.body === 'string' ? call.body : JSON.stringify(call.body ?? {});
   return new Request(url, { method: 'POST', headers, body });
 }

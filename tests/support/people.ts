@@ -1,8 +1,11 @@
-import { hashPassword, makeSignature } from 'better-auth/crypto';
+import { generateRandomString, hashPassword, makeSignature, symmetricEncrypt } from 'better-auth/crypto';
+import { eq } from 'drizzle-orm';
+import { Secret } from 'otpauth';
 import { newId } from '../../src/db/columns.ts';
-import { accounts, credentials } from '../../src/db/schema/accounts.ts';
+import { accounts, credentials, secondFactors } from '../../src/db/schema/accounts.ts';
 import { makeWorkshop } from '../../src/features/workshops/server/make-workshop.ts';
-import { addSecondFactor, contextFor, DEMO_PASSWORD, joinTeam, type Person } from '../../src/seed/people.ts';
+import { contextFor, DEMO_PASSWORD, joinTeam, type Person } from '../../src/seed/people.ts';
+import { makeRecoveryCodes } from '../../src/server/auth/recovery-codes.ts';
 import { type Context, type WorkshopContext } from '../../src/server/context.ts';
 import { type Services } from '../../src/server/services.ts';
 
@@ -11,19 +14,21 @@ export { contextFor, type Person } from '../../src/seed/people.ts';
 /** Everyone's password. */
 export const PASSWORD = DEMO_PASSWORD;
 
-/** Someone signed in, with the key of their authenticator app when they have one. */
+/** Someone signed in, with what a second factor gave them when they have one. */
 export interface TestPerson extends Person {
   readonly id: string;
+  /** The key of their authenticator app. */
   readonly key: string | null;
+  readonly recoveryCodes: readonly string[];
 }
 
 let counter = 0;
 let passwordHash: Promise<string> | undefined;
 
 /**
- * Someone with a confirmed address, signed in by a session put straight into the database: quick, because no
- * password is hashed or checked. Where signing up or in is the point, use `makePerson` of src/seed/people.ts.
- * @param person a name and address of their own when left out; `secondFactor` sets one up, as the product does
+ * Someone with a confirmed address, signed in, put straight into the database: quick, because no password is hashed
+ * or checked. Where signing up or in is the point, use `makePerson` and `addSecondFactor` of src/seed/people.ts.
+ * @param person a name and address of their own when left out; `secondFactor` gives them one
  */
 export async function aPerson(
   services: Services,
@@ -38,10 +43,21 @@ export async function aPerson(
   await services.db
     .insert(credentials)
     .values({ accountId: id, userId: id, providerId: 'credential', password });
-  const made = { name, email, headers: await anotherSession(services, id) };
-  if (!person.secondFactor) return { ...made, id, key: null };
-  const { person: guarded, key } = await addSecondFactor(services, made);
-  return { ...guarded, id, key };
+  const guard = person.secondFactor ? await guardAccount(services, id) : { key: null, recoveryCodes: [] };
+  return { id, name, email, headers: await anotherSession(services, id), ...guard };
+}
+
+/** Gives an account a second factor, kept as better-auth keeps it. */
+async function guardAccount(services: Services, accountId: string) {
+  const { secretConfig: key } = await services.auth.$context;
+  const [secret, recoveryCodes] = [generateRandomString(32), makeRecoveryCodes()];
+  await services.db.insert(secondFactors).values({
+    userId: accountId,
+    secret: await symmetricEncrypt({ key, data: secret }),
+    backupCodes: await symmetricEncrypt({ key, data: JSON.stringify(recoveryCodes) }),
+  });
+  await services.db.update(accounts).set({ twoFactorEnabled: true }).where(eq(accounts.id, accountId));
+  return { key: Secret.fromUTF8(secret).base32, recoveryCodes };
 }
 
 /** A further session of someone, as on another device: the cookies it sends. */

@@ -1,7 +1,9 @@
 import { pino } from 'pino';
 import { afterAll, afterEach, expect } from 'vitest';
 import { accountMails } from '../../src/features/accounts/account-mails.ts';
+import { type Mail } from '../../src/domain/mail.ts';
 import { keepConfirmations } from '../../src/seed/people.ts';
+import { type AccountMails } from '../../src/server/auth/auth.ts';
 import { readServiceSettings } from '../../src/server/env.ts';
 import { openServices, type Services } from '../../src/server/services.ts';
 import { testDatabase } from './database.ts';
@@ -10,12 +12,25 @@ import { openOutbox, type Outbox } from './outbox.ts';
 /** Where the tests' product says it is: pages of this origin may write. */
 export const PUBLIC_URL = 'http://shed.test';
 
+/** One account mail as it was asked for: which, and what it was given. */
+export interface AskedMail {
+  readonly mail: keyof AccountMails;
+  readonly name?: string;
+  readonly newEmail?: string;
+  readonly token?: string;
+}
+
 /** The real services of one test file. */
 export interface TestServices extends Services {
   /** The mail server's outbox: every mail that was sent, and how it is to behave. */
   readonly outbox: Outbox;
   /** The newest confirmation token mailed to someone, by name, known before the mail has arrived. */
   readonly tokenFor: (name: string) => string;
+  /**
+   * Every account mail asked for so far, in order, known before the answer that asked for it: that none was asked
+   * for needs no waiting. Whether it went out is for the outbox to say.
+   */
+  readonly asked: AskedMail[];
   /** What was logged as a warning or worse since the last test; whoever expects it takes it with `splice(0)`. */
   readonly logged: string[];
 }
@@ -42,7 +57,8 @@ export async function testServices(options: { readonly worker?: boolean } = {}):
     S3_SECRET_ACCESS_KEY: 'none',
   });
   const logged: string[] = [];
-  const { mails, tokenFor } = keepConfirmations(accountMails(settings.PUBLIC_URL));
+  const asked: AskedMail[] = [];
+  const { mails, tokenFor } = keepConfirmations(recordAsked(accountMails(settings.PUBLIC_URL), asked));
   const services = await openServices({
     settings,
     log: pino({ level: 'warn' }, { write: (line: string) => void logged.push(line) }),
@@ -56,5 +72,14 @@ export async function testServices(options: { readonly worker?: boolean } = {}):
     await services.close();
     await outbox.close();
   });
-  return { ...services, outbox, tokenFor, logged };
+  return { ...services, outbox, tokenFor, asked, logged };
+}
+
+function recordAsked(mails: AccountMails, asked: AskedMail[]): AccountMails {
+  return new Proxy(mails, {
+    get: (target, mail: keyof AccountMails) => (props: Omit<AskedMail, 'mail'>) => {
+      asked.push({ mail, ...props });
+      return (target[mail] as (given: typeof props) => Mail)(props);
+    },
+  });
 }

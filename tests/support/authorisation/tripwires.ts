@@ -24,8 +24,11 @@ export const NOTHING = only<Services>({ db: only<Services['db']>({}) });
 /** What finding out where someone stands reads. */
 const STANDING_TABLES: readonly unknown[] = [workshopSlugs, workshops, memberships];
 
-/** Services with which a request gets as far as its rule, and a handler nowhere. */
-export function tripwireServices(services: Services): Services {
+/**
+ * Services with which a request gets as far as its rule, and a handler nowhere.
+ * @param real what is to work all the same
+ */
+export function tripwireServices(services: Services, real: Partial<Services> = {}): Services {
   const select = (...fields: unknown[]) => {
     const builder = (services.db.select as (...all: unknown[]) => object)(...fields);
     return new Proxy(builder, {
@@ -40,6 +43,7 @@ export function tripwireServices(services: Services): Services {
       api: only<Services['auth']['api']>({ getSession: services.auth.api.getSession }),
     }),
     db: only<Database>({ select: select as unknown as Database['select'] }) as Services['db'],
+    ...real,
   });
 }
 
