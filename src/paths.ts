@@ -88,6 +88,11 @@ export const paths = {
   },
 } as const;
 
+/** Whether a path takes whole lists, which are larger than other requests. */
+export function takesLists(pathname: string): boolean {
+  return /^\/api\/workshops\/[^/]+\/builds\/[^/]+\/(parts\/import|episodes\/[^/]+\/captions)$/.test(pathname);
+}
+
 /** Whether the front server may render a page once for everyone: no session, no query. */
 export function isPublicPage(pathname: string): boolean {
   return pathname === '/' || pathname.startsWith('/w/');
