@@ -9,6 +9,7 @@ export interface World {
   readonly owner: Owner;
   readonly editor: TestPerson;
   readonly viewer: TestPerson;
+  readonly invited: TestPerson;
   readonly invitation: string;
 }
 
@@ -16,8 +17,9 @@ export async function makeWorld(product: Product): Promise<World> {
   const owner = await product.owner('Wilhelmina Featherstonehaugh', 'Shed at the End of Long Marsh Lane');
   const editor = await product.person('Bo Lind');
   await product.join(owner, editor, 'editor');
-  const invitation = await product.invite(owner, newAddress('someone-with-a-long-address'), 'moderator');
-  return { owner, editor, viewer: await product.person('Ida Kemp'), invitation };
+  const invited = await product.person('Somebody With A Long Address');
+  const invitation = await product.invite(owner, invited.email, 'moderator');
+  return { owner, editor, viewer: await product.person('Ida Kemp'), invited, invitation };
 }
 
 /** One page in one state. */
@@ -81,7 +83,13 @@ export const PAGES: readonly PageState[] = [
   { route: 'reset/index', at: () => '/reset' },
   { route: 'reset/password', at: () => '/reset/password?token=abc' },
   { route: 'invitations/[invitation]', at: ({ invitation }) => invitation },
-  { route: 'invitations/[invitation]', state: 'signed in', as: viewer, at: ({ invitation }) => invitation },
+  {
+    route: 'invitations/[invitation]',
+    state: 'signed in',
+    as: ({ invited }) => invited,
+    at: ({ invitation }) => invitation,
+  },
+  { route: 'invitations/[invitation]', state: 'of another', as: viewer, at: ({ invitation }) => invitation },
   { route: 'account/index', as: owner, at: () => '/account' },
   { route: 'account/new-address', as: viewer, at: () => '/account/new-address?token=abc' },
   { route: 'account/second-factor', state: 'off', as: viewer, at: () => '/account/second-factor' },

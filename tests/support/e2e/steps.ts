@@ -2,9 +2,9 @@ import { type Page } from '@playwright/test';
 import { TOTP } from 'otpauth';
 import { PASSWORD } from '../people.ts';
 
-/** The six digits that an authenticator app would show now. */
+/** The six digits that an authenticator app would show now; the key may stand in groups, as the page shows it. */
 export function codeOf(key: string | null): string {
-  return new TOTP({ secret: key ?? '' }).generate();
+  return new TOTP({ secret: (key ?? '').replace(/\s/g, '') }).generate();
 }
 
 /** Fills the sign-in form that is open and sends it. */
