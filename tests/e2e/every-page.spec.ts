@@ -1,5 +1,5 @@
 import { mkdir } from 'node:fs/promises';
-import { makeWorld, openState, pageRoutes, PAGES, type World } from '../support/e2e/every-page.ts';
+import { openState, pageRoutes, PAGES } from '../support/e2e/every-page.ts';
 import {
   countStops,
   findBarriers,
@@ -8,6 +8,7 @@ import {
   walkByKeyboard,
 } from '../support/e2e/page-checks.ts';
 import { expect, test as base } from '../support/e2e/test.ts';
+import { makeWorld, type World } from '../support/e2e/world.ts';
 
 const WIDTHS = [1440, 390];
 const SCHEMES = ['light', 'dark'] as const;

@@ -2,25 +2,8 @@ import { type Page, type Response } from '@playwright/test';
 import { filesBelow } from '../architecture/import-graph.ts';
 import { PASSWORD, type TestPerson } from '../people.ts';
 import { enterPassword } from './steps.ts';
-import { newAddress, type Owner, type Product } from './product.ts';
-
-/** What the pages have to show: a workshop with its team and an invitation that waits. */
-export interface World {
-  readonly owner: Owner;
-  readonly editor: TestPerson;
-  readonly viewer: TestPerson;
-  readonly invited: TestPerson;
-  readonly invitation: string;
-}
-
-export async function makeWorld(product: Product): Promise<World> {
-  const owner = await product.owner('Wilhelmina Featherstonehaugh', 'Shed at the End of Long Marsh Lane');
-  const editor = await product.person('Bo Lind');
-  await product.join(owner, editor, 'editor');
-  const invited = await product.person('Somebody With A Long Address');
-  const invitation = await product.invite(owner, invited.email, 'moderator');
-  return { owner, editor, viewer: await product.person('Ida Kemp'), invited, invitation };
-}
+import { type World } from './world.ts';
+import { newAddress } from './product.ts';
 
 /** One page in one state. */
 export interface PageState {
@@ -41,6 +24,10 @@ const bench =
   (rest = '') =>
   (world: World) =>
     `/bench/${world.owner.workshop}${rest}`;
+const inBuild =
+  (rest: (world: World) => string = () => '') =>
+  (world: World) =>
+    `/bench/${world.owner.workshop}/${world.build}${rest(world)}`;
 
 async function startSecondFactor(page: Page): Promise<void> {
   await page.getByLabel('Your password').fill(PASSWORD);
@@ -108,6 +95,23 @@ export const PAGES: readonly PageState[] = [
   { route: 'bench/[workshop]/team', as: owner, at: bench('/team') },
   { route: 'bench/[workshop]/team', state: 'for an editor', as: editor, at: bench('/team') },
   { route: 'bench/[workshop]/settings', as: owner, at: bench('/settings') },
+  { route: 'bench/[workshop]/new', as: owner, at: bench('/new') },
+  { route: 'bench/[workshop]/[build]/index', as: owner, at: inBuild() },
+  { route: 'bench/[workshop]/[build]/settings', as: owner, at: inBuild(() => '/settings') },
+  { route: 'bench/[workshop]/[build]/stages', as: editor, at: inBuild(() => '/stages') },
+  { route: 'bench/[workshop]/[build]/parts/index', as: owner, at: inBuild(() => '/parts') },
+  { route: 'bench/[workshop]/[build]/parts/[part]', as: owner, at: inBuild(({ part }) => `/parts/${part}`) },
+  { route: 'bench/[workshop]/[build]/episodes/index', as: owner, at: inBuild(() => '/episodes') },
+  {
+    route: 'bench/[workshop]/[build]/episodes/out-already',
+    as: owner,
+    at: inBuild(() => '/episodes/out-already'),
+  },
+  {
+    route: 'bench/[workshop]/[build]/episodes/[episode]/publish',
+    as: owner,
+    at: inBuild(({ episode }) => `/episodes/${episode}/publish`),
+  },
 ];
 
 /** Has a spec of its own, because the product itself never shows it. */

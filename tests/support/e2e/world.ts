@@ -1,0 +1,55 @@
+import { makeBuild } from '../../../src/features/builds/server/make-build.ts';
+import { makeEpisode } from '../../../src/features/episodes/server/make-episode.ts';
+import { addPart } from '../../../src/features/parts/server/add-part.ts';
+import { inWorkshop, type TestPerson } from '../people.ts';
+import { type Owner, type Product } from './product.ts';
+
+/** What the pages have to show: a workshop with its team, an invitation that waits, and a build. */
+export interface World {
+  readonly owner: Owner;
+  readonly editor: TestPerson;
+  readonly viewer: TestPerson;
+  readonly invited: TestPerson;
+  readonly invitation: string;
+  /** Its name in addresses. */
+  readonly build: string;
+  readonly part: string;
+  readonly episode: string;
+}
+
+const PART = {
+  number: '117',
+  name: 'Drum shaft',
+  kind: 'made',
+  quantity: 1,
+  material: 'Bright bar 25',
+  size: '25 h9 × 412 mm',
+  aliases: ['the long shaft'],
+  inPlans: true,
+  remark: '',
+} as const;
+
+/** Makes it, by the product's own verbs. */
+export async function makeWorld(product: Product): Promise<World> {
+  const owner = await product.owner('Wilhelmina Featherstonehaugh', 'Shed at the End of Long Marsh Lane');
+  const editor = await product.person('Bo Lind');
+  await product.join(owner, editor, 'editor');
+  const invited = await product.person('Somebody With A Long Address');
+  const invitation = await product.invite(owner, invited.email, 'moderator');
+  const context = await inWorkshop(product.services, owner, owner.workshop);
+  const about = 'A frame press with a powered mill drum.';
+  const plan = { name: 'Orchard press and apple mill', slug: 'press', about, plannedEpisodes: 6 };
+  const { slug: build } = await makeBuild(context, plan);
+  const { id: part } = await addPart(context, { ...PART, build });
+  const { id: episode } = await makeEpisode(context, { build, title: 'The drum and its shaft' });
+  return {
+    owner,
+    editor,
+    viewer: await product.person('Ida Kemp'),
+    invited,
+    invitation,
+    build,
+    part,
+    episode,
+  };
+}
