@@ -1,0 +1,22 @@
+import { type Answer, right, wrong } from '../../domain/answer.ts';
+import { type Tool } from '../tool.ts';
+import { chaptersTool } from './chapters.ts';
+import { lengthTool } from './length.ts';
+import { timecodeTool } from './timecode.ts';
+
+/** The tools by the name they are called by. */
+export const TOOLS: ReadonlyMap<string, Tool> = new Map([
+  ['chapters', chaptersTool],
+  ['length', lengthTool],
+  ['timecode', timecodeTool],
+]);
+
+/** A tool by its name, or the sentence for a name that has none. */
+export function findTool(name: unknown): Answer<Tool> {
+  const known = [...TOOLS.keys(), 'batch'].join(', ');
+  if (typeof name !== 'string' || name === '') return wrong(`Say which tool: ${known}.`);
+  const tool = TOOLS.get(name);
+  return tool === undefined
+    ? wrong(`There is no tool ${name.slice(0, 40)} here. There are: ${known}.`)
+    : right(tool);
+}

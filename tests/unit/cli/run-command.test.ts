@@ -1,0 +1,144 @@
+import { describe, expect, it } from 'vitest';
+import { right, wrong } from '../../../src/domain/answer.ts';
+import { answerLine } from '../../../src/cli/answer-line.ts';
+import { runCommand } from '../../../src/cli/run-command.ts';
+
+const FILES: Readonly<Record<string, string>> = {
+  'chapters.csv': 'at,title\n0,Drum shaft\n3:05,"Bearings, housings"\n370,Gussets\n',
+  'two.csv': 'at,title\n0,Drum shaft\n3:05,Gussets\n',
+  'falling.csv': 'at,title\n0,a\n100,b\n50,c\n',
+  'wrong.csv': 'at,title\nsoon,a\n',
+  'empty.csv': 'at,title\n',
+};
+const read = (path: string) => {
+  const text = FILES[path];
+  return text === undefined ? wrong(`The file ${path} cannot be read.`) : right(text);
+};
+const run = (...args: string[]) => runCommand(args, read);
+const ask = (request: unknown) => answerLine(JSON.stringify(request));
+
+describe('length', () => {
+  // 1 in = 25.4 mm exactly: yard and pound agreement of 1959.
+  it('prints both systems, and the shop fraction with its error', () => {
+    expect(run('length', '1-1/2 in')).toEqual({
+      ok: true,
+      value: '{"mm":38.1,"in":1.5,"fraction":"1 1/2","fractionErrorMm":0}\n',
+    });
+  });
+
+  it('rounds to the mark that is asked for', () => {
+    expect(ask({ tool: 'length', text: '10 mm', nearest: 16 })).toMatchObject({
+      value: { fraction: '3/8', fractionErrorMm: -0.475 },
+    });
+    expect(ask({ tool: 'length', text: '10 mm' })).toMatchObject({ value: { fraction: '25/64' } });
+  });
+
+  it('lists several sizes', () => {
+    expect(ask({ tool: 'length', text: '40 x 3 mm' })).toMatchObject({
+      value: { values: [{ mm: 40 }, { mm: 3 }] },
+    });
+  });
+});
+
+describe('timecode', () => {
+  it.each([
+    [['--rate', '30000/1001', '--drop', '1800'], '{"frame":1800,"timecode":"00:01:00;02","seconds":60.06}\n'],
+    [['--rate', '29.97', '00:01:00;02'], '{"frame":1800,"timecode":"00:01:00;02","seconds":60.06}\n'],
+    [['--rate', '25', '90'], '{"frame":90,"timecode":"00:00:03:15","seconds":3.6}\n'],
+  ])('%j', (args, printed) => {
+    expect(run('timecode', ...args)).toEqual({ ok: true, value: printed });
+  });
+
+  it('answers a batch by the same names', () => {
+    expect(ask({ tool: 'timecode', rate: '30000/1001', drop: true, timecode: '00:01:00;02' })).toEqual({
+      ok: true,
+      value: { frame: 1800, timecode: '00:01:00;02', seconds: 60.06 },
+    });
+    expect(ask({ tool: 'timecode', rate: 25, frame: 90 })).toMatchObject({
+      value: { timecode: '00:00:03:15' },
+    });
+  });
+});
+
+describe('chapters', () => {
+  const at = (form: string, path = 'chapters.csv') => run('chapters', '--to', form, '--length', '848', path);
+
+  it('prints the document in its own form', () => {
+    expect(at('text')).toEqual({
+      ok: true,
+      value: '0:00 Drum shaft\n3:05 Bearings, housings\n6:10 Gussets\n',
+    });
+    expect(at('vtt')).toMatchObject({
+      value: expect.stringMatching(/^WEBVTT\n\n00:00:00\.000 --> 00:03:05\.000\n/),
+    });
+    expect(at('ffmetadata')).toMatchObject({
+      value: expect.stringMatching(/^;FFMETADATA1\n\[CHAPTER\]\nTIMEBASE=1\/1000\n/),
+    });
+    expect(at('podlove')).toMatchObject({ value: expect.stringMatching(/^<psc:chapters version="1\.2"/) });
+  });
+
+  it('prints JSON as one line', () => {
+    const answer = at('json');
+    expect(JSON.parse(answer.ok ? answer.value : '')).toMatchObject({
+      version: '1.2.0',
+      chapters: [{ startTime: 0 }, { startTime: 185 }, { startTime: 370 }],
+    });
+  });
+
+  it('keeps what a video host would not show from its text only', () => {
+    expect(at('text', 'two.csv')).toMatchObject({ ok: false });
+    expect(at('json', 'two.csv')).toMatchObject({ ok: true });
+  });
+
+  it('takes rows in a batch', () => {
+    const chapters = [{ at: 0, title: 'a' }, ['0:20', 'b'], ['40', 'c']];
+    expect(ask({ tool: 'chapters', to: 'text', length: 60, chapters })).toEqual({
+      ok: true,
+      value: { text: '0:00 a\n0:20 b\n0:40 c\n' },
+    });
+  });
+});
+
+describe('Wrong input', () => {
+  it.each([
+    [[], 'Say which tool'],
+    [['measure'], 'There is no tool measure'],
+    [['length'], 'Give a size'],
+    [['length', '12'], 'has no unit'],
+    [['length', '1 in', '--nearest', '7'], 'nearest 16, 32 or 64'],
+    [['length', '--loud', '1 in'], 'not understood'],
+    [['timecode', '1800'], 'Give the rate'],
+    [['timecode', '--rate', 'fast', '1800'], 'no frame rate'],
+    [['timecode', '--rate', '25', '--drop', '5'], 'Drop-frame labels are for'],
+    [['timecode', '--rate', '12/7', '5'], 'whole frames a second'],
+    [['timecode', '--rate', '25', '1', '2'], 'one frame or timecode'],
+    [['timecode', '--rate', '30000/1001', '00:01:00;00'], 'does not exist'],
+    [['chapters', '--to', 'text'], 'Give one list'],
+    [['chapters', '--to', 'opera', 'chapters.csv'], 'Choose a form'],
+    [['chapters', '--to', 'vtt', 'chapters.csv'], 'Give the length'],
+    [['chapters', '--to', 'json', 'lost.csv'], 'cannot be read'],
+    [['chapters', '--to', 'json', 'falling.csv'], 'not after the chapter before'],
+    [['chapters', '--to', 'json', 'wrong.csv'], 'is no time'],
+    [['chapters', '--to', 'json', 'empty.csv'], 'no chapters in the list'],
+    [['chapters', '--to', 'json', '--length', '100', 'chapters.csv'], 'after the video has ended'],
+  ])('%j gets a sentence', (args, sentence) => {
+    const answer = run(...args);
+    expect(answer.ok ? '' : answer.error).toContain(sentence);
+    expect(answer.ok ? '' : answer.error).not.toContain('\n');
+  });
+
+  it.each([
+    ['', 'no JSON object'],
+    ['[]', 'no JSON object'],
+    ['{"tool":7}', 'Say which tool'],
+    ['{"tool":"toString"}', 'no tool toString'],
+    ['{"tool":"length"}', 'Give the size as text'],
+    ['{"tool":"timecode","rate":25}', 'either a frame or a timecode'],
+    ['{"tool":"timecode","rate":25,"frame":1,"timecode":"00:00:00:01"}', 'either a frame or a timecode'],
+    ['{"tool":"timecode","rate":25,"frame":-1}', 'not below zero'],
+    ['{"tool":"chapters","to":"json","chapters":7}', 'Give the chapters'],
+  ])('in a batch, %s gets a sentence', (line, sentence) => {
+    const answer = answerLine(line);
+    expect(answer.ok ? '' : answer.error).toContain(sentence);
+  });
+});
