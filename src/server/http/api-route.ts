@@ -27,6 +27,8 @@ export interface RouteRule<P extends Shape, B extends Shape, Result, A extends z
   /** The body of a write, or the query of a read. */
   readonly body: B;
   readonly answer: A;
+  /** Answers with something else than JSON, such as a file. */
+  readonly reply?: (result: Result) => Response;
   readonly limit?: readonly Limit[];
   readonly form?: FormRule<z.output<P>, z.output<P> & z.output<B>, Result>;
   /** Only for a route that reads no cookie and whose address carries its authority. */
@@ -65,6 +67,7 @@ export function apiRoute<P extends Shape, B extends Shape, Result, A extends z.Z
       await countTries(rule.limit ?? [], parts, input);
       const result = await rule.verb(asked, input);
       if (body.kind === 'form' && rule.form) return await answerForm(context, rule.form, result, input);
+      if (rule.reply) return rule.reply(result);
       return Response.json(rule.answer.parse(result) ?? null, { headers: { 'cache-control': 'no-store' } });
     } catch (error) {
       const answer = toErrorAnswer(error, parts.requestId, parts.services.log);
@@ -82,7 +85,8 @@ function queryOf(url: URL): RequestBody {
 
 function parse<S extends Shape>(schema: S, values: Readonly<Record<string, unknown>>): z.output<S> {
   requireWholeText(values);
-  const parsed = schema.safeParse(values);
+  // For a schema that says nothing of its own: no reader is told of expected strings.
+  const parsed = schema.safeParse(values, { error: () => 'This is missing, or not what belongs here.' });
   if (parsed.success) return parsed.data;
   const fields: Record<string, string> = {};
   for (const issue of parsed.error.issues) fields[issue.path.join('.')] ??= issue.message;
