@@ -1,5 +1,4 @@
 import { describe, expect, test } from 'vitest';
-import { newId } from '../../src/db/columns.ts';
 import { isWorkshopPermission } from '../../src/domain/permissions.ts';
 import { type Context } from '../../src/server/context.ts';
 import { AppError } from '../../src/server/errors.ts';
@@ -13,9 +12,10 @@ import {
 } from '../support/authorisation/expected.ts';
 import {
   exportedFunctions,
-  importsModule,
+  importsOf,
   isRoute,
   isVerb,
+  paramsOf,
   sourceFiles,
   sourceText,
 } from '../support/authorisation/find-ruled.ts';
@@ -98,7 +98,7 @@ describe('every endpoint', () => {
   test.each(routes.map((found) => [`${found.name} ${found.file}`, found] as const))(
     '%s lets in whom the table lets in',
     async (_title, { file, thing }) => {
-      const params = Object.fromEntries([...file.matchAll(/\[(\w+)\]/g)].map(([, name]) => [name, newId()]));
+      const params = paramsOf(file);
       const verdicts = await walk(async (walker) =>
         verdictOf(
           codeOf(
@@ -127,10 +127,11 @@ describe("every function of a feature's server folder", () => {
       ...sourceFiles('src/features', /\/components\/.*\.(ts|tsx|astro)$/),
       ...sourceFiles('src', /^src\/(cli\/.*|[^/]+)\.ts$/),
     ];
+    const imports = new Map(outside.map((file) => [file, importsOf(file)]));
     const problems = functions
       .filter((found) => !isVerb(found))
       .flatMap(({ file, name }) => {
-        const importers = outside.filter((importer) => importsModule(importer, file));
+        const importers = outside.filter((importer) => imports.get(importer)?.includes(file));
         const mixed = verbs.some((verb) => verb.file === file);
         return [
           ...importers.map((importer) => `${file}: ${name} has no rule, and ${importer} imports it`),

@@ -1,5 +1,6 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { newId } from '../../../src/db/columns.ts';
 import { type RuledRoute } from '../../../src/server/http/api-route.ts';
 import { type Ruled } from '../../../src/server/verb.ts';
 import { ROOT } from '../started-product.ts';
@@ -40,6 +41,11 @@ export async function exportedFunctions(files: readonly string[]): Promise<Found
   return modules.flat();
 }
 
+/** An id for everything that an endpoint's path names, from where its file lies; the workshop is for the caller. */
+export function paramsOf(file: string): Record<string, string> {
+  return Object.fromEntries([...file.matchAll(/\[(\w+)\]/g)].map(([, name]) => [name, newId()]));
+}
+
 export function isRoute(found: Found<unknown>): found is Found<RuledRoute> {
   const route = (found.thing as Partial<RuledRoute>).route;
   return route !== undefined && isRuled(route.verb);
@@ -54,10 +60,9 @@ function isRuled(thing: unknown): boolean {
   return typeof thing === 'function' && rule !== undefined && typeof check === 'function';
 }
 
-/** Whether a source text imports a module, whichever folder it does so from. */
-export function importsModule(importer: string, module: string): boolean {
-  const from = [...sourceText(importer).matchAll(/(?:from|import\()\s*'(\.[^']+)'/g)].map(([, path]) =>
-    join(importer, '..', path ?? ''),
+/** The files of ours that a file imports, as its source text says. */
+export function importsOf(file: string): string[] {
+  return [...sourceText(file).matchAll(/(?:from|import\()\s*'(\.[^']+)'/g)].map(([, path]) =>
+    join(file, '..', path ?? ''),
   );
-  return from.includes(module);
 }
