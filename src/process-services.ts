@@ -1,4 +1,5 @@
 import { pino } from 'pino';
+import { bufferLines } from './server/http/buffered-log.ts';
 import { accountMails } from './features/accounts/account-mails.ts';
 import { type ServiceSettings } from './server/env.ts';
 import { openServices, type Services } from './server/services.ts';
@@ -13,7 +14,7 @@ export function openProcessServices(
 ): Promise<Services> {
   return openServices({
     settings,
-    log: pino({ name, level: settings.LOG_LEVEL }),
+    log: pino({ name, level: settings.LOG_LEVEL }, bufferLines(pino.destination(1))),
     accountMails: accountMails(settings.PUBLIC_URL),
     worker: name === 'worker',
   });

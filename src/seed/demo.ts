@@ -1,6 +1,7 @@
 import { makeWorkshop } from '../features/workshops/server/make-workshop.ts';
 import { type Services } from '../server/services.ts';
 import { addSecondFactor, contextFor, DEMO_PASSWORD, joinTeam, makePerson } from './people.ts';
+import { seedPress } from './press.ts';
 
 const SLUG = 'marram-lane';
 
@@ -44,6 +45,7 @@ export async function seedDemo(
     await makePerson(services, PEOPLE.moderator, tokenFor),
     'moderator',
   );
+  await seedPress(await contextFor(services, owner, SLUG));
   await makePerson(services, PEOPLE.viewer, tokenFor);
   await makePerson(services, PEOPLE.builder, tokenFor);
   return Object.entries(PEOPLE).map(([who, { email }]) => ({
