@@ -1,3 +1,4 @@
+import { fileJobs } from './features/files/jobs.ts';
 import { sendInvitationJob } from './features/workshops/jobs.ts';
 import { liveUntilStopped, startProcess } from './process-life.ts';
 import { openProcessServices } from './process-services.ts';
@@ -5,10 +6,16 @@ import { readServiceSettings } from './server/env.ts';
 import { type JobDefinition, workQueue } from './server/jobs/queue.ts';
 
 /** Every job there is. */
-const JOBS: readonly JobDefinition[] = [sendInvitationJob];
+const JOBS: readonly JobDefinition[] = [sendInvitationJob, ...fileJobs];
 
 await startProcess(async () => {
   const services = await openProcessServices(readServiceSettings(), 'worker');
+  await services.storage.prepare().catch((error: unknown) => {
+    services.log.warn(
+      { error: String(error) },
+      'The storage could not be prepared; work on files waits for it.',
+    );
+  });
   await workQueue(services.jobs, JOBS, async (definition, ids, jobId) => {
     const handle = await definition.load();
     try {

@@ -1,5 +1,11 @@
 /** What happened, told once by the verb that did it, in its transaction; the worker fans it out. */
-export const EVENTS = ['invitation-made', 'upload-completed', 'media-found', 'original-dropped'] as const;
+export const EVENTS = [
+  'invitation-made',
+  'upload-completed',
+  'media-found',
+  'original-dropped',
+  'file-ready',
+] as const;
 export type EventName = (typeof EVENTS)[number];
 
 /** The ids that an event carries; whoever handles it reads the rows again. */
