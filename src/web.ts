@@ -1,8 +1,9 @@
 import { fileURLToPath } from 'node:url';
-import { isPublicPage } from './paths.ts';
+import { isPublicPage, takesLists } from './paths.ts';
 import { liveUntilStopped, startProcess } from './process-life.ts';
 import { openProcessServices } from './process-services.ts';
 import { readServiceSettings } from './server/env.ts';
+import { DEFAULT_BODY_LIMIT, LIST_BODY_LIMIT } from './server/http/body-limit.ts';
 import { type FrontServerOptions } from './server/http/front-options.ts';
 import { startFrontServer } from './server/http/front-server.ts';
 import { listenForPageChanges } from './server/http/page-changes.ts';
@@ -24,6 +25,7 @@ await startProcess(async () => {
     changes,
     isHealthy: () => services.isHealthy(),
     isPublicPage,
+    bodyLimit: (path) => (takesLists(path) ? LIST_BODY_LIMIT : DEFAULT_BODY_LIMIT),
     log: services.log,
     locals: () => ({ services }),
   });

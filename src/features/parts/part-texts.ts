@@ -1,3 +1,4 @@
+import { PART_KINDS } from '../../domain/part-kinds.ts';
 import { PART_FIELDS, type PartField, type PartFields, PartInput } from './part.ts';
 
 /** A part as it is typed and shown: a text a column. */
@@ -55,4 +56,12 @@ export function usualText(field: PartField, typed: string): string {
   if (Array.isArray(data)) return data.join('; ');
   if (typeof data === 'boolean') return data ? 'yes' : 'no';
   return String(data);
+}
+
+/** How many parts there are: "34 parts: 20 made, 14 bought". */
+export function sayCounts(kinds: readonly string[]): string {
+  const counts = PART_KINDS.map((kind) => ({ kind, count: kinds.filter((one) => one === kind).length }));
+  const some = counts.filter(({ count }) => count > 0).map(({ kind, count }) => `${String(count)} ${kind}`);
+  const all = kinds.length === 1 ? '1 part' : `${String(kinds.length)} parts`;
+  return some.length === 0 ? all : `${all}: ${some.join(', ')}`;
 }

@@ -3,6 +3,9 @@ import { type IncomingMessage } from 'node:http';
 /** What a request may send unless its route says otherwise. */
 export const DEFAULT_BODY_LIMIT = 1024 * 1024;
 
+/** What a form with a list in it may send: 2 MiB of it, as a file and as text, which encoding may stretch. */
+export const LIST_BODY_LIMIT = 8 * 1024 * 1024;
+
 /** Thrown into a request whose body went past its limit, so that whoever reads it stops. */
 export class BodyTooLarge extends Error {
   constructor(readonly limit: number) {

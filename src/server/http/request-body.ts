@@ -1,4 +1,5 @@
 import { BadRequest, Invalid } from '../errors.ts';
+import { readMultipart } from './multipart-body.ts';
 
 export interface RequestBody {
   readonly kind: 'json' | 'form' | 'none';
@@ -13,6 +14,7 @@ export async function readBody(request: Request): Promise<RequestBody> {
   const type = request.headers.get('content-type')?.split(';')[0]?.trim().toLowerCase() ?? '';
   if (type === 'application/x-www-form-urlencoded')
     return { kind: 'form', values: formValues(await request.text()) };
+  if (type === 'multipart/form-data') return { kind: 'form', values: await readMultipart(request) };
   if (type === 'application/json') return { kind: 'json', values: jsonValues(await request.text()) };
   if ((await request.text()) === '') return { kind: 'none', values: {} };
   throw new BadRequest('Send a form or JSON. Nothing was changed.');

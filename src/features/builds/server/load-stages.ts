@@ -1,6 +1,5 @@
 import { and, asc, eq, isNull, sql } from 'drizzle-orm';
 import { stages } from '../../../db/schema/builds.ts';
-import { diaryEntries } from '../../../db/schema/diary.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
 import { NotFound } from '../../../server/errors.ts';
 import { type Stage } from '../stage.ts';
@@ -13,8 +12,9 @@ export function loadStages({ db, workshop }: WorkshopContext, buildId: string): 
       name: stages.name,
       about: stages.about,
       version: stages.version,
-      entries: sql<number>`(select count(*)::int from ${diaryEntries}
-        where ${diaryEntries.stageId} = ${stages.id} and ${diaryEntries.deletedAt} is null)`,
+      // Named in full: of one table alone the columns would be written without it, and mean the inner one's.
+      entries: sql<number>`(select count(*)::int from diary_entries
+        where diary_entries.stage_id = stages.id and diary_entries.deleted_at is null)`,
     })
     .from(stages)
     .where(and(eq(stages.workshopId, workshop.id), eq(stages.buildId, buildId), isNull(stages.deletedAt)))
