@@ -1,4 +1,4 @@
-// npm test: everything that can be tested, closing on one line that adds both runners up.
+// npm test: everything that can be tested, closing on one line that adds all runs up.
 import { mkdtempSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { runCommand } from './run-command.mjs';
@@ -8,29 +8,40 @@ import { runScript } from './trouble.mjs';
 
 const BIN = join(ROOT, 'node_modules', '.bin');
 
+/**
+ * @param {string} reports the folder for its report
+ * @param {string} projects which of vitest.config.ts
+ */
+async function runVitest(reports, projects) {
+  const report = join(reports, `${projects}.json`);
+  const { status } = await runCommand(
+    join(BIN, 'vitest'),
+    ['run', '--project', projects, '--reporter=default', '--reporter=json', `--outputFile.json=${report}`],
+    { cwd: ROOT, show: true },
+  );
+  return { status, counts: countVitest(report) };
+}
+
+/** @param {string} reports the folder for its report */
+async function runEndToEnd(reports) {
+  const report = join(reports, 'end-to-end.json');
+  const { status } = await runCommand(
+    join(BIN, 'playwright'),
+    ['test', '--reporter=list,json', '--pass-with-no-tests'],
+    { cwd: ROOT, show: true, env: { PLAYWRIGHT_JSON_OUTPUT_FILE: report } },
+  );
+  return { status, counts: countEndToEnd(report) };
+}
+
 await runScript(async () => {
   await setUp({ debian: ['postgresql-15', 'ffmpeg', 'chromium'], build: 'when-changed' });
   const reports = mkdtempSync(join(ROOT, '.astro', 'test-reports-'));
-  const vitestReport = join(reports, 'vitest.json');
-  const endToEndReport = join(reports, 'end-to-end.json');
   try {
-    const vitest = await runCommand(
-      join(BIN, 'vitest'),
-      ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${vitestReport}`],
-      { cwd: ROOT, show: true },
-    );
-    const endToEnd = await runCommand(
-      join(BIN, 'playwright'),
-      ['test', '--reporter=list,json', '--pass-with-no-tests'],
-      {
-        cwd: ROOT,
-        show: true,
-        env: { PLAYWRIGHT_JSON_OUTPUT_FILE: endToEndReport },
-      },
-    );
     const { line, status } = addUp([
-      { status: vitest.status, counts: countVitest(vitestReport) },
-      { status: endToEnd.status, counts: countEndToEnd(endToEndReport) },
+      // Apart from the rest, because the projects differ in how many workers they may have.
+      await runVitest(reports, '!integration'),
+      await runVitest(reports, 'integration'),
+      await runEndToEnd(reports),
     ]);
     console.log(`\n${line}`);
     return status;
