@@ -21,7 +21,7 @@ export function DimensionLine({ mm, inch, given = 'mm', origin }: DimensionLineP
   const ordered = given === 'mm' ? forms : forms.toReversed();
   return (
     <span
-      className="dimension inline-flex items-center gap-1 align-baseline font-mono text-[0.95em] font-semibold whitespace-nowrap"
+      className="dimension inline-flex max-w-full items-center gap-1 align-baseline font-mono text-[0.95em] font-semibold"
       data-forms={ordered.length === 2 ? 'both' : 'one'}
       title={origin}
     >

@@ -27,7 +27,7 @@ export function LyingRule({
   return (
     <div className="@container">
       <BalloonStrips {...strip} marks={balloons.toSorted(byTime)} now={now} />
-      <div className="steel border border-steel-edge">
+      <div className="steel border border-steel-edge" data-rule-face="">
         <svg height={FACE} className={`${STRIP} block`} aria-hidden="true">
           <pattern
             id={hatch}

@@ -92,3 +92,8 @@ export interface Companion {
   /** How many episodes the series has or plans. */
   readonly of: number;
 }
+
+/** An episode's number as its address has it; 0, which no episode has, for anything else. */
+export function numberInAddress(text: string | undefined): number {
+  return /^[1-9]\d{0,3}$/.test(text ?? '') ? Number(text) : 0;
+}

@@ -1,0 +1,29 @@
+import { followOf } from './video-now.ts';
+
+/** How long it says that the link was copied, in milliseconds. */
+const SAID_MS = 4000;
+
+/** Copies a link to the present instant; where nothing may be copied, shows it selected. */
+export class MomentLink extends HTMLElement {
+  connectedCallback(): void {
+    this.querySelector('button')?.addEventListener('click', () => void this.#copy());
+  }
+
+  async #copy(): Promise<void> {
+    const seconds = Math.floor(followOf(this)?.now?.seconds ?? 0);
+    const link = location.origin + location.pathname + (seconds === 0 ? '' : `?t=${String(seconds)}`);
+    const field = this.querySelector('input');
+    const status = this.querySelector('[role="status"]');
+    try {
+      await navigator.clipboard.writeText(link);
+      if (!status) return;
+      status.textContent = 'Link copied.';
+      setTimeout(() => (status.textContent = ''), SAID_MS);
+    } catch {
+      if (!field) return;
+      field.value = link;
+      field.closest('[hidden]')?.removeAttribute('hidden');
+      field.select();
+    }
+  }
+}
