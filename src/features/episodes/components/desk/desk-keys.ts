@@ -1,0 +1,118 @@
+import { NOTE_KINDS, type NoteKind } from '../../../../domain/note-kinds.ts';
+import { type StepSize } from './moment.ts';
+
+export type Command =
+  | { readonly do: 'play' | 'in' | 'out' | 'clear-marks' | 'note' | 'chapter' | 'bench' }
+  | { readonly do: 'kind'; readonly kind: NoteKind }
+  | { readonly do: 'step'; readonly by: 1 | -1; readonly size: StepSize }
+  | { readonly do: 'to-note'; readonly by: 1 | -1 }
+  | { readonly do: 'edit' | 'move-here' | 'delete' | 'undo' | 'redo' | 'keys' | 'leave' }
+  | { readonly do: 'nudge'; readonly by: 1 | -1; readonly size: StepSize };
+
+/** A key as the browser reports it. */
+export interface Pressed {
+  readonly key: string;
+  readonly ctrlKey: boolean;
+  readonly metaKey: boolean;
+  readonly shiftKey: boolean;
+  readonly altKey: boolean;
+}
+
+const SINGLE: Readonly<Record<string, Command>> = {
+  ' ': { do: 'play' },
+  ',': { do: 'step', by: -1, size: 'frame' },
+  '.': { do: 'step', by: 1, size: 'frame' },
+  '<': { do: 'nudge', by: -1, size: 'frame' },
+  '>': { do: 'nudge', by: 1, size: 'frame' },
+  '-': { do: 'nudge', by: -1, size: 'second' },
+  '+': { do: 'nudge', by: 1, size: 'second' },
+  i: { do: 'in' },
+  o: { do: 'out' },
+  x: { do: 'clear-marks' },
+  n: { do: 'note' },
+  c: { do: 'chapter' },
+  p: { do: 'bench' },
+  b: { do: 'to-note', by: -1 },
+  f: { do: 'to-note', by: 1 },
+  e: { do: 'edit' },
+  m: { do: 'move-here' },
+  Delete: { do: 'delete' },
+  '?': { do: 'keys' },
+  Escape: { do: 'leave' },
+};
+
+/** The keys that are digits, in the order in which kinds are offered: 1 is a step, 0 a tip. */
+export function digitOf(kind: NoteKind): string {
+  return String((NOTE_KINDS.indexOf(kind) + 1) % 10);
+}
+
+/**
+ * What a key does when nobody is typing.
+ * @param singles false when keys without Ctrl are switched off
+ */
+export function commandOf(
+  { key, ctrlKey, metaKey, shiftKey, altKey }: Pressed,
+  singles = true,
+): Command | null {
+  if (altKey) return null;
+  if (ctrlKey || metaKey) {
+    const letter = key.toLowerCase();
+    if (letter === 'z') return { do: shiftKey ? 'redo' : 'undo' };
+    return letter === 'y' && !shiftKey ? { do: 'redo' } : null;
+  }
+  if (!singles) return null;
+  if (key === 'ArrowLeft' || key === 'ArrowRight') {
+    return { do: 'step', by: key === 'ArrowLeft' ? -1 : 1, size: shiftKey ? 'ten' : 'second' };
+  }
+  const kind = NOTE_KINDS.find((one) => digitOf(one) === key);
+  if (kind !== undefined) return { do: 'kind', kind };
+  return SINGLE[key] ?? SINGLE[key.toLowerCase()] ?? null;
+}
+
+/** What the panel says, a group at a time. */
+export const KEY_GROUPS: readonly {
+  readonly title: string;
+  readonly keys: readonly (readonly [keys: string, does: string])[];
+}[] = [
+  {
+    title: 'The video',
+    keys: [
+      ['Space', 'play or stop'],
+      ['← →', 'one second'],
+      ['Shift ← →', 'ten seconds'],
+      [', .', 'one frame'],
+      ['B F', 'to the note before, to the following one'],
+    ],
+  },
+  {
+    title: 'Writing',
+    keys: [
+      ['N', 'a note at this moment'],
+      ['1 … 9, 0', 'a note of that kind'],
+      ['I O', 'in and out: the note holds from one to the other'],
+      ['X', 'forget in and out'],
+      ['C', 'a chapter from here'],
+      ['P', 'put a part on the bench'],
+      ['Ctrl Enter', 'save, while typing'],
+      ['Esc', 'leave the field; the other keys work again'],
+    ],
+  },
+  {
+    title: 'The marked note',
+    keys: [
+      ['E', 'change it'],
+      ['M', 'move it to the moment on screen'],
+      ['< >', 'move it by a frame'],
+      ['− +', 'move it by a second'],
+      ['Delete', 'delete it'],
+    ],
+  },
+  {
+    title: 'Everything',
+    keys: [
+      ['Ctrl Z', 'undo'],
+      ['Ctrl Shift Z', 'do it again'],
+      ['?', 'these keys'],
+    ],
+  },
+];
