@@ -38,6 +38,8 @@ export function serviceEnvironment(
     S3_BUCKET: settings.S3_BUCKET,
     // The demo is decided here; a process of its own would refuse it beside a DATABASE_URL.
     DEMO: '0',
+    // Announces at every start that it will want a newer Node one day.
+    AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
   };
   if (parts.s3Port !== undefined) {
     environment['S3_ENDPOINT'] = loopback(parts.s3Port);

@@ -24,7 +24,19 @@ const SOUND = ['-f', 'lavfi', '-i', 'sine=frequency=440:duration=2'];
 
 /** Two seconds at 25 frames a second, H.264 and AAC. @param options further ones of the output */
 export function makeFilm(name = 'C0043.mp4', ...options: string[]): Promise<Buffer> {
-  const h264 = ['-c:v', 'libx264', '-preset', 'ultrafast', '-pix_fmt', 'yuv420p', '-c:a', 'aac', '-shortest'];
+  const h264 = [
+    '-c:v',
+    'libx264',
+    '-preset',
+    'ultrafast',
+    '-pix_fmt',
+    'yuv420p',
+    '-c:a',
+    'aac',
+    '-flags:a',
+    '+bitexact',
+    '-shortest',
+  ];
   return makeMedia(name, ...PICTURE, ...SOUND, ...h264, ...options);
 }
 

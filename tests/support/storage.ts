@@ -4,6 +4,9 @@ import { openStorage, type Storage } from '../../src/server/storage/storage.ts';
 import { PUBLIC_URL, testServices, type TestServices } from './services.ts';
 import { throwawayFolder } from './throwaway.ts';
 
+// The SDK announces on stderr that it will want a newer Node one day; the product's settings silence it too.
+process.env['AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED'] = 'true';
+
 /** Services whose storage is a stand-in in this process. */
 export interface StorageServices extends TestServices {
   readonly storage: Storage;

@@ -1,5 +1,4 @@
 import { type FileHandle, open } from 'node:fs/promises';
-import { pipeline } from 'node:stream/promises';
 import { type StoredPart } from './storage-uploads.ts';
 import { type Storage } from './storage.ts';
 
@@ -29,8 +28,13 @@ async function fetchStretch(
   file: FileHandle,
   range: { readonly first: number; readonly last: number },
 ): Promise<void> {
-  const body = await storage.read(key, range);
-  await pipeline(body, file.createWriteStream({ start: range.first, autoClose: false }));
+  let at = range.first;
+  for await (const chunk of await storage.read(key, range)) {
+    const bytes = chunk as Buffer;
+    await file.writev([bytes], at);
+    at += bytes.length;
+  }
+  if (at !== range.last + 1) throw new Error('The storage gave less than it has.');
 }
 
 /**
