@@ -51,7 +51,13 @@ export const PAGES: readonly PageState[] = [
   { route: 'index', at: () => '/' },
   { route: '404', at: () => '/nowhere-at-all' },
   { route: 'error', as: editor, at: bench('/settings') },
+  { route: '500', at: () => '/500' },
   { route: 'w/[workshop]', at: (world) => `/w/${world.owner.workshop}` },
+  { route: 'w/[workshop]/[build]/index', at: (world) => `/w/${world.owner.workshop}/${world.build}` },
+  {
+    route: 'w/[workshop]/[build]/episodes/[number]/index',
+    at: (world) => `/w/${world.owner.workshop}/${world.build}/episodes/1`,
+  },
   { route: 'sign-up/index', at: () => '/sign-up' },
   { route: 'sign-up/index', state: 'sent back', at: () => '/sign-up', then: sendNamelessSignUp },
   { route: 'sign-up/check-mail', at: () => '/sign-up/check-mail' },
@@ -101,6 +107,13 @@ export const PAGES: readonly PageState[] = [
   { route: 'bench/[workshop]/[build]/stages', as: editor, at: inBuild(() => '/stages') },
   { route: 'bench/[workshop]/[build]/parts/index', as: owner, at: inBuild(() => '/parts') },
   { route: 'bench/[workshop]/[build]/parts/[part]', as: owner, at: inBuild(({ part }) => `/parts/${part}`) },
+  { route: 'bench/[workshop]/[build]/parts/import', as: owner, at: inBuild(() => '/parts/import') },
+  { route: 'bench/[workshop]/[build]/diary', as: editor, at: inBuild(() => '/diary') },
+  {
+    route: 'bench/[workshop]/[build]/episodes/[episode]/index',
+    as: editor,
+    at: inBuild(({ episode }) => `/episodes/${episode}`),
+  },
   { route: 'bench/[workshop]/[build]/episodes/index', as: owner, at: inBuild(() => '/episodes') },
   {
     route: 'bench/[workshop]/[build]/episodes/out-already',

@@ -24,6 +24,8 @@ const validator = new HtmlValidate(
       'valid-id': ['error', { relaxed: true }],
       // Two submit buttons may share a name: the one that is pressed is sent.
       'form-dup-name': ['error', { shared: ['radio', 'checkbox', 'button', 'submit'] }],
+      // Titles hold the names that people give to workshops and builds.
+      'long-title': 'off',
       'no-inline-style': 'error',
     },
   }),

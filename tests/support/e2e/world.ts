@@ -1,10 +1,12 @@
+import { changeBuild } from '../../../src/features/builds/server/change-build.ts';
 import { makeBuild } from '../../../src/features/builds/server/make-build.ts';
+import { bringInEpisodes } from '../../../src/features/episodes/server/bring-in-episodes.ts';
 import { makeEpisode } from '../../../src/features/episodes/server/make-episode.ts';
 import { addPart } from '../../../src/features/parts/server/add-part.ts';
 import { inWorkshop, type TestPerson } from '../people.ts';
 import { type Owner, type Product } from './product.ts';
 
-/** What the pages have to show: a workshop with its team, an invitation that waits, and a build. */
+/** What the pages have to show: a workshop with its team, an invitation that waits, and a build on show with an episode. */
 export interface World {
   readonly owner: Owner;
   readonly editor: TestPerson;
@@ -14,6 +16,7 @@ export interface World {
   /** Its name in addresses. */
   readonly build: string;
   readonly part: string;
+  /** A draft. */
   readonly episode: string;
 }
 
@@ -29,6 +32,13 @@ const PART = {
   remark: '',
 } as const;
 
+const EPISODE = {
+  number: 1,
+  title: 'The frame, and why it is square',
+  address: 'https://video.example/watch/the-frame',
+  publishedOn: '2026-03-14',
+};
+
 /** Makes it, by the product's own verbs. */
 export async function makeWorld(product: Product): Promise<World> {
   const owner = await product.owner('Wilhelmina Featherstonehaugh', 'Shed at the End of Long Marsh Lane');
@@ -40,6 +50,8 @@ export async function makeWorld(product: Product): Promise<World> {
   const about = 'A frame press with a powered mill drum.';
   const plan = { name: 'Orchard press and apple mill', slug: 'press', about, plannedEpisodes: 6 };
   const { slug: build } = await makeBuild(context, plan);
+  await changeBuild(context, { ...plan, build, currency: 'GBP', visibility: 'public', version: 1 });
+  await bringInEpisodes(context, { build, episodes: [EPISODE] });
   const { id: part } = await addPart(context, { ...PART, build });
   const { id: episode } = await makeEpisode(context, { build, title: 'The drum and its shaft' });
   return {
