@@ -47,7 +47,7 @@ export const TRADE_NAMES: readonly RegExp[] = [
 ];
 
 const MAKE = String.raw`(?:bright|black|mild|steel|stainless|alloy|alumini?um|brass|copper|cast|silver|tool|spring|cold|hot|rolled|drawn|solid|square|round|flat|hollow|hex|hexagon|galvani[sz]ed|welded|seamless|hydraulic|threaded|ball|roller|thick|wall|drill)`;
-const STOCK = String.raw`(?:bars?|flats?|plates?|sheets?|angles?|channels?|tub(?:es?|ing)|pipes?|hoses?|box|SHS|RHS|rounds?|rods?|electrodes?|wire|stock|studding|bolts?|screws?|nuts?|washers?|bearings?|chain|belts?|ply(?:wood)?|timbers?|boards?|cable|rope|drills?|drill bits?|taps?|reamers?|E?(?:60(?:10|11|13)|70(?:14|16|18|24))s?)`;
+const STOCK = String.raw`(?:bars?|flats?|plates?|sheets?|angles?|channels?|tub(?:es?|ing)|pipes?|hoses?|box|SHS|RHS|rounds?|rods?|electrodes?|wire|stock|studding|bolts?|screws?|nuts?|washers?|bearings?|chain|belts?|ply(?:wood)?|stainless|timbers?|boards?|cable|rope|drills?|drill bits?|taps?|reamers?|E?(?:60(?:10|11|13)|70(?:14|16|18|24))s?)`;
 
 /** After a size: what makes it the name of a stock size, as in 40 mm bright bar or 3.2 mm rods. */
 export const STOCK_AFTER = new RegExp(

@@ -56,7 +56,7 @@ describe('What is no size', () => {
     '30 ft-lb, 5 in-lb, 20 ft lb',
     'Two of 101 in 2026',
     '2 in the bin, 3 in a row, 1/2 in the vice',
-    '“12 mm plate”, 50 mm angle, 30 mm square tube',
+    '“12 mm plate”, 50 mm angle, 30 mm square tube, 6 mm stainless',
     'He said "it is 40" and "part 3"',
     "The '80' of it, the 90's",
     'C0043 mm, A-40 mm, 1.2.3 mm',
