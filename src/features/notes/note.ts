@@ -33,9 +33,21 @@ function requireAsked(input: { audience: string; askedId: string | null }): bool
 }
 const ASKED = { path: ['askedId'], error: 'Choose who is asked.' };
 
+/** A usual caution has words of its own; any other note needs some. */
+function requireWords({ text, topic }: { text: string; topic: string | null }): boolean {
+  return text !== '' || topic !== null;
+}
+const WORDS = { path: ['text'], error: 'Write what the note says.' };
+
 /** The id is made by whoever adds the note, so that one sent twice is kept once. */
-export const AddNoteInput = z.object({ ...fields, id }).refine(requireAsked, ASKED);
-export const ChangeNoteInput = z.object({ ...fields, version }).refine(requireAsked, ASKED);
+export const AddNoteInput = z
+  .object({ ...fields, id })
+  .refine(requireAsked, ASKED)
+  .refine(requireWords, WORDS);
+export const ChangeNoteInput = z
+  .object({ ...fields, version })
+  .refine(requireAsked, ASKED)
+  .refine(requireWords, WORDS);
 export type NoteFields = Omit<z.output<typeof ChangeNoteInput>, 'version'>;
 
 export const VersionInput = z.object({ version });

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { and, eq, isNull } from 'drizzle-orm';
 import { anchors, chapters } from '../../../db/schema/notes.ts';
 import { type Position } from '../../../domain/positions.ts';
 import { onUniqueViolation } from '../../../server/constraint.ts';
@@ -10,12 +10,17 @@ import { type EpisodeRef, loadEpisode } from './load-episode.ts';
 
 type Input = EpisodeRef & { readonly id: string; readonly title: string; readonly position: Position };
 
-/** Begins a chapter at a moment. */
+/** Begins a chapter at a moment. Sent twice, because the first answer was lost, it is kept once. */
 export const addChapter = verb(
   { may: 'draft-note.change' },
   async (context, input: Input): Promise<Chapter> => {
     const { db, workshop } = context;
     const { episode } = await loadEpisode(context, input);
+    const [sentBefore] = await loadChaptersWhere(
+      db,
+      and(eq(chapters.id, input.id), eq(chapters.episodeId, episode.id), isNull(chapters.deletedAt)),
+    );
+    if (sentBefore) return sentBefore;
     const { frame, rate } = input.position;
     const [anchor] = await db
       .insert(anchors)

@@ -2,6 +2,7 @@ import { eq } from 'drizzle-orm';
 import { newId } from '../../../db/columns.ts';
 import { editions, episodeNumbers, episodes, videos } from '../../../db/schema/episodes.ts';
 import { readVideoAddress } from '../../../domain/video-addresses/read-video-address.ts';
+import { onUniqueViolation } from '../../../server/constraint.ts';
 import { Invalid } from '../../../server/errors.ts';
 import { verb } from '../../../server/verb.ts';
 import { loadBuild } from '../../builds/server/load-build.ts';
@@ -54,9 +55,10 @@ export const bringInEpisodes = verb(
         state: 'published',
         publishedOn: row.publishedOn,
       });
-      await db
-        .insert(episodeNumbers)
-        .values({ ...tenant, buildId: build.id, number: row.number, current: true });
+      const justTaken = { lines: `Another episode took the number ${String(row.number)} in the meantime.` };
+      await onUniqueViolation({ episode_numbers_pkey: justTaken }, () =>
+        db.insert(episodeNumbers).values({ ...tenant, buildId: build.id, number: row.number, current: true }),
+      );
       await db
         .insert(videos)
         .values({ ...tenant, id: videoId, address: row.address, rateNum: 1000, rateDen: 1, addedBy: person });

@@ -1,6 +1,7 @@
 import { eq } from 'drizzle-orm';
 import { anchors, chapters } from '../../../db/schema/notes.ts';
 import { type Position } from '../../../domain/positions.ts';
+import { NotFound } from '../../../server/errors.ts';
 import { verb } from '../../../server/verb.ts';
 import { announceEpisode } from './announce-episode.ts';
 import { loadChaptersWhere } from './load-chapters.ts';
@@ -12,6 +13,7 @@ type Input = ChapterRef & { readonly title: string; readonly position: Position 
 export const changeChapter = verb({ may: 'draft-note.change' }, async (context, input: Input) => {
   const { db, now } = context;
   const { episode, row, shown } = await lockChapter(context, input);
+  if (row.deletedAt !== null) throw new NotFound('This chapter');
   const { frame, rate } = input.position;
   await db
     .update(anchors)

@@ -17,6 +17,6 @@ export async function lockChapter(context: WorkshopContext, ref: ChapterRef) {
     .for('update');
   const [shown] = await loadChaptersWhere(context.db, eq(chapters.id, ref.chapter));
   if (!row || !shown) throw new NotFound('This chapter');
-  if (row.version !== ref.version) throw new Conflict(shown);
+  if (row.version !== ref.version) throw new Conflict({ ...shown, deleted: row.deletedAt !== null });
   return { episode, row, shown };
 }

@@ -1,5 +1,5 @@
-import { eq } from 'drizzle-orm';
-import { notes } from '../../../db/schema/notes.ts';
+import { and, eq, isNull } from 'drizzle-orm';
+import { anchors, notes } from '../../../db/schema/notes.ts';
 import { onUniqueViolation } from '../../../server/constraint.ts';
 import { verb } from '../../../server/verb.ts';
 import { type Note, type NoteFields } from '../note.ts';
@@ -10,6 +10,7 @@ import { makeAnchor, requireKnown, writeParts } from './write-note.ts';
 
 /**
  * Adds a note at a moment or a stretch of an episode. On a published episode an editor's number is a proposal.
+ * Sent twice by the same person, because the first answer was lost, it is kept once.
  * @throws Invalid for a part or a person that is not known
  */
 export const addNote = verb(
@@ -19,6 +20,9 @@ export const addNote = verb(
     const episode = await loadEpisodeOfNotes(context, input);
     await requireKnown(context, episode, input);
     const { id, kind, text, audience, askedId, standing, topic } = input;
+    const writer = actor.kind === 'account' ? actor.id : null;
+    const [kept] = writer === null ? [] : await loadNotes(db, sentBefore(id, episode.id, writer));
+    if (kept) return kept;
     const anchorId = await makeAnchor(context, episode, input.position);
     await onUniqueViolation(
       { notes_pkey: { id: 'This note is kept already. Open the page again to see it.' } },
@@ -35,7 +39,7 @@ export const addNote = verb(
           standing,
           topic,
           proposed: isProposal(context, episode, kind),
-          writtenBy: actor.kind === 'account' ? actor.id : null,
+          writtenBy: writer,
         }),
     );
     await writeParts(context, id, input.partIds);
@@ -45,3 +49,12 @@ export const addNote = verb(
     return note;
   },
 );
+
+function sentBefore(id: string, episodeId: string, writer: string) {
+  return and(
+    eq(notes.id, id),
+    eq(anchors.episodeId, episodeId),
+    eq(notes.writtenBy, writer),
+    isNull(notes.deletedAt),
+  );
+}

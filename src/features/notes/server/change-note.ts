@@ -4,7 +4,7 @@ import { verb } from '../../../server/verb.ts';
 import { type Note, type NoteFields } from '../note.ts';
 import { announceNotes, requireMayChange } from './guard-published.ts';
 import { type EpisodeRef, loadEpisodeOfNotes } from './load-episode.ts';
-import { keepVersion, loadNoteAt } from './load-note.ts';
+import { keepVersion, loadStandingNoteAt } from './load-note.ts';
 import { loadNotes } from './load-notes.ts';
 import { anchorAt, requireKnown, writeParts } from './write-note.ts';
 
@@ -19,12 +19,13 @@ export const changeNote = verb(
   async (context, input: Change): Promise<Note> => {
     const { db, now } = context;
     const episode = await loadEpisodeOfNotes(context, input);
-    const { row, shown } = await loadNoteAt(context, episode, input);
+    const { row, shown } = await loadStandingNoteAt(context, episode, input);
     if (!row.proposed) requireMayChange(context, episode, [row.kind, input.kind]);
     await requireKnown(context, episode, input);
     await keepVersion(context, shown);
     const { kind, text, audience, askedId, standing, topic } = input;
-    const asked = audience === 'person' ? askedId : null;
+    // Who was asked, and what they answered, stays known when the note turns to others.
+    const asked = audience === 'person' ? askedId : row.askedId;
     await db
       .update(notes)
       .set({

@@ -2,7 +2,7 @@ import { type Ruled, verb } from '../../../server/verb.ts';
 import { type Note } from '../note.ts';
 import { announceNotes, requireMayChange } from './guard-published.ts';
 import { type EpisodeRef, loadEpisodeOfNotes } from './load-episode.ts';
-import { loadNoteAt } from './load-note.ts';
+import { loadStandingNoteAt } from './load-note.ts';
 import { setNote } from './set-note.ts';
 
 type Target = EpisodeRef & { readonly note: string; readonly version: number };
@@ -12,7 +12,7 @@ export const deleteNote: Ruled<Target, Note> = verb(
   { may: 'draft-note.change' },
   async (context, input: Target) => {
     const episode = await loadEpisodeOfNotes(context, input);
-    const { row } = await loadNoteAt(context, episode, input);
+    const { row } = await loadStandingNoteAt(context, episode, input);
     if (!row.proposed) requireMayChange(context, episode, [row.kind]);
     await announceNotes(context, episode);
     return setNote(context, row, { deletedAt: context.now });

@@ -1,4 +1,4 @@
-import { eq, or, sql } from 'drizzle-orm';
+import { and, eq, ne, or } from 'drizzle-orm';
 import { notes } from '../../../db/schema/notes.ts';
 import { read } from '../../../server/verb.ts';
 import { type EpisodeRef, loadEpisodeOfNotes } from './load-episode.ts';
@@ -8,12 +8,11 @@ import { loadNotes, ofEpisode } from './load-notes.ts';
 export const listNotes = read({ may: 'workshop.see-bench' }, async (context, ref: EpisodeRef) => {
   const { db, actor, role } = context;
   const episode = await loadEpisodeOfNotes(context, ref);
-  const reader = actor.kind === 'account' ? actor.id : null;
-  const mine = or(
-    sql`${notes.audience} <> 'person'`,
-    eq(notes.askedId, reader ?? ''),
-    eq(notes.writtenBy, reader ?? ''),
-  );
-  const items = await loadNotes(db, sql`${ofEpisode(episode.id)} and ${role === 'owner' ? sql`true` : mine}`);
+  const others = ne(notes.audience, 'person');
+  const mine =
+    actor.kind === 'account'
+      ? or(others, eq(notes.askedId, actor.id), eq(notes.writtenBy, actor.id))
+      : others;
+  const items = await loadNotes(db, and(ofEpisode(episode.id), role === 'owner' ? undefined : mine));
   return { items, nextCursor: null };
 });

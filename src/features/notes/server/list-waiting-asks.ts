@@ -27,6 +27,7 @@ export const listWaitingAsks = read(
         and(
           eq(notes.workshopId, workshop.id),
           eq(notes.askedId, actor.id),
+          eq(notes.audience, 'person'),
           isNull(notes.answeredAt),
           isNull(notes.deletedAt),
         ),

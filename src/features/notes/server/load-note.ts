@@ -8,24 +8,42 @@ import { loadNotes } from './load-notes.ts';
 
 /**
  * A note of an episode as stored, locked for the change that follows, with its presentation.
- * @throws NotFound, or Conflict with the stored note when it is not at the version that the change names
+ * @throws NotFound for one that the reader may not see either, or Conflict with the stored note, and whether it is
+ *   deleted, when it is not at the version that the change names
  */
 export async function loadNoteAt(
-  { db, workshop }: WorkshopContext,
+  context: WorkshopContext,
   episode: EpisodeOfNotes,
   { note: id, version }: { readonly note: string; readonly version: number },
 ) {
+  const { db, workshop } = context;
   const [row] = await db
     .select({ note: notes })
     .from(notes)
     .innerJoin(anchors, eq(anchors.id, notes.anchorId))
     .where(and(eq(notes.id, id), eq(notes.workshopId, workshop.id), eq(anchors.episodeId, episode.id)))
     .for('update', { of: notes });
-  if (!row) throw new NotFound('This note');
+  if (!row || !maySee(context, row.note)) throw new NotFound('This note');
   const [shown] = await loadNotes(db, eq(notes.id, id));
   if (!shown) throw new NotFound('This note');
-  if (row.note.version !== version) throw new Conflict(shown);
+  if (row.note.version !== version) throw new Conflict({ ...shown, deleted: row.note.deletedAt !== null });
   return { row: row.note, shown };
+}
+
+/**
+ * The same of a note that is not deleted.
+ * @throws NotFound, Conflict
+ */
+export async function loadStandingNoteAt(...asked: Parameters<typeof loadNoteAt>) {
+  const found = await loadNoteAt(...asked);
+  if (found.row.deletedAt !== null) throw new NotFound('This note');
+  return found;
+}
+
+/** What is asked of one person is for them, who asked, and the owner. */
+function maySee({ actor, role }: WorkshopContext, note: typeof notes.$inferSelect): boolean {
+  if (note.audience !== 'person' || role === 'owner') return true;
+  return actor.kind === 'account' && (note.askedId === actor.id || note.writtenBy === actor.id);
 }
 
 /** Keeps what a note said, before it is changed. */
