@@ -56,7 +56,7 @@ describe('What may import what', () => {
 
   it('finds every file that is imported', () => {
     const known = new Set(files);
-    const asset = /\.(json|svg|txt|d\.ts)$/;
+    const asset = /(\.(json|svg|txt|d\.ts)|\?raw)$/;
     // Written by the build, beside the bundles.
     const built = 'src/server/entry.mjs';
     const lost = edges.filter(({ ours, to }) => ours && !known.has(to) && !asset.test(to) && to !== built);

@@ -1,5 +1,5 @@
 import { execFileSync } from 'node:child_process';
-import { cpSync, mkdtempSync, rmSync } from 'node:fs';
+import { cpSync, mkdirSync, mkdtempSync, rmSync } from 'node:fs';
 import { join, relative } from 'node:path';
 import { ROOT } from '../started-product.ts';
 import { readSource } from './import-graph.ts';
@@ -12,6 +12,8 @@ export function journalTimes(): number[] {
 
 /** What drizzle-kit would say to the schema as it is now, asked on a copy of the migrations. */
 export function generateOnCopy(): string {
+  // A fresh clone has none before its first build.
+  mkdirSync(join(ROOT, '.astro'), { recursive: true });
   const copy = mkdtempSync(join(ROOT, '.astro', 'migrations-'));
   try {
     cpSync(join(ROOT, 'drizzle'), copy, { recursive: true });

@@ -1,6 +1,6 @@
-import { paths } from '../../paths.ts';
-import { type AccountMails } from '../../server/auth/auth.ts';
-import * as mails from './emails.ts';
+import { paths } from './paths.ts';
+import { type AccountMails } from './server/auth/auth.ts';
+import * as mails from './features/accounts/emails.ts';
 
 /**
  * The account mails with their links.
