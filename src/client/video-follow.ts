@@ -11,7 +11,7 @@ import {
 import { filePlayer } from './file-player.ts';
 import { outsidePlayer } from './outside-player.ts';
 import { type Player } from './player.ts';
-import { NOW, SEEK } from './video-now.ts';
+import { NOW, SEEK, type VideoWatch } from './video-now.ts';
 
 /** How finely pointers move between the frames at which something changes, in seconds. */
 const STEP = 0.25;
@@ -28,7 +28,7 @@ const EMPTY: Course = {
  * Around everything of a page that follows its video. It knows the player; what shows the present listens here for
  * NOW, and a link or button with `data-at` seconds seeks there when it is clicked.
  */
-export class VideoFollow extends HTMLElement {
+export class VideoFollow extends HTMLElement implements VideoWatch {
   course = EMPTY;
   now: Now | undefined;
   #player: Player | undefined;
