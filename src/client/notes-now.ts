@@ -1,29 +1,8 @@
+import { heightAt, type TapePlace, timeAt } from './tape-places.ts';
 import { askFor, followOf, NOW } from './video-now.ts';
 
 /** From a row's top to its place on the tape, in pixels; the tape is drawn so. */
 const PLACE = 24;
-
-/** Time and height of one place on the tape. */
-interface Place {
-  readonly at: number;
-  readonly y: number;
-}
-
-/** Where a time stands on a tape that runs evenly from place to place, both rising. */
-export function heightAt(seconds: number, places: readonly Place[]): number {
-  const next = places.findIndex(({ at }) => at > seconds);
-  const [from, to] = [places.at(next === -1 ? -1 : next - 1), places.at(next === -1 ? -1 : next)];
-  if (!from || !to || to.at <= from.at) return from?.y ?? 0;
-  return from.y + ((seconds - from.at) / (to.at - from.at)) * (to.y - from.y);
-}
-
-/** The time at a height of the same tape. */
-export function timeAt(y: number, places: readonly Place[]): number {
-  return heightAt(
-    y,
-    places.map((place) => ({ at: place.y, y: place.at })),
-  );
-}
 
 /** The list of notes: the one that holds now is marked, and on the tape beside them a pointer stands at now. */
 export class NotesNow extends HTMLElement {
@@ -71,7 +50,7 @@ export class NotesNow extends HTMLElement {
       ?.setAttribute('y', String(Math.round(heightAt(seconds, this.#places()))));
   }
 
-  #places(): Place[] {
+  #places(): TapePlace[] {
     const tape = this.#tape?.getBoundingClientRect();
     if (!tape) return [];
     const rows = this.#rows.map((row) => ({
