@@ -53,7 +53,8 @@ export const getCompanion = read({ may: 'published.read' }, async (context, ref:
   };
 });
 
-async function describeVideo(db: Database, video: Video): Promise<CompanionVideo> {
+/** A video as its page needs it. */
+export async function describeVideo(db: Database, video: Video): Promise<CompanionVideo> {
   const { seconds, rate } = video;
   if (video.fileId !== null) {
     return { kept: await describeFile(db, video.fileId), elsewhere: null, seconds, rate };
@@ -79,7 +80,8 @@ async function describeFile(db: Database, id: string): Promise<KeptVideo> {
   };
 }
 
-function loadShownParts(db: Database, workshopId: string, ids: readonly string[]) {
+/** Those of the parts named that stand in the list. */
+export function loadShownParts(db: Database, workshopId: string, ids: readonly string[]) {
   if (ids.length === 0) return Promise.resolve([]);
   return db
     .select({

@@ -21,7 +21,9 @@ export function NoteEditor({ row }: { readonly row: Row<'note'> }) {
   const at = placeAt(form.position, clock.rate);
 
   useEffect(() => {
-    place.current?.querySelector('textarea')?.focus();
+    const words = place.current?.querySelector('textarea');
+    words?.focus();
+    words?.setSelectionRange(words.value.length, words.value.length);
   }, []);
 
   return (

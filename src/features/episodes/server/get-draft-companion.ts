@@ -1,0 +1,49 @@
+import { isShownToViewers } from '../../../domain/notes/shown-notes.ts';
+import { read } from '../../../server/verb.ts';
+import { listAppearances } from '../../notes/server/list-appearances.ts';
+import { listNotes } from '../../notes/server/list-notes.ts';
+import { type Companion } from '../companion.ts';
+import { describeVideo, loadShownParts } from './get-companion.ts';
+import { getDesk } from './get-desk.ts';
+import { listPublicEpisodes } from './list-public-episodes.ts';
+import { type EpisodeRef } from './load-episode.ts';
+import { presentCompanion } from './present-companion.ts';
+
+/**
+ * What viewers would see of an episode if it were published now, for its preview; without captions, whose public
+ * address comes with the edition. Null while there is no video.
+ */
+export const getDraftCompanion = read(
+  { may: 'workshop.see-bench' },
+  async (context, ref: EpisodeRef): Promise<Companion | null> => {
+    const { db, workshop } = context;
+    const { build, episode, video, chapters } = await getDesk(context, ref);
+    if (!video) return null;
+    const notes = (await listNotes(context, ref)).items.filter(isShownToViewers);
+    const { items: byHand } = await listAppearances(context, ref);
+    const { items: published } = await listPublicEpisodes(context, { buildId: build.id });
+    const partIds = new Set([
+      ...notes.flatMap((note) => note.partIds),
+      ...byHand.map(({ partId }) => partId),
+    ]);
+    const { id, number, title, about, publishedOn } = episode;
+    const series = [...published.filter((one) => one.number !== number), { number, title }];
+    return {
+      build: { id: build.id, slug: build.slug, name: build.name },
+      episode: { id, number, title, about, publishedOn },
+      video: await describeVideo(db, video),
+      captions: null,
+      ...presentCompanion({
+        video,
+        notes,
+        byHand,
+        chapters,
+        parts: await loadShownParts(db, workshop.id, [...partIds]),
+      }),
+      series: series
+        .map((one) => ({ number: one.number, title: one.title }))
+        .sort((a, b) => a.number - b.number),
+      of: Math.max(build.plannedEpisodes ?? 0, ...series.map((one) => one.number)),
+    };
+  },
+);
