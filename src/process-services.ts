@@ -1,6 +1,6 @@
 import { pino } from 'pino';
 import { bufferLines } from './server/http/buffered-log.ts';
-import { accountMails } from './account-mails.ts';
+import { accountMails } from './process-mails.ts';
 import { type ServiceSettings } from './server/env.ts';
 import { openServices, type Services } from './server/services.ts';
 

@@ -1,5 +1,5 @@
 import { pino } from 'pino';
-import { accountMails } from '../account-mails.ts';
+import { accountMails } from '../process-mails.ts';
 import { startProcess } from '../process-life.ts';
 import { isLoopback, readServiceSettings } from '../server/env.ts';
 import { openServices } from '../server/services.ts';

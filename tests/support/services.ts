@@ -1,6 +1,6 @@
 import { pino } from 'pino';
 import { afterAll, afterEach, expect } from 'vitest';
-import { accountMails } from '../../src/account-mails.ts';
+import { accountMails } from '../../src/process-mails.ts';
 import { type Mail } from '../../src/domain/mail.ts';
 import { keepConfirmations } from '../../src/seed/people.ts';
 import { type AccountMails } from '../../src/server/auth/auth.ts';

@@ -1,7 +1,7 @@
 import { randomBytes } from 'node:crypto';
 import { pino } from 'pino';
 import { type InvitedRole } from '../../../src/domain/roles.ts';
-import { accountMails } from '../../../src/account-mails.ts';
+import { accountMails } from '../../../src/process-mails.ts';
 import { inviteMember } from '../../../src/features/workshops/server/invite-member.ts';
 import { makeWorkshop } from '../../../src/features/workshops/server/make-workshop.ts';
 import { INVITATION_PURPOSE } from '../../../src/features/workshops/workshop.ts';
