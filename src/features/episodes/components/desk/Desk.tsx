@@ -1,5 +1,5 @@
 import { QueryClientProvider } from '@tanstack/react-query';
-import { type ReactNode, useEffect, useState } from 'react';
+import { type ReactNode, useCallback, useState } from 'react';
 import { queryClient } from '../../../../client/query-client.ts';
 import { type DeskData, readDeskData } from './desk-data.ts';
 import { DeskTable } from './DeskTable.tsx';
@@ -14,12 +14,12 @@ type DeskProps = {
 /** The desk's island. It reads its data from the page; without a script the page stays as it is. */
 export function Desk({ video, children }: DeskProps) {
   const [data, setData] = useState<DeskData | null>(null);
-  useEffect(() => {
-    setData(readDeskData(document));
+  const readPage = useCallback((place: HTMLDivElement | null) => {
+    if (place !== null) setData(readDeskData(document));
   }, []);
   if (data === null) {
     return (
-      <div className="grid gap-4">
+      <div ref={readPage} className="grid gap-4">
         {children}
         <div className="max-w-2xl">{video}</div>
       </div>

@@ -27,6 +27,7 @@ export function NoteEditor({ row }: { readonly row: Row<'note'> }) {
   }, []);
 
   return (
+    // eslint-disable-next-line jsx-a11y/no-static-element-interactions -- It only hears that a field in it is left.
     <div
       ref={place}
       className="grid gap-3 border-t border-line bg-ground px-3 py-3"

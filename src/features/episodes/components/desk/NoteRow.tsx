@@ -62,7 +62,7 @@ export function NoteRow({ row, current, inView }: NoteRowProps) {
         <span className="basis-16">
           <KindLabel kind={form.kind} />
         </span>
-        <div className="grid min-w-0 flex-1 basis-64 gap-0.5">
+        <div className="grid min-w-0 flex-1 basis-52 gap-0.5">
           <p className="break-words whitespace-pre-line">
             {form.text === '' ? <span className="text-ink-soft">No words yet</span> : form.text}
           </p>
@@ -90,7 +90,7 @@ export function NoteRow({ row, current, inView }: NoteRowProps) {
           })}
         </div>
         {data.mayChange && (
-          <div className="flex gap-1">
+          <div className="ms-auto flex gap-1">
             {may ? (
               <>
                 <Button

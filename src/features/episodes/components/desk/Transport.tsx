@@ -102,17 +102,19 @@ function GoTo() {
         setText('');
       }}
     >
-      <input
-        aria-label="Go to a time, such as 3:41"
-        aria-invalid={wrong}
-        placeholder="3:41"
-        value={text}
-        className={`${INPUT_LOOK} min-h-8 w-20 font-mono text-sm`}
-        onChange={(event) => {
-          setText(event.target.value);
-          setWrong(false);
-        }}
-      />
+      <span className="w-20">
+        <input
+          aria-label="Go to a time, such as 3:41"
+          aria-invalid={wrong}
+          placeholder="3:41"
+          value={text}
+          className={`${INPUT_LOOK} min-h-8 font-mono text-sm`}
+          onChange={(event) => {
+            setText(event.target.value);
+            setWrong(false);
+          }}
+        />
+      </span>
       <Button size="small" type="submit">
         Go
       </Button>
