@@ -1,6 +1,6 @@
 import { type BrowserContext, type ConsoleMessage } from '@playwright/test';
 
-const OWN_STATUS = /^Failed to load resource: the server responded with a status of 4\d\d/;
+const OWN_STATUS = /^Failed to load resource: the server responded with a status of (4\d\d|500)/;
 
 /**
  * Collects what the browser complains about: errors and warnings in the console, the policy's violations among
@@ -21,5 +21,9 @@ export function listenForComplaints(context: BrowserContext, complaints: string[
 }
 
 function isOwnStatus(message: ConsoleMessage, documents: ReadonlySet<string>): boolean {
-  return OWN_STATUS.test(message.text()) && documents.has(message.location().url);
+  const { url } = message.location();
+  const [, status] = OWN_STATUS.exec(message.text()) ?? [];
+  if (status === undefined || !documents.has(url)) return false;
+  // A fault is never expected but from the page that is shown for faults.
+  return status !== '500' || new URL(url).pathname === '/500';
 }

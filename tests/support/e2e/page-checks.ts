@@ -60,13 +60,16 @@ export function overhang(page: Page): Promise<number> {
   return page.evaluate(() => Math.max(0, document.documentElement.scrollWidth - innerWidth));
 }
 
-/** Everything that the keyboard should reach on a page, counted. */
+/** Everything that the keyboard should reach on a page, counted; a group of radio buttons is one stop. */
 export function countStops(page: Page): Promise<number> {
   return page.evaluate(() => {
     const stops = 'a[href], button, input:not([type=hidden]), select, textarea, summary';
-    return [...document.querySelectorAll<HTMLElement>(stops)].filter(
+    const reached = [...document.querySelectorAll(stops)].filter(
       (stop) => stop.checkVisibility() && !stop.matches(':disabled'),
-    ).length;
+    );
+    const group = (stop: Element) =>
+      stop instanceof HTMLInputElement && stop.type === 'radio' ? `radio ${stop.name}` : stop;
+    return new Set(reached.map(group)).size;
   });
 }
 
@@ -80,13 +83,15 @@ export async function walkByKeyboard(page: Page): Promise<{ stops: number; unsee
     await page.keyboard.press('Tab');
     const said = await page.evaluate(() => {
       const at = document.activeElement;
-      if (!(at instanceof HTMLElement) || at === document.body || at.dataset['walked']) return null;
+      // A link in a drawing is a stop, too.
+      if (!(at instanceof HTMLElement || at instanceof SVGElement)) return null;
+      if (at === document.body || at.dataset['walked']) return null;
       at.dataset['walked'] = 'yes';
       const { outlineStyle, outlineWidth } = getComputedStyle(at);
       const { width, height, bottom, right } = at.getBoundingClientRect();
       const ring = outlineStyle !== 'none' && Number.parseFloat(outlineWidth) >= 2;
       const onPage = width > 1 && height > 1 && bottom > 0 && right > 0;
-      return { seen: ring && onPage, what: `${at.tagName} ${at.textContent.trim().slice(0, 40)}` };
+      return { seen: ring && onPage, what: `${at.tagName} ${(at.textContent ?? '').trim().slice(0, 40)}` };
     });
     if (said === null) return { stops, unseen };
     if (!said.seen) unseen.push(said.what);
