@@ -18,8 +18,14 @@ export const EMPTY_TEXTS: PartTexts = {
 
 /** What a part's columns say. */
 export function textsOf(part: PartFields): PartTexts {
+  const { number, name, kind, material, size, remark } = part;
   return {
-    ...part,
+    number,
+    name,
+    kind,
+    material,
+    size,
+    remark,
     quantity: String(part.quantity),
     aliases: part.aliases.join('; '),
     inPlans: part.inPlans ? 'yes' : 'no',

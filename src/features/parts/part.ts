@@ -130,7 +130,6 @@ export interface Part extends PartFields {
 const id = z.uuid('That is not an id of ours.');
 export const partParams = buildParams.extend({ part: id });
 
-export const AddPartInput = PartInput;
 export const ChangePartInput = PartInput.extend({ version: buildVersion });
 export const PartVersionInput = z.object({ version: buildVersion });
 

@@ -1,5 +1,6 @@
 const KEYS = [
   ['Arrow keys, Tab', 'go from cell to cell; with Shift the arrows select'],
+  ['Escape, then Tab', 'leaves the table'],
   ['Any letter', 'replaces what is in the cell'],
   ['Enter or F2', 'opens the cell to change it; Enter takes it and goes down, Escape leaves it as it was'],
   ['Ctrl C, X, V', 'copy, cut and paste; several rows from a spreadsheet fill down and across'],

@@ -1,4 +1,4 @@
-import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
+import { useEffect, useMemo, useRef, useState } from 'react';
 import { Button } from '../../../components/Button.tsx';
 import { Notice } from '../../../components/Notice.tsx';
 import { type Part, PART_FIELDS, PART_LABELS } from '../part.ts';
@@ -40,14 +40,6 @@ export function PartsGrid({ of, initial }: PartsGridProps) {
   const open = looks.filter(({ mark }) => mark === 'unsaved').length;
   const busy = sending.size > 0 || looks.some(({ mark }) => mark === 'waiting');
   const conflicts = table.rows.filter(({ conflict }) => conflict !== null);
-  const { remove } = grid;
-  const removeOne = useCallback(
-    (id: string) => {
-      remove([id]);
-    },
-    [remove],
-  );
-
   function lookOf(row: TableRow, begun: boolean): { errors: CellErrors; mark: RowMark | null } {
     if (row.id === blankId) return { errors: {}, mark: null };
     const all = errorsOf(row, numbers);
@@ -68,19 +60,13 @@ export function PartsGrid({ of, initial }: PartsGridProps) {
   const selected = grid.selectedIds().length;
   const kinds = rows.filter(({ id }) => id !== blankId).map(({ texts }) => texts.kind);
   return (
-    <div className="grid gap-3">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-3">
       {stalled !== null && (
         <Notice tone="error" live title="Not saved at the moment.">
           {stalled}
         </Notice>
       )}
-      <ConflictList
-        rows={conflicts}
-        onSettle={(id, choice) => {
-          setTable((state) => settle(state, id, choice));
-        }}
-      />
-      <div className="flex flex-wrap items-center gap-2">
+      <div className="sticky top-0 z-10 flex flex-wrap items-center gap-2 bg-ground py-2">
         <Button size="small" disabled={table.done.length === 0} onClick={grid.stepBack}>
           Undo
         </Button>
@@ -109,7 +95,7 @@ export function PartsGrid({ of, initial }: PartsGridProps) {
           ref={body}
           className="ruled-table parts-table parts-grid"
           aria-rowcount={rows.length + 1}
-          aria-colcount={PART_FIELDS.length + 1}
+          aria-colcount={PART_FIELDS.length}
           onKeyDown={grid.onKeyDown}
           onCopy={grid.onCopy}
           onCut={grid.onCut}
@@ -145,9 +131,6 @@ export function PartsGrid({ of, initial }: PartsGridProps) {
                   {PART_LABELS[field]}
                 </th>
               ))}
-              <th scope="col">
-                <span className="sr-only">Saved or not</span>
-              </th>
             </tr>
           </thead>
           <tbody>
@@ -166,11 +149,19 @@ export function PartsGrid({ of, initial }: PartsGridProps) {
                 typing={row.id === typing?.id ? typing : null}
                 onType={grid.onType}
                 onLeave={index === at.row || row.id === typing?.id ? grid.takeTyped : nothing}
-                onDelete={removeOne}
               />
             ))}
           </tbody>
         </table>
+      </div>
+      {/* In sight wherever in a long list one is. */}
+      <div className="sticky bottom-0 z-10">
+        <ConflictList
+          rows={conflicts}
+          onSettle={(id, choice) => {
+            setTable((state) => settle(state, id, choice));
+          }}
+        />
       </div>
       <GridKeys />
     </div>

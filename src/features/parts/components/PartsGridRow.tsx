@@ -30,13 +30,11 @@ export type GridRowProps = {
   readonly typing: Typing | null;
   readonly onType: (text: string) => void;
   readonly onLeave: () => void;
-  readonly onDelete: (id: string) => void;
 };
 
 /** One row of the parts table. Drawn again only when something of it changes. */
 export const PartsGridRow = memo(function GridRow(props: GridRowProps) {
-  const { id, index, texts, errors, mark, blank, active, left, right, typing, onType, onLeave, onDelete } =
-    props;
+  const { id, index, texts, errors, mark, blank, active, left, right, typing, onType, onLeave } = props;
   const saidOf = (field: PartField | '') => errors[field];
   return (
     <tr
@@ -46,7 +44,8 @@ export const PartsGridRow = memo(function GridRow(props: GridRowProps) {
       data-blank={blank ? '' : undefined}
     >
       {PART_FIELDS.map((field, column) => {
-        const error = saidOf(field);
+        // What is said of the row as a whole stands at its number.
+        const error = saidOf(field) ?? (field === 'number' ? saidOf('') : undefined);
         const errorId = `error-${id}-${field}`;
         const selected = column >= left && column <= right;
         return (
@@ -76,40 +75,13 @@ export const PartsGridRow = memo(function GridRow(props: GridRowProps) {
             )}
             {field === 'number' && mark !== null && typing?.column !== column && <RowMarkSign mark={mark} />}
             {error !== undefined && (
-              <span id={errorId} className="block max-w-48 text-sm font-medium whitespace-normal text-primer">
+              <span id={errorId} className="block max-w-40 text-sm font-medium whitespace-normal text-primer">
                 {error}
               </span>
             )}
           </td>
         );
       })}
-      <td role="gridcell" aria-colindex={PART_FIELDS.length + 1} data-row-end="">
-        {!blank && (
-          <button
-            type="button"
-            tabIndex={-1}
-            className="p-1 text-ink-soft hover:text-primer"
-            aria-label={`Delete part ${texts.number}`}
-            onClick={() => {
-              onDelete(id);
-            }}
-          >
-            <svg
-              width="16"
-              height="16"
-              aria-hidden="true"
-              fill="none"
-              stroke="currentColor"
-              strokeWidth="1.5"
-            >
-              <path d="M3.5 3.5l9 9M12.5 3.5l-9 9" />
-            </svg>
-          </button>
-        )}
-        {saidOf('') !== undefined && (
-          <span className="block max-w-56 text-sm font-medium text-primer">{saidOf('')}</span>
-        )}
-      </td>
     </tr>
   );
 }, sameRow);

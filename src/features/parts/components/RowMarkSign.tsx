@@ -13,7 +13,7 @@ const MARKS: Readonly<Record<RowMark, { said: string; look: string; path: string
 export function RowMarkSign({ mark }: { readonly mark: RowMark }) {
   const { said, look, path } = MARKS[mark];
   return (
-    <span className={look} title={said}>
+    <span className={`ms-1 ${look}`} title={said}>
       <svg
         width="16"
         height="16"

@@ -27,7 +27,7 @@ export function errorsOf(row: TableRow, numbers: ReadonlyMap<string, number>): C
   const read = readOnce(row.texts);
   const errors: Partial<Record<PartField | '', string>> = read.ok ? {} : { ...read.errors };
   if ((numbers.get(partNumberKey(row.texts.number)) ?? 0) > 1 && row.texts.number !== '') {
-    errors.number ??= `Number ${row.texts.number} stands in this list twice. Give one of them another.`;
+    errors.number ??= `Number ${row.texts.number} is in the list twice.`;
   }
   return row.refused && same(row.refused, row) ? { ...row.refused.errors, ...errors } : errors;
 }
@@ -157,7 +157,8 @@ export function takeIn(state: TableState, parts: readonly Part[]): TableState {
     const part = fresh.get(row.id);
     fresh.delete(row.id);
     if (!isStored(row) || row.conflict !== null) return [row];
-    if (part) return row.stored?.part.version === part.version ? [row] : [{ ...storedRow(part) }];
+    // An answer that was on its way while a row was saved says less than what is known.
+    if (part) return (row.stored?.part.version ?? 0) >= part.version ? [row] : [storedRow(part)];
     // Deleted by someone else, or here: what was deleted here can be undone and stays known.
     return row.gone ? [row] : [];
   });

@@ -50,12 +50,15 @@ export function usePartsGrid(table: TableState, setTable: Dispatch<SetStateActio
   const [from, setFrom] = useState<Place>(place);
   const [typing, setTyping] = useState<Typing | null>(null);
   const [said, setSaid] = useState('');
+  // Whoever only passes by with Tab is let through; it goes from cell to cell once something was done here.
+  const [working, setWorking] = useState(false);
   const at = clampPlace(place, size);
   const block = blockBetween(clampPlace(from, size), at);
 
   function go(to: Place, extend = false): void {
     setPlace(to);
     if (!extend) setFrom(to);
+    setWorking(true);
   }
 
   function edit(edits: readonly CellEdit[], step: string): void {
@@ -81,15 +84,10 @@ export function usePartsGrid(table: TableState, setTable: Dispatch<SetStateActio
     }
   }
 
-  const remove = useCallback(
-    (ids: readonly string[]) => {
-      setTable((state) => deleteRows(state, ids));
-      setSaid(
-        ids.length === 1 ? 'Part deleted; undo brings it back.' : `${String(ids.length)} parts deleted.`,
-      );
-    },
-    [setTable],
-  );
+  function remove(ids: readonly string[]): void {
+    setTable((state) => deleteRows(state, ids));
+    setSaid(ids.length === 1 ? 'Part deleted; undo brings it back.' : `${String(ids.length)} parts deleted.`);
+  }
 
   function stepBack(): void {
     const step = table.done.at(-1);
@@ -133,17 +131,22 @@ export function usePartsGrid(table: TableState, setTable: Dispatch<SetStateActio
     else if (key === 'Delete' || key === 'Backspace')
       edit(clearEdits(selectedRows(), columns()), 'Clear cells');
     else if (key === 'Enter' || key === 'F2') begin();
-    else if (key === 'Escape') setFrom(at);
-    else if (key === 'Tab') {
-      const to = moveByTab(shiftKey, false, at, size);
+    else if (key === 'Escape') {
+      setFrom(at);
+      setWorking(false);
+      return true;
+    } else if (key === 'Tab') {
+      const to = working ? moveByTab(shiftKey, false, at, size) : null;
       if (to) go(to);
+      else setWorking(false);
       return to !== null;
     } else if (key.length === 1 && !command && !event.altKey) begin(key === ' ' ? '' : key);
     else {
       const to = moveByKey(key, command, at, size);
-      if (to) go(to, shiftKey);
-      return to !== null;
+      if (to === null) return false;
+      go(to, shiftKey);
     }
+    setWorking(true);
     return true;
   }
 

@@ -1,6 +1,6 @@
 import { buildParams } from '../../../../../../../features/builds/build.ts';
 import { SavedRow } from '../../../../../../../features/builds/stage.ts';
-import { AddPartInput, PartsAnswer } from '../../../../../../../features/parts/part.ts';
+import { PartInput, PartsAnswer } from '../../../../../../../features/parts/part.ts';
 import { addPart } from '../../../../../../../features/parts/server/add-part.ts';
 import { listParts } from '../../../../../../../features/parts/server/list-parts.ts';
 import { paths } from '../../../../../../../paths.ts';
@@ -11,7 +11,7 @@ export const GET = apiRoute({ verb: listParts, params: buildParams, body: NONE, 
 export const POST = apiRoute({
   verb: addPart,
   params: buildParams,
-  body: AddPartInput,
+  body: PartInput,
   answer: SavedRow,
   form: {
     page: ({ workshop, build }) => `${paths.parts(workshop, build)}?add=1`,
