@@ -10,14 +10,13 @@ import { type EpisodeRef } from './load-episode.ts';
 import { presentCompanion } from './present-companion.ts';
 
 /**
- * What viewers would see of an episode if it were published now, for its preview; without captions, whose public
- * address comes with the edition. Null while there is no video.
+ * What viewers would see of an episode if it were published now, for its preview with the newest captions. Null while there is no video.
  */
 export const getDraftCompanion = read(
   { may: 'workshop.see-bench' },
   async (context, ref: EpisodeRef): Promise<Companion | null> => {
     const { db, workshop } = context;
-    const { build, episode, video, chapters } = await getDesk(context, ref);
+    const { build, episode, video, captions, chapters } = await getDesk(context, ref);
     if (!video) return null;
     const notes = (await listNotes(context, ref)).items.filter(isShownToViewers);
     const { items: byHand } = await listAppearances(context, ref);
@@ -32,7 +31,7 @@ export const getDraftCompanion = read(
       build: { id: build.id, slug: build.slug, name: build.name },
       episode: { id, number, title, about, publishedOn },
       video: await describeVideo(db, video),
-      captions: null,
+      captions: captions && { id: captions.id, language: captions.language },
       ...presentCompanion({
         video,
         notes,
