@@ -1,6 +1,5 @@
 /** What a file is, by its content. */
 export const FILE_KINDS = ['photo', 'video', 'sound', 'document', 'text'] as const;
-export type FileKind = (typeof FILE_KINDS)[number];
 
 /** What a file was brought in for. */
 export const FILE_PURPOSES = ['footage', 'episode', 'diary', 'plan'] as const;
@@ -10,4 +9,3 @@ export type FilePurpose = (typeof FILE_PURPOSES)[number];
  * uploading: parts are being sent; checking: the worker looks at it; ready; failed: with a sentence why.
  */
 export const FILE_STATES = ['uploading', 'checking', 'ready', 'failed'] as const;
-export type FileState = (typeof FILE_STATES)[number];

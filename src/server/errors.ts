@@ -68,11 +68,6 @@ export class TooMany extends AppError {
   }
 }
 
-export class TooLarge extends AppError {
-  readonly code = 'too_large';
-  readonly status = 413;
-}
-
 /** The request itself is off: not a form, not JSON, from another site. */
 export class BadRequest extends AppError {
   readonly code = 'bad_request';
