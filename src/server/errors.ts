@@ -1,8 +1,11 @@
 /** What went wrong with what was sent: a sentence a field; the empty name is the whole form. */
 export type FieldErrors = Readonly<Record<string, string>>;
 
+const APP_ERROR = Symbol.for('centrepop.app-error');
+
 /** An error that the reader is told about; its message is shown as it stands. */
 export abstract class AppError extends Error {
+  readonly [APP_ERROR] = true;
   abstract readonly code: string;
   abstract readonly status: number;
 }
@@ -77,4 +80,16 @@ export class BadRequest extends AppError {
 function sayWait(seconds: number): string {
   if (seconds < 90) return `${String(Math.max(1, Math.ceil(seconds)))} seconds`;
   return `${String(Math.ceil(seconds / 60))} minutes`;
+}
+
+/**
+ * Whether an error is one of these. The pages and the process around them are bundled apart, so that the same
+ * class exists twice: what they throw at each other is known by its mark, not by its class.
+ */
+export function isAppError(error: unknown): error is AppError & {
+  readonly fields?: FieldErrors;
+  readonly stored?: unknown;
+  readonly retryAfterSeconds?: number;
+} {
+  return error instanceof Error && APP_ERROR in error;
 }

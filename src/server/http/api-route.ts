@@ -66,7 +66,8 @@ export function apiRoute<P extends Shape, B extends Shape, Result, A extends z.Z
       } as z.output<P> & z.output<B>;
       await countTries(rule.limit ?? [], parts, input);
       const result = await rule.verb(asked, input);
-      if (body.kind === 'form' && rule.form) return await answerForm(context, rule.form, result, input);
+      if (body.kind === 'form' && rule.form)
+        return await answerForm(context, rule.form, result, input, keptValues(body, rule.form.secrets ?? []));
       if (rule.reply) return rule.reply(result);
       return Response.json(rule.answer.parse(result) ?? null, { headers: { 'cache-control': 'no-store' } });
     } catch (error) {
@@ -112,10 +113,11 @@ async function answerForm<P, I, R>(
   form: FormRule<P, I, R>,
   result: R,
   input: I,
+  values: Readonly<Record<string, string>>,
 ): Promise<Response> {
   const next = form.done(result, input);
   if (next !== null) return context.redirect(next, 303);
-  return showFormPage(context, form.page(context.params as P, {}), 200, {
+  return showFormPage(context, form.page(context.params as P, values), 200, {
     values: {},
     errors: {},
     message: null,

@@ -1,5 +1,5 @@
 import { type Logger } from 'pino';
-import { AppError, Conflict, type FieldErrors, Invalid, TooMany } from '../errors.ts';
+import { type FieldErrors, isAppError } from '../errors.ts';
 
 /** What the reader is told of an error, whatever form it is told in. */
 export interface ErrorAnswer {
@@ -13,14 +13,15 @@ export interface ErrorAnswer {
 
 /** Maps any error to an answer; one that is not ours is logged with its request id and hidden from the reader. */
 export function toErrorAnswer(error: unknown, requestId: string, log: Logger): ErrorAnswer {
-  if (error instanceof AppError) {
+  if (isAppError(error)) {
+    const { status, code, message, fields = {}, stored, retryAfterSeconds } = error;
     return {
-      status: error.status,
-      code: error.code,
-      message: error.message,
-      fields: error instanceof Invalid ? error.fields : {},
-      ...(error instanceof Conflict && { stored: error.stored }),
-      ...(error instanceof TooMany && { retryAfterSeconds: Math.ceil(error.retryAfterSeconds) }),
+      status,
+      code,
+      message,
+      fields,
+      ...(stored !== undefined && { stored }),
+      ...(retryAfterSeconds !== undefined && { retryAfterSeconds: Math.ceil(retryAfterSeconds) }),
     };
   }
   log.error({ requestId, err: error }, 'A request failed.');

@@ -1,4 +1,5 @@
 import { type SQL, sql } from 'drizzle-orm';
+import pg from 'pg';
 import PgBoss from 'pg-boss';
 import { v5 as uuidv5 } from 'uuid';
 import { type Database } from '../../db/client.ts';
@@ -6,6 +7,10 @@ import { type EventIds, type EventName } from '../../domain/events.ts';
 import { type Services } from '../services.ts';
 
 const EVENTS_QUEUE = 'events';
+
+// Any fixed number other than the migrations' does.
+const QUEUES_LOCK = 734_202;
+
 export const DEAD_LETTERS = 'dead-letters';
 
 /** A job whose worker says nothing for so long is given to another. */
@@ -39,6 +44,8 @@ export interface JobQueue {
    * @throws when the queue does not take it
    */
   enqueue(db: Database, event: EventName, ids: EventIds): Promise<void>;
+  /** Makes the queues that are not there yet. */
+  createQueues(names: readonly string[]): Promise<void>;
   close(): Promise<void>;
 }
 
@@ -63,10 +70,11 @@ export async function openJobQueue(
   });
   boss.on('error', options.onError);
   await boss.start();
-  await createQueue(boss, DEAD_LETTERS);
-  await createQueue(boss, EVENTS_QUEUE);
+  const createQueues = (names: readonly string[]) => createMissingQueues(boss, url, names);
+  await createQueues([EVENTS_QUEUE]);
   return {
     boss,
+    createQueues,
     async enqueue(db, event, ids) {
       const id = await boss.send(EVENTS_QUEUE, { event, ids } satisfies EventJob, {
         db: { executeSql: (text, values) => executeInTransaction(db, text, values) },
@@ -80,8 +88,19 @@ export async function openJobQueue(
   };
 }
 
-async function createQueue(boss: PgBoss, name: string): Promise<void> {
-  await boss.createQueue(name, name === DEAD_LETTERS ? { name } : { name, deadLetter: DEAD_LETTERS });
+/** One process at a time: each queue is a table of its own, and two that make tables at once deadlock. */
+async function createMissingQueues(boss: PgBoss, url: string, names: readonly string[]): Promise<void> {
+  const client = new pg.Client({ connectionString: url });
+  await client.connect();
+  try {
+    await client.query('select pg_advisory_lock($1)', [QUEUES_LOCK]);
+    for (const name of [DEAD_LETTERS, ...names]) {
+      if (await boss.getQueue(name)) continue;
+      await boss.createQueue(name, name === DEAD_LETTERS ? { name } : { name, deadLetter: DEAD_LETTERS });
+    }
+  } finally {
+    await client.end();
+  }
 }
 
 /** Runs pg-boss's numbered placeholders through Drizzle, so that its insert is part of our transaction. */
@@ -110,7 +129,7 @@ export async function workQueue(
   run: (definition: JobDefinition, ids: EventIds, jobId: string) => Promise<void>,
 ): Promise<void> {
   const { boss } = queue;
-  for (const definition of definitions) await createQueue(boss, definition.name);
+  await queue.createQueues(definitions.map(({ name }) => name));
   await boss.work<EventJob>(EVENTS_QUEUE, { pollingIntervalSeconds: 0.5 }, async ([job]) => {
     if (!job) return;
     for (const definition of definitions) {
