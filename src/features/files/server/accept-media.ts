@@ -2,7 +2,8 @@ import { eq } from 'drizzle-orm';
 import { statfs } from 'node:fs/promises';
 import { join } from 'node:path';
 import { files } from '../../../db/schema/files.ts';
-import { framesIn, MILLISECONDS, snapRate } from '../../../domain/media-rates.ts';
+import { framesIn } from '../../../domain/media-rates.ts';
+import { isRate, MILLISECOND_RATE, snapRate } from '../../../domain/time/rate.ts';
 import { type JobHandler } from '../../../server/jobs/queue.ts';
 import { findCutOff } from '../../../server/media/box-lengths.ts';
 import { takeFrames, takeStill } from '../../../server/media/film-frames.ts';
@@ -142,7 +143,8 @@ async function render(
 
 function filmFacts(file: CheckedFile, facts: MediaFacts, format: MediaFormat): AcceptedAs {
   const { video, audio, seconds, tags } = facts;
-  const rate = video === null ? MILLISECONDS : snapRate(video.averageRate);
+  const average = video?.averageRate ?? null;
+  const rate = average === null || !isRate(average) ? MILLISECOND_RATE : snapRate(average);
   return {
     kind: video === null ? 'sound' : 'video',
     contentType: CONTENT_TYPES[format][video === null ? 'sound' : 'video'],
