@@ -84,23 +84,28 @@ test.each([
   );
 });
 
-test('when it is killed itself nothing is left running and the next start finds its data', async () => {
-  const parts = childrenOf(product.process.pid).filter(({ command }) => !command.includes('esbuild'));
-  expect(parts.length).toBeGreaterThanOrEqual(5);
-  product.process.kill('SIGKILL');
-  await vi.waitFor(
-    () => {
-      expect(parts.filter(({ pid }) => runs(pid))).toEqual([]);
-    },
-    { timeout: 20_000, interval: 100 },
-  );
-  const before = product.environment;
-  product = await start();
-  expect(await answers()).toBe(true);
-  for (const name of ['AUTH_SECRET', 'INSTALLATION_ID', 'S3_ENDPOINT', 'OUTBOX_URL'] as const) {
-    expect(product.environment[name]).toBe(before[name]);
-  }
-});
+// A whole second start fits into it, however busy the machine is.
+test(
+  'when it is killed itself nothing is left running and the next start finds its data',
+  { timeout: 120_000 },
+  async () => {
+    const parts = childrenOf(product.process.pid).filter(({ command }) => !command.includes('esbuild'));
+    expect(parts.length).toBeGreaterThanOrEqual(5);
+    product.process.kill('SIGKILL');
+    await vi.waitFor(
+      () => {
+        expect(parts.filter(({ pid }) => runs(pid))).toEqual([]);
+      },
+      { timeout: 20_000, interval: 100 },
+    );
+    const before = product.environment;
+    product = await start();
+    expect(await answers()).toBe(true);
+    for (const name of ['AUTH_SECRET', 'INSTALLATION_ID', 'S3_ENDPOINT', 'OUTBOX_URL'] as const) {
+      expect(product.environment[name]).toBe(before[name]);
+    }
+  },
+);
 
 test('SIGTERM ends all of it with status 0', async () => {
   const parts = childrenOf(product.process.pid);
