@@ -1,4 +1,5 @@
 import { Button } from '../../../components/Button.tsx';
+import { joinClasses } from '../../../components/join-classes.ts';
 import { Progress } from '../../../components/Progress.tsx';
 import { sayBytes } from '../../../domain/byte-sizes.ts';
 import { paths } from '../../../paths.ts';
@@ -17,9 +18,14 @@ export function FileRow({ item, onDelete }: FileRowProps) {
   const thumb = item.variants.find(({ variant }) => variant === 'thumb');
   const playable = item.variants.find(({ variant }) => variant === 'video' || variant === 'sound');
   return (
-    <li className="grid gap-3 border-b border-line px-4 py-3 last:border-b-0 md:grid-cols-[7.5rem_minmax(0,1fr)_auto]">
-      <div className="hidden md:block">
-        {thumb && (
+    <li
+      className={joinClasses(
+        'grid gap-3 border-b border-line px-4 py-3 last:border-b-0',
+        thumb ? 'md:grid-cols-[7.5rem_minmax(0,1fr)_auto]' : 'md:grid-cols-[minmax(0,1fr)_auto]',
+      )}
+    >
+      {thumb && (
+        <div className="hidden md:block">
           <img
             src={paths.media(item.id, 'thumb')}
             width={thumb.width ?? 120}
@@ -28,8 +34,8 @@ export function FileRow({ item, onDelete }: FileRowProps) {
             loading="lazy"
             className="h-17 w-30 border border-line object-cover"
           />
-        )}
-      </div>
+        </div>
+      )}
       <div className="grid min-w-0 content-start gap-1">
         <p className="font-medium break-words">
           {playable ? (
@@ -54,7 +60,7 @@ export function FileRow({ item, onDelete }: FileRowProps) {
             height={strip.height ?? 0}
             alt={`${String(strip.frames ?? 0)} pictures of ${item.name}, at even times`}
             loading="lazy"
-            className="mt-1 h-auto max-h-14 w-auto max-w-full border-y-4 border-ink object-contain object-left"
+            className="mt-1 h-auto max-h-14 w-auto max-w-full border-y-2 border-line-strong object-contain object-left"
           />
         )}
       </div>

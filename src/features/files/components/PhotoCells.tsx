@@ -34,7 +34,7 @@ export function PhotoCells({ items, onDelete }: PhotoCellsProps) {
               <Button
                 size="small"
                 variant="quiet"
-                className="justify-self-start"
+                className="-ms-3 justify-self-start"
                 onClick={() => {
                   onDelete(item);
                 }}

@@ -55,6 +55,8 @@ export function openUploader(of: FilesOf): FileUppy {
     let { url } = signature;
     const put = async () => {
       const answer = await fetch(url, { method: 'PUT', body, ...(signal && { signal }) });
+      // Read to its end: a request that is left open is broken off with the upload, and looks like a fault.
+      await answer.arrayBuffer();
       if (answer.ok) return answer.headers.get('etag') ?? '';
       if (answer.status === 403) url = await signer.sign(part.fileId, part.bytes, part.number, true);
       // An address that has run out is a passing thing once there is a new one.
