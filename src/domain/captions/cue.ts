@@ -13,11 +13,6 @@ export interface Cue {
  */
 export const CAPTIONS_LIMITS = { bytes: 4 * 1024 * 1024, cues: 20_000, cueCharacters: 2_000 } as const;
 
-/** A caption's words in one line, as notes are read from them. */
-export function cueText(cue: Cue): string {
-  return cue.lines.join(' ');
-}
-
 /**
  * The caption that shows at an instant: the one that began last, where several do. Null between captions.
  * @param cues sorted by start
