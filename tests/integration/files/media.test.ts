@@ -158,16 +158,14 @@ describe('A picture', () => {
   test('of a public diary entry is for everyone, of a private one for the team', async () => {
     const entryId = newId();
     const workshopId = workshop.id;
-    await services.db
-      .insert(diaryEntries)
-      .values({
-        id: entryId,
-        workshopId,
-        buildId: build.id,
-        day: '2026-03-14',
-        text: 'Seats',
-        visibility: 'public',
-      });
+    await services.db.insert(diaryEntries).values({
+      id: entryId,
+      workshopId,
+      buildId: build.id,
+      day: '2026-03-14',
+      text: 'Seats',
+      visibility: 'public',
+    });
     await services.db.insert(diaryPhotos).values({ workshopId, entryId, fileId: photo.id, position: 1 });
     expect(await statuses(photo.id, 'large')).toEqual({ ...team(200), ...others(200) });
     expect(await statuses(photo.id, 'original')).toEqual({ ...team(302), ...others(404) });
