@@ -63,7 +63,9 @@ export function overhang(page: Page): Promise<number> {
 /** Everything that the keyboard should reach on a page, counted; a group of radio buttons is one stop. */
 export function countStops(page: Page): Promise<number> {
   return page.evaluate(() => {
-    const stops = 'a[href], button, input:not([type=hidden]), select, textarea, summary';
+    // A grid is one stop, at the cell that would have the focus.
+    const stops =
+      'a[href], button, input:not([type=hidden]), select, textarea, summary, [role=gridcell][tabindex="0"]';
     const reached = [...document.querySelectorAll(stops)].filter(
       (stop) => stop.checkVisibility() && !stop.matches(':disabled'),
     );
