@@ -59,26 +59,6 @@ test('the bench follows the video to the right part at the right frame', async (
   await expect(page.locator('[data-note][aria-current]')).toContainText('The housing goes on.');
 });
 
-test('a playing video brings the part in within half a second of its note', async ({ page, shown }) => {
-  await page.goto(`${shown.path}?t=19`);
-  const cameAt = await page.evaluate(async () => {
-    const video = document.querySelector('video');
-    if (!video) throw new Error('There is no video.');
-    video.muted = true;
-    await video.play();
-    return new Promise<number>((resolve) => {
-      const look = () => {
-        const current = document.querySelector('bench-now [aria-current]');
-        if (current?.textContent.includes('bearing housing')) resolve(video.currentTime);
-        else requestAnimationFrame(look);
-      };
-      look();
-    });
-  });
-  expect(cameAt).toBeGreaterThanOrEqual(19.9);
-  expect(cameAt).toBeLessThan(20.5);
-});
-
 test('a part that came in earlier in the chapter stays, unfilled, and one of the chapter before goes', async ({
   page,
   shown,
