@@ -89,8 +89,10 @@ export async function walkByKeyboard(page: Page): Promise<{ stops: number; unsee
       if (!(at instanceof HTMLElement || at instanceof SVGElement)) return null;
       if (at === document.body || at.dataset['walked']) return null;
       at.dataset['walked'] = 'yes';
-      const { outlineStyle, outlineWidth } = getComputedStyle(at);
-      const { width, height, bottom, right } = at.getBoundingClientRect();
+      // A choice whose own box is not drawn shows the focus on its label.
+      const drawn = (at.matches('.sr-only') && at.closest('label')) || at;
+      const { outlineStyle, outlineWidth } = getComputedStyle(drawn);
+      const { width, height, bottom, right } = drawn.getBoundingClientRect();
       const ring = outlineStyle !== 'none' && Number.parseFloat(outlineWidth) >= 2;
       const onPage = width > 1 && height > 1 && bottom > 0 && right > 0;
       return { seen: ring && onPage, what: `${at.tagName} ${(at.textContent ?? '').trim().slice(0, 40)}` };
