@@ -3,9 +3,9 @@ import { read } from '../../../server/verb.ts';
 import { listAppearances } from '../../notes/server/list-appearances.ts';
 import { listNotes } from '../../notes/server/list-notes.ts';
 import { type Companion } from '../companion.ts';
-import { describeVideo, loadShownParts } from './get-companion.ts';
 import { getDesk } from './get-desk.ts';
 import { listPublicEpisodes } from './list-public-episodes.ts';
+import { describeVideo, loadShownParts } from './load-companion-pieces.ts';
 import { type EpisodeRef } from './load-episode.ts';
 import { presentCompanion } from './present-companion.ts';
 
