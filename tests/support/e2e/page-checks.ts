@@ -87,8 +87,13 @@ export async function walkByKeyboard(page: Page): Promise<{ stops: number; unsee
       const at = document.activeElement;
       // A link in a drawing is a stop, too.
       if (!(at instanceof HTMLElement || at instanceof SVGElement)) return null;
-      if (at === document.body || at.dataset['walked']) return null;
-      at.dataset['walked'] = 'yes';
+      if (at === document.body) return null;
+      // A date field is walked through part by part.
+      if (at.dataset['walked'] === 'last' && at.matches('input[type=date]')) return 'inside';
+      if (at.dataset['walked']) return null;
+      for (const last of document.querySelectorAll<HTMLElement>('[data-walked=last]'))
+        last.dataset['walked'] = 'yes';
+      at.dataset['walked'] = 'last';
       // A choice whose own box is not drawn shows the focus on its label.
       const drawn = (at.matches('.sr-only') && at.closest('label')) || at;
       const { outlineStyle, outlineWidth } = getComputedStyle(drawn);
@@ -98,6 +103,7 @@ export async function walkByKeyboard(page: Page): Promise<{ stops: number; unsee
       return { seen: ring && onPage, what: `${at.tagName} ${(at.textContent ?? '').trim().slice(0, 40)}` };
     });
     if (said === null) return { stops, unseen };
-    if (!said.seen) unseen.push(said.what);
+    if (said === 'inside') stops -= 1;
+    else if (!said.seen) unseen.push(said.what);
   }
 }
