@@ -25,7 +25,7 @@ const STARTS = { 1: 55, 2: 48, 3: 40, 4: 36 } as const;
 export function TapeStretch({ from, to, tone, first, last }: TapeStretchProps) {
   const share = (at: number) => Math.round(((at - from) / (to - from)) * 1000) / 10;
   const lines = graduateStretch(from, to, LEAST_ROW).filter(({ at }) => at > from);
-  const face = 'steel-upright absolute start-0 w-16 border-e border-steel-edge';
+  const face = 'steel-upright absolute start-0 z-1 w-16 border-e border-steel-edge';
   return (
     <>
       {first && <span className={`${face} top-0 h-6 border-t`} />}
@@ -66,7 +66,7 @@ export function TapeStretch({ from, to, tone, first, last }: TapeStretchProps) {
           width="24"
           height="24"
           viewBox="-12 -12 24 24"
-          className={`absolute start-[3.25rem] top-3 z-1 ${TONE_TEXT[tone]}`}
+          className={`absolute start-[3.25rem] top-3 z-2 ${TONE_TEXT[tone]}`}
         >
           <PopDot tone={tone} />
         </svg>
