@@ -1,5 +1,6 @@
 import { execFile } from 'node:child_process';
-import { readFile } from 'node:fs/promises';
+import { existsSync } from 'node:fs';
+import { readFile, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { promisify } from 'node:util';
 import sharp from 'sharp';
@@ -55,6 +56,26 @@ export async function makePhoto(format: 'jpeg' | 'png' | 'webp' = 'jpeg', width 
     })
     .toFormat(format)
     .toBuffer();
+}
+
+const HEIF_ENC = '/usr/bin/heif-enc';
+
+/** Whether Debian's libheif-examples is here, which the product itself does without. */
+export function canMakeHeic(): boolean {
+  return existsSync(HEIF_ENC);
+}
+
+/** A JPEG as a phone would save it. */
+export async function makeHeic(jpeg: Uint8Array): Promise<Buffer> {
+  const folder = throwawayFolder('sample');
+  try {
+    const [from, to] = [join(folder.path, 'photo.jpg'), join(folder.path, 'photo.heic')];
+    await writeFile(from, jpeg);
+    await run(HEIF_ENC, ['-q', '60', '-o', to, from]);
+    return await readFile(to);
+  } finally {
+    folder.remove();
+  }
 }
 
 /** What ffprobe says of a film, tags of every stream included. */

@@ -3,7 +3,15 @@ import { PDFDocument } from 'pdf-lib';
 import sharp from 'sharp';
 import { describe, expect, test } from 'vitest';
 import { incomingKey, keyOf } from '../../../src/server/storage/storage.ts';
-import { look, makeFilm, makeMedia, makePhoto, makeSound } from '../../support/media-samples.ts';
+import {
+  canMakeHeic,
+  look,
+  makeFilm,
+  makeHeic,
+  makeMedia,
+  makePhoto,
+  makeSound,
+} from '../../support/media-samples.ts';
 import { aWorkshop } from '../../support/people.ts';
 import { storageServices } from '../../support/storage.ts';
 import { aBuild, check, rowOf, upload, uploadAndCheck } from '../../support/uploads.ts';
@@ -54,6 +62,18 @@ describe('A photo', () => {
     expect([file.width, file.height]).toEqual([320, 640]);
     const { width, height } = await sharp(await kept(file.id, 'large')).metadata();
     expect([width, height]).toEqual([320, 640]);
+  });
+
+  test.skipIf(!canMakeHeic())('of a phone in HEIC is unpacked and turned upright once', async () => {
+    const turned = await sharp(await makePhoto('jpeg', 640, 320))
+      .withMetadata({ orientation: 6 })
+      .toBuffer();
+    const { file, variants } = await uploadAndCheck(editor, build, 'IMG_0101.HEIC', await makeHeic(turned));
+    expect(file).toMatchObject({ state: 'ready', kind: 'photo', contentType: 'image/heic', failure: null });
+    expect(Object.keys(variants).sort()).toEqual(['large', 'medium', 'original', 'thumb']);
+    expect((await sharp(await kept(file.id, 'large')).metadata()).exif).toBeUndefined();
+    const half = (await makeHeic(turned)).subarray(0, 300);
+    expect((await uploadAndCheck(editor, build, 'half.HEIC', half)).file).toMatchObject({ state: 'failed' });
   });
 
   test('that carries a web page behind its picture gives copies without it', async () => {
