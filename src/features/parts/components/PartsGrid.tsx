@@ -40,6 +40,7 @@ export function PartsGrid({ of, initial }: PartsGridProps) {
   const open = looks.filter(({ mark }) => mark === 'unsaved').length;
   const busy = sending.size > 0 || looks.some(({ mark }) => mark === 'waiting');
   const conflicts = table.rows.filter(({ conflict }) => conflict !== null);
+
   function lookOf(row: TableRow, begun: boolean): { errors: CellErrors; mark: RowMark | null } {
     if (row.id === blankId) return { errors: {}, mark: null };
     const all = errorsOf(row, numbers);
@@ -100,8 +101,11 @@ export function PartsGrid({ of, initial }: PartsGridProps) {
           onCopy={grid.onCopy}
           onCut={grid.onCut}
           onPaste={grid.onPaste}
-          onFocus={() => {
+          onFocus={(event) => {
             focused.current = true;
+            // Assistive tech puts the focus into cells by itself.
+            const to = placeOf(event.target);
+            if (to !== null && typing === null && (to.row !== at.row || to.column !== at.column)) grid.go(to);
           }}
           onBlur={(event) => {
             // The input of a cell that is taken goes away and leaves the focus nowhere: that is still here.
@@ -111,7 +115,6 @@ export function PartsGrid({ of, initial }: PartsGridProps) {
           onMouseDown={(event) => {
             const to = placeOf(event.target);
             if (to === null || (typing !== null && to.row === at.row && to.column === at.column)) return;
-            grid.takeTyped();
             grid.go(to, event.shiftKey);
           }}
           onDoubleClick={(event) => {
@@ -147,7 +150,6 @@ export function PartsGrid({ of, initial }: PartsGridProps) {
                 left={index >= block.top && index <= block.bottom ? block.left : -1}
                 right={index >= block.top && index <= block.bottom ? block.right : -1}
                 typing={row.id === typing?.id ? typing : null}
-                onType={grid.onType}
                 onLeave={index === at.row || row.id === typing?.id ? grid.takeTyped : nothing}
               />
             ))}

@@ -6,7 +6,7 @@ import { CellEditor } from './CellEditor.tsx';
 import { type CellErrors } from './parts-table-state.ts';
 import { type RowMark, RowMarkSign } from './RowMarkSign.tsx';
 
-/** What is being typed, and where. */
+/** Where something is being typed, and what stood there at first. */
 export interface Typing {
   readonly id: string;
   readonly column: number;
@@ -28,13 +28,12 @@ export type GridRowProps = {
   readonly left: number;
   readonly right: number;
   readonly typing: Typing | null;
-  readonly onType: (text: string) => void;
-  readonly onLeave: () => void;
+  readonly onLeave: (text: string) => void;
 };
 
 /** One row of the parts table. Drawn again only when something of it changes. */
 export const PartsGridRow = memo(function GridRow(props: GridRowProps) {
-  const { id, index, texts, errors, mark, blank, active, left, right, typing, onType, onLeave } = props;
+  const { id, index, texts, errors, mark, blank, active, left, right, typing, onLeave } = props;
   const saidOf = (field: PartField | '') => errors[field];
   return (
     <tr
@@ -67,7 +66,6 @@ export const PartsGridRow = memo(function GridRow(props: GridRowProps) {
                 label={`${PART_LABELS[field]} of ${blank ? 'a new part' : `part ${texts.number}`}`}
                 text={typing.text}
                 mono={field === 'number' || field === 'size' || field === 'quantity'}
-                onType={onType}
                 onLeave={onLeave}
               />
             ) : (
@@ -101,7 +99,7 @@ function CellText({ field, texts, blank }: { field: PartField; texts: PartTexts;
 /** Errors are made anew at every look at the table: they are compared by what they say. */
 function sameRow(before: GridRowProps, after: GridRowProps): boolean {
   return (Object.keys(after) as (keyof GridRowProps)[]).every((key) =>
-    key === 'errors'
+    key === 'errors' && before.errors !== after.errors
       ? JSON.stringify(before.errors) === JSON.stringify(after.errors)
       : Object.is(before[key], after[key]),
   );

@@ -21,15 +21,21 @@ function readOnce(texts: PartTexts): ReadPart {
   return read;
 }
 
+/** One object for all rows that are right: a row is drawn again when what it is given is another. */
+const NO_ERRORS: CellErrors = {};
+
 /** What is wrong with a row's cells: what cannot be read, numbers that stand twice, what the server said. */
 export function errorsOf(row: TableRow, numbers: ReadonlyMap<string, number>): CellErrors {
-  if (row.gone) return row.refused && same(row.refused, row) ? row.refused.errors : {};
+  if (row.gone) return row.refused && same(row.refused, row) ? row.refused.errors : NO_ERRORS;
   const read = readOnce(row.texts);
-  const errors: Partial<Record<PartField | '', string>> = read.ok ? {} : { ...read.errors };
-  if ((numbers.get(partNumberKey(row.texts.number)) ?? 0) > 1 && row.texts.number !== '') {
-    errors.number ??= `Number ${row.texts.number} is in the list twice.`;
-  }
-  return row.refused && same(row.refused, row) ? { ...row.refused.errors, ...errors } : errors;
+  const twice = row.texts.number !== '' && (numbers.get(partNumberKey(row.texts.number)) ?? 0) > 1;
+  const refused = row.refused && same(row.refused, row) ? row.refused.errors : NO_ERRORS;
+  if (read.ok && !twice && refused === NO_ERRORS) return NO_ERRORS;
+  return {
+    ...(twice && { number: `Number ${row.texts.number} is in the list twice.` }),
+    ...refused,
+    ...(!read.ok && read.errors),
+  };
 }
 
 /** How often each number stands in the list. */

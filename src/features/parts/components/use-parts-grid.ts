@@ -73,14 +73,14 @@ export function usePartsGrid(table: TableState, setTable: Dispatch<SetStateActio
     if (field && row) setTyping({ id: row.id, column: at.column, text: text ?? row.texts[field] });
   }
 
-  function takeTyped(): void {
+  function takeTyped(text: string): void {
     if (typing === null) return;
     setTyping(null);
     const row = rows.find(({ id }) => id === typing.id);
     const field = PART_FIELDS[typing.column];
     if (!row || !field) return;
-    if (typing.text !== row.texts[field] && !(row.id === blankId && typing.text.trim() === '')) {
-      edit([{ id: row.id, texts: { [field]: typing.text } }], 'Change a cell');
+    if (text !== row.texts[field] && !(row.id === blankId && text.trim() === '')) {
+      edit([{ id: row.id, texts: { [field]: text } }], 'Change a cell');
     }
   }
 
@@ -102,13 +102,14 @@ export function usePartsGrid(table: TableState, setTable: Dispatch<SetStateActio
   }
 
   function onTypingKey(event: KeyboardEvent): boolean {
+    const text = event.target instanceof HTMLInputElement ? event.target.value : '';
     if (event.key === 'Escape') setTyping(null);
     else if (event.key === 'Enter' || event.key === 'ArrowDown' || event.key === 'ArrowUp') {
-      takeTyped();
+      takeTyped(text);
       const up = event.key === 'ArrowUp' || (event.key === 'Enter' && event.shiftKey);
       go(clampPlace({ ...at, row: at.row + (up ? -1 : 1) }, { ...size, rows: size.rows + 1 }));
     } else if (event.key === 'Tab') {
-      takeTyped();
+      takeTyped(text);
       const to = moveByTab(event.shiftKey, true, at, { ...size, rows: size.rows + 1 });
       if (to) go(to);
       return to !== null;
@@ -154,10 +155,6 @@ export function usePartsGrid(table: TableState, setTable: Dispatch<SetStateActio
   const selectedIds = () => selectedRows().map(({ id }) => id);
   const columns = () => ({ ...block, top: 0, bottom: COLUMNS * rows.length });
 
-  const onType = useCallback((text: string) => {
-    setTyping((now) => (now === null ? null : { ...now, text }));
-  }, []);
-
   return {
     rows,
     blankId,
@@ -169,7 +166,6 @@ export function usePartsGrid(table: TableState, setTable: Dispatch<SetStateActio
     go,
     begin,
     remove,
-    onType,
     takeTyped,
     stepBack,
     stepOn,
