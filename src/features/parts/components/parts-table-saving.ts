@@ -1,5 +1,5 @@
 import { comparePartNumbers, partNumberKey } from '../../../domain/part-numbers.ts';
-import { MOST_CHANGES, type Part, PART_FIELDS, type PartChange, type PartField } from '../part.ts';
+import { MOST_CHANGES, type Part, PART_FIELDS, type PartChange } from '../part.ts';
 import { type PartTexts, type ReadPart, readPart, textsOf } from '../part-texts.ts';
 import {
   type CellErrors,

@@ -1,11 +1,4 @@
-import {
-  type Dispatch,
-  type KeyboardEvent,
-  type SetStateAction,
-  useCallback,
-  useMemo,
-  useState,
-} from 'react';
+import { type Dispatch, type KeyboardEvent, type SetStateAction, useMemo, useState } from 'react';
 import { v7 as uuidv7 } from 'uuid';
 import { PART_FIELDS } from '../part.ts';
 import { EMPTY_TEXTS } from '../part-texts.ts';
