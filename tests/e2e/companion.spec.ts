@@ -103,7 +103,8 @@ test('the steel rule is moved by keys and by pointer', async ({ page, shown }) =
   await page.keyboard.press('ArrowRight');
   await expect(rule).toHaveAttribute('aria-valuetext', '0:35 of 1:00');
   await page.keyboard.press('End');
-  await expect(rule).toHaveAttribute('aria-valuenow', '60');
+  // The last frame begins a little before the end, and the video may be the last to say where it is.
+  await expect(rule).toHaveAttribute('aria-valuenow', /^(59|60)$/);
   await page.keyboard.press('Home');
   await expect(rule).toHaveAttribute('aria-valuenow', '0');
   const scale = await rule.locator('svg').first().boundingBox();
