@@ -1,24 +1,58 @@
 import { S3Error } from './errors.ts';
 import { countParam, sendXml, type Exchange } from './exchange.ts';
-import { compareUtf8, listKeys } from './listing.ts';
+import { compareUtf8, type ListingEntry, type ListingQuery, listKeys } from './listing.ts';
 import { receiveText } from './request-body.ts';
 import { encodeRfc3986, type S3Request } from './s3-request.ts';
-import { element, optionalElement, resultDocument } from './xml.ts';
+import { element, optionalElement, resultDocument, type Xml } from './xml.ts';
 
 /** ListObjectsV2. */
-export async function listObjectsV2(exchange: Exchange): Promise<void> {
-  const { request, authorisation, response, storage } = exchange;
-  await receiveText(request, authorisation);
-  const encode = keyEncoding(request);
+export function listObjectsV2(exchange: Exchange): Promise<void> {
+  const { request } = exchange;
   const token = request.param('continuation-token');
   const startAfter = request.param('start-after');
+  const from = token === undefined ? { after: startAfter ?? '', afterIsPrefix: false } : readToken(token);
+  return sendListing(exchange, from, ({ encode, last, entries }) => [
+    ...optionalElement('StartAfter', startAfter === undefined ? undefined : encode(startAfter)),
+    ...optionalElement('ContinuationToken', token),
+    ...optionalElement('NextContinuationToken', last && writeToken(last)),
+    element('KeyCount', entries.length),
+  ]);
+}
+
+/** ListObjects, the older form, which some clients still ask by: its pages go on after a key instead of a token. */
+export function listObjects(exchange: Exchange): Promise<void> {
+  const marker = exchange.request.param('marker') ?? '';
+  const delimiter = exchange.request.param('delimiter') ?? '';
+  const from = { after: marker, afterIsPrefix: delimiter !== '' && marker.endsWith(delimiter) };
+  return sendListing(exchange, from, ({ encode, last }) => {
+    const next = last && ('key' in last ? last.key : last.commonPrefix);
+    // S3 says where to go on only for grouped keys; without a delimiter it is the last key listed.
+    return [
+      element('Marker', encode(marker)),
+      ...optionalElement('NextMarker', delimiter === '' || next === undefined ? undefined : encode(next)),
+    ];
+  });
+}
+
+type Page = {
+  readonly encode: (key: string) => string;
+  readonly entries: readonly ListingEntry[];
+  /** The entry to go on after; undefined when there are no more. */
+  readonly last: ListingEntry | undefined;
+};
+
+async function sendListing(
+  { request, authorisation, response, storage }: Exchange,
+  from: Pick<ListingQuery, 'after' | 'afterIsPrefix'>,
+  paging: (page: Page) => Xml[],
+): Promise<void> {
+  await receiveText(request, authorisation);
+  const encode = keyEncoding(request);
   const prefix = request.param('prefix') ?? '';
   const delimiter = request.param('delimiter') ?? '';
   const max = countParam(request, 'max-keys', 1000);
-  const position = token === undefined ? { after: startAfter ?? '', afterIsPrefix: false } : readToken(token);
   const keys = storage.objects.keys(request.bucket);
-  const { entries, truncated } = listKeys(keys, { prefix, delimiter, max, ...position });
-  const last = entries.at(-1);
+  const { entries, truncated } = listKeys(keys, { prefix, delimiter, max, ...from });
   const contents = entries.flatMap((entry) => {
     const record = 'key' in entry ? storage.objects.find(request.bucket, entry.key) : undefined;
     if (!record) return [];
@@ -40,11 +74,8 @@ export async function listObjectsV2(exchange: Exchange): Promise<void> {
       element('Name', request.bucket),
       element('Prefix', encode(prefix)),
       ...optionalElement('Delimiter', delimiter === '' ? undefined : encode(delimiter)),
-      ...optionalElement('StartAfter', startAfter === undefined ? undefined : encode(startAfter)),
       ...optionalElement('EncodingType', request.param('encoding-type')),
-      ...optionalElement('ContinuationToken', token),
-      ...optionalElement('NextContinuationToken', truncated && last ? writeToken(last) : undefined),
-      element('KeyCount', entries.length),
+      ...paging({ encode, entries, last: truncated ? entries.at(-1) : undefined }),
       element('MaxKeys', max),
       element('IsTruncated', truncated),
       ...contents,
@@ -109,7 +140,7 @@ function keyEncoding(request: S3Request): (key: string) => string {
   });
 }
 
-function writeToken(last: { key: string } | { commonPrefix: string }): string {
+function writeToken(last: ListingEntry): string {
   const text = 'key' in last ? `k${last.key}` : `p${last.commonPrefix}`;
   return Buffer.from(text).toString('base64url');
 }

@@ -9,7 +9,7 @@ import { copyObject, uploadPartCopy } from './copy-operations.ts';
 import { deleteObjects } from './delete-objects.ts';
 import { S3Error } from './errors.ts';
 import { type Exchange } from './exchange.ts';
-import { listMultipartUploads, listObjectsV2 } from './list-operations.ts';
+import { listMultipartUploads, listObjects, listObjectsV2 } from './list-operations.ts';
 import {
   abortMultipartUpload,
   completeMultipartUpload,
@@ -38,6 +38,7 @@ const RULES: readonly Rule[] = [
   { on: 'bucket', method: 'GET', param: 'location', run: getBucketLocation },
   { on: 'bucket', method: 'GET', param: 'uploads', run: listMultipartUploads },
   { on: 'bucket', method: 'GET', param: 'list-type', run: listObjectsV2 },
+  { on: 'bucket', method: 'GET', run: listObjects },
   { on: 'bucket', method: 'POST', param: 'delete', run: deleteObjects },
   { on: 'bucket', method: 'PUT', run: createBucket },
   { on: 'bucket', method: 'HEAD', run: headBucket },
@@ -76,14 +77,11 @@ export function chooseOperation(request: S3Request): Operation {
   );
   const partOfObject =
     on === 'object' && request.param('partNumber') !== undefined && rule?.param === undefined;
-  const olderList = on === 'bucket' && method === 'GET' && !rule;
-  if (unsupported !== undefined || partOfObject || olderList) {
+  if (unsupported !== undefined || partOfObject) {
     throw new S3Error(
       'NotImplemented',
       'A parameter you provided implies functionality that is not implemented',
-      {
-        Parameter: unsupported ?? (partOfObject ? 'partNumber' : 'list-type'),
-      },
+      { Parameter: unsupported ?? 'partNumber' },
     );
   }
   if (!rule) {

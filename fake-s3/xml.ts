@@ -61,7 +61,8 @@ const parser = new XMLParser({
   ignoreDeclaration: true,
   parseTagValue: false,
   trimValues: false,
-  htmlEntities: false,
+  // The parser reads numbered references, as Go's clients write quotes, only together with HTML's names.
+  htmlEntities: true,
   removeNSPrefix: true,
   isArray: (name) => name === 'Part' || name === 'Object',
 });

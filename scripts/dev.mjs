@@ -3,7 +3,7 @@ import { ROOT, setUp } from './setup.mjs';
 import { runScript } from './trouble.mjs';
 
 await runScript(async () => {
-  await setUp({ debian: ['postgresql-15', 'ffmpeg'] });
+  await setUp({ debian: ['postgresql-15', 'ffmpeg', 'libheif-examples'] });
   const { register } = await import('tsx/esm/api');
   register();
   const { supervise } = await import('./supervise.ts');

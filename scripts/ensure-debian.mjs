@@ -7,6 +7,7 @@ import { Trouble } from './trouble.mjs';
 const PROGRAMS = /** @type {const} */ ({
   'postgresql-15': { name: 'PostgreSQL 15', files: ['/usr/lib/postgresql/15/bin/postgres'] },
   ffmpeg: { name: 'ffmpeg', files: ['ffmpeg', 'ffprobe'] },
+  'libheif-examples': { name: 'the HEIC tools', files: ['/usr/bin/heif-convert'] },
   chromium: { name: 'Chromium', files: ['/usr/bin/chromium'] },
 });
 

@@ -9,7 +9,7 @@ await runScript(async () => {
   await setUp({
     debian: [
       ...(ownDatabase ? /** @type {const} */ (['postgresql-15']) : []),
-      ...(needsMedia ? /** @type {const} */ (['ffmpeg']) : []),
+      ...(needsMedia ? /** @type {const} */ (['ffmpeg', 'libheif-examples']) : []),
     ],
     build: 'when-changed',
   });

@@ -34,7 +34,7 @@ async function runEndToEnd(reports) {
 }
 
 await runScript(async () => {
-  await setUp({ debian: ['postgresql-15', 'ffmpeg', 'chromium'], build: 'when-changed' });
+  await setUp({ debian: ['postgresql-15', 'ffmpeg', 'libheif-examples', 'chromium'], build: 'when-changed' });
   const reports = mkdtempSync(join(ROOT, '.astro', 'test-reports-'));
   try {
     const { line, status } = addUp([

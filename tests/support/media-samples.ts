@@ -1,5 +1,4 @@
 import { execFile } from 'node:child_process';
-import { existsSync } from 'node:fs';
 import { readFile, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
 import { promisify } from 'node:util';
@@ -59,11 +58,6 @@ export async function makePhoto(format: 'jpeg' | 'png' | 'webp' = 'jpeg', width 
 }
 
 const HEIF_ENC = '/usr/bin/heif-enc';
-
-/** Whether Debian's libheif-examples is here, which the product itself does without. */
-export function canMakeHeic(): boolean {
-  return existsSync(HEIF_ENC);
-}
 
 /** A JPEG as a phone would save it. */
 export async function makeHeic(jpeg: Uint8Array): Promise<Buffer> {

@@ -1,7 +1,9 @@
 import {
   DeleteObjectCommand,
   GetObjectCommand,
+  ListObjectsCommand,
   ListObjectsV2Command,
+  type ListObjectsCommandOutput,
   PutObjectCommand,
   type ListObjectsV2CommandInput,
 } from '@aws-sdk/client-s3';
@@ -24,8 +26,8 @@ afterAll(() => standIn.stop());
 const put = (Key: string, Body = 'x') => standIn.s3.send(new PutObjectCommand({ Bucket: BUCKET, Key, Body }));
 const list = (input: Partial<ListObjectsV2CommandInput>) =>
   standIn.s3.send(new ListObjectsV2Command({ Bucket: BUCKET, ...input }));
-const keys = (answer: Awaited<ReturnType<typeof list>>) => (answer.Contents ?? []).map(({ Key }) => Key);
-const prefixes = (answer: Awaited<ReturnType<typeof list>>) =>
+const keys = (answer: ListObjectsCommandOutput) => (answer.Contents ?? []).map(({ Key }) => Key);
+const prefixes = (answer: ListObjectsCommandOutput) =>
   (answer.CommonPrefixes ?? []).map(({ Prefix }) => Prefix);
 
 /** Every page of a listing, following the tokens. */
@@ -95,6 +97,18 @@ test('pages follow one another without a gap or a repeat, common prefixes includ
   ]);
   const folded = await pages({ Prefix: 'page/', Delimiter: '/', MaxKeys: 1 });
   expect(folded.flat()).toEqual(['page/a', 'page/b/', 'page/c', 'page/d/', 'page/e']);
+});
+
+test('the older listing goes on after the key or prefix that it gave last', async () => {
+  for (const key of ['old/a', 'old/b/1', 'old/b/2', 'old/c', 'old/d']) await put(key);
+  const query = { Bucket: BUCKET, Prefix: 'old/', MaxKeys: 2 };
+  const first = await standIn.s3.send(new ListObjectsCommand({ ...query, Delimiter: '/' }));
+  expect([keys(first), prefixes(first), first.NextMarker]).toEqual([['old/a'], ['old/b/'], 'old/b/']);
+  const Marker = first.NextMarker;
+  const second = await standIn.s3.send(new ListObjectsCommand({ ...query, Delimiter: '/', Marker }));
+  expect([keys(second), prefixes(second), second.IsTruncated]).toEqual([['old/c', 'old/d'], [], false]);
+  const flat = await standIn.s3.send(new ListObjectsCommand({ ...query, Marker: 'old/b/1' }));
+  expect([keys(flat), flat.NextMarker, flat.IsTruncated]).toEqual([['old/b/2', 'old/c'], undefined, true]);
 });
 
 test('start-after begins behind a key, whether or not it exists', async () => {
