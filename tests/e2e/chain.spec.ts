@@ -1,0 +1,143 @@
+import { writeFile } from 'node:fs/promises';
+import { type Page } from '@playwright/test';
+import { paths } from '../../src/paths.ts';
+import { expect, test } from '../support/e2e/test.ts';
+import { makeMedia } from '../support/media-samples.ts';
+
+/** Sixteen seconds whose every frame says its own number. @param pattern the source of ffmpeg that draws them */
+async function cut(path: string, pattern: string): Promise<string> {
+  const picture = ['-f', 'lavfi', '-i', `${pattern}=size=320x180:rate=25:duration=16`];
+  const coding = ['-c:v', 'libx264', '-preset', 'ultrafast', '-g', '25', '-pix_fmt', 'yuv420p'];
+  await writeFile(path, await makeMedia('cut.mp4', ...picture, ...coding));
+  return path;
+}
+
+/** Writes a note on the desk at a time, as a maker does: the time typed, the kind by its key, the part by its number. */
+async function writeNote(desk: Page, time: string, words: string, part: string): Promise<void> {
+  const composer = desk.getByRole('region', { name: 'New note' });
+  await desk.getByLabel('Go to a time, such as 3:41').fill(time);
+  await desk.keyboard.press('Enter');
+  await desk.keyboard.press('Escape');
+  await desk.keyboard.press('1');
+  await expect(composer.getByLabel('Words')).toBeFocused();
+  await desk.keyboard.type(words);
+  await composer.getByRole('combobox', { name: 'Parts' }).fill(part);
+  await desk.keyboard.press('Enter');
+  await composer.getByRole('button', { name: 'Save the note' }).click();
+  await expect(desk.getByRole('region', { name: 'Notes' }).getByText(words)).toBeVisible();
+}
+
+async function show(page: Page, seconds: number): Promise<void> {
+  await page.locator('video').evaluate(async (video: HTMLVideoElement, at) => {
+    if (video.readyState < 1) await new Promise((resolve) => (video.onloadedmetadata = resolve));
+    video.currentTime = at;
+  }, seconds);
+}
+
+/** The film that an episode's page holds; whatever else came is given as it is. */
+function filmOn(page: string): string {
+  const films = new Set([...page.matchAll(/\/media\/([0-9a-f-]{36})\/video/g)].map(([, id = '']) => id));
+  const whole = page.trimEnd().endsWith('</html>') && page.includes('The shaft goes in.');
+  return whole && films.size === 1 ? ([...films][0] ?? '') : `not one whole edition: ${page.slice(0, 200)}`;
+}
+
+test('an owner and an editor take a build from a list of parts to a page that viewers follow, and replace it in one moment', async ({
+  page: owner,
+  product,
+  signIn,
+  openBrowser,
+  request,
+}, testInfo) => {
+  test.slow();
+  const maker = await product.owner('Wren Hallam', 'Marram Lane');
+  const helper = await product.person('Bo Lind');
+  await product.join(maker, helper, 'editor');
+  await signIn(maker);
+  const { workshop } = maker;
+
+  await owner.goto(paths.newBuild(workshop));
+  await owner.getByLabel('Name', { exact: true }).fill('Orchard press');
+  await owner.getByLabel('Address name').fill('press');
+  await owner.getByRole('button', { name: 'Make the build' }).click();
+  await expect(owner).toHaveURL(new RegExp(`/bench/${workshop}/press/`));
+  await owner.goto(paths.importParts(workshop, 'press'));
+  const list = 'Mark;Called;Off\n117;drum shaft;1\n118;bearing housing;2\n';
+  await owner
+    .getByLabel('A file')
+    .setInputFiles({ name: 'parts.csv', mimeType: 'text/csv', buffer: Buffer.from(list) });
+  await owner.getByRole('button', { name: 'Read the list' }).click();
+  await owner.getByLabel('names the columns').check();
+  await owner.getByLabel('Number', { exact: true }).selectOption('0');
+  await owner.getByLabel('Name', { exact: true }).selectOption('1');
+  await owner.getByLabel('Needed').selectOption('2');
+  await owner.getByRole('button', { name: 'Look it over' }).click();
+  await owner.getByRole('button', { name: 'Take 2 parts in' }).click();
+  await expect(owner.getByText('2 added, 0 updated.')).toBeVisible();
+  await owner.goto(paths.buildSettings(workshop, 'press'));
+  await owner.getByLabel('Everyone').check();
+  await owner.getByRole('button', { name: 'Save this build' }).click();
+  await expect(owner.getByText('On show at')).toBeVisible();
+
+  const editor = await (await openBrowser(helper)).newPage();
+  await editor.goto(paths.footage(workshop, 'press'));
+  const [first, second] = [testInfo.outputPath('first-cut.mp4'), testInfo.outputPath('second-cut.mp4')];
+  await editor
+    .getByLabel('Choose files…')
+    .setInputFiles([await cut(first, 'testsrc2'), await cut(second, 'testsrc')]);
+  for (const name of ['first-cut.mp4', 'second-cut.mp4'])
+    await expect(editor.getByRole('region', { name: 'Clips' }).getByRole('link', { name })).toBeVisible({
+      timeout: 60_000,
+    });
+  await editor.goto(paths.episodes(workshop, 'press'));
+  await editor.getByLabel('Title').fill('The drum shaft');
+  await editor.getByRole('button', { name: 'Start the draft' }).click();
+  await editor.getByLabel('A file kept here').selectOption({ label: 'first-cut.mp4' });
+  await editor.getByRole('button', { name: 'Take this file' }).click();
+  await expect(editor.getByText('of 0:16.00')).toBeVisible();
+  await writeNote(editor, '0:02', 'The shaft goes in.', '117');
+  await writeNote(editor, '0:08', 'The housing goes on.', '118');
+  await expect(editor.getByText('Everything is saved.')).toBeVisible();
+  const desk = editor.url();
+  await editor.getByRole('link', { name: 'Publish…' }).click();
+  await editor.getByRole('button', { name: 'Ask the owner to publish it' }).click();
+  await expect(editor.getByRole('button', { name: 'Back to draft' })).toBeVisible();
+
+  await owner.goto(paths.today(workshop));
+  await owner.getByRole('link', { name: /The drum shaft/ }).click();
+  await owner.getByRole('button', { name: 'Publish the episode' }).click();
+  await expect(owner.getByRole('heading', { name: 'Replace what viewers see' })).toBeVisible();
+
+  const shown = paths.episode(workshop, 'press', 1);
+  const viewer = await (await openBrowser()).newPage();
+  await viewer.goto(shown);
+  const bench = viewer.getByRole('region', { name: /On the bench at/ });
+  await show(viewer, 7.98);
+  await expect(bench.getByRole('heading')).toHaveText('On the bench at 0:07');
+  await expect(bench.locator('[aria-current]')).toContainText('drum shaft');
+  await show(viewer, 8.02);
+  await expect(bench.getByRole('heading')).toHaveText('On the bench at 0:08');
+  await expect(bench.locator('[aria-current]')).toContainText('bearing housing');
+
+  const before = filmOn(await (await request.get(shown)).text());
+  await editor.goto(desk);
+  await editor.getByLabel('A file kept here').selectOption({ label: 'second-cut.mp4' });
+  await editor.getByRole('button', { name: 'Take this file' }).click();
+  await expect(editor.getByLabel('A file kept here').locator(':checked')).toHaveText('second-cut.mp4');
+  expect(filmOn(await (await request.get(shown)).text())).toBe(before);
+
+  const polled: string[] = [];
+  const polling = (async () => {
+    do polled.push(filmOn(await (await request.get(shown)).text()));
+    while (polled.at(-1) === before);
+  })();
+  await owner.goto(owner.url().replace(/\?.*/, ''));
+  await owner.getByRole('button', { name: 'Publish the next edition' }).click();
+  await polling;
+  const after = polled.at(-1) ?? '';
+  expect(after).toMatch(/^[0-9a-f-]{36}$/);
+  expect(new Set(polled)).toEqual(new Set([before, after]));
+  await viewer.reload();
+  await show(viewer, 8.02);
+  await expect(bench.locator('[aria-current]')).toContainText('bearing housing');
+  expect(filmOn(await viewer.content())).toBe(after);
+});
