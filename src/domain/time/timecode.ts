@@ -10,6 +10,13 @@ const DROPPED: readonly { readonly rate: Rate; readonly labels: number }[] = [
 /** Timecode labels a clock of one day and then begins again (SMPTE ST 12-1). */
 const HOURS = 24;
 
+/** How many frames a day of labels has. @throws RangeError for a rate without such labels */
+export function framesADay(rate: Rate, drop = false): number {
+  const counting = countingOf(rate, drop);
+  if (counting === null) throw new RangeError(noCounting(rate, drop));
+  return 6 * HOURS * (600 * counting.nominal - 9 * counting.labels);
+}
+
 /** How labels are given to frames: the whole number that a second counts to, and the labels left out. */
 interface Counting {
   readonly nominal: number;
@@ -56,7 +63,7 @@ export function formatTimecode(frame: number, rate: Rate, drop = false): string 
   const { nominal, labels } = counting;
   const perMinute = 60 * nominal - labels;
   const perTenMinutes = 600 * nominal - 9 * labels;
-  const today = frame % (6 * HOURS * perTenMinutes);
+  const today = frame % framesADay(rate, drop);
   const tens = Math.floor(today / perTenMinutes);
   const rest = today % perTenMinutes;
   // The tenth minute leaves nothing out: the first of each ten is longer by the labels.
