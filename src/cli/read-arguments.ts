@@ -3,7 +3,7 @@ import { type Answer, right, wrong } from '../domain/answer.ts';
 
 /** Options by name, and what stands without one. */
 export interface Arguments {
-  readonly options: Readonly<Record<string, string | boolean | undefined>>;
+  readonly options: Readonly<Record<string, string | boolean | string[] | undefined>>;
   readonly bare: readonly string[];
 }
 

@@ -1,12 +1,14 @@
 import { type Answer, right, wrong } from '../../domain/answer.ts';
 import { type Tool } from '../tool.ts';
 import { chaptersTool } from './chapters.ts';
+import { editTool } from './edit.ts';
 import { lengthTool } from './length.ts';
 import { timecodeTool } from './timecode.ts';
 
 /** The tools by the name they are called by. */
 export const TOOLS: ReadonlyMap<string, Tool> = new Map([
   ['chapters', chaptersTool],
+  ['edit', editTool],
   ['length', lengthTool],
   ['timecode', timecodeTool],
 ]);

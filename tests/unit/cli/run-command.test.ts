@@ -9,6 +9,10 @@ const FILES: Readonly<Record<string, string>> = {
   'falling.csv': 'at,title\n0,a\n100,b\n50,c\n',
   'wrong.csv': 'at,title\nsoon,a\n',
   'empty.csv': 'at,title\n',
+  'list.edl':
+    '001 AX V C 00:00:31:05 00:00:33:05 01:00:00:00 01:00:02:00\n* FROM CLIP NAME: C0043\n' +
+    '002 C0044 V C 00:00:00:00 00:00:01:23 01:00:02:00 01:00:03:00\nM2 C0044 047.6 00:00:00:00\n',
+  'sound.edl': '1 C0043 V C 0 50 0 50\n2 C0044 A C 0 25 25 50\n',
 };
 const read = (path: string) => {
   const text = FILES[path];
@@ -57,6 +61,56 @@ describe('timecode', () => {
     expect(ask({ tool: 'timecode', rate: 25, frame: 90 })).toMatchObject({
       value: { timecode: '00:00:03:15' },
     });
+  });
+});
+
+describe('edit', () => {
+  const SEGMENTS = [
+    { clip: 'C0043', source: [780, 830], record: [0, 50], speed: [1, 1] },
+    { clip: 'C0044', source: [0, 48], record: [50, 75], speed: [238, 125] }, // 47.6 / 25
+  ];
+
+  it('prints the segments with their frames and speeds', () => {
+    expect(run('edit', '--fps', '25', 'list.edl')).toEqual({
+      ok: true,
+      value: `${JSON.stringify({ rate: [25, 1], frames: 75, segments: SEGMENTS, warnings: [] })}\n`,
+    });
+  });
+
+  it('counts a clip at a rate of its own', () => {
+    const answer = run('edit', '--fps', '25', '--clip-fps', 'C0043=50', '--clip-fps', 'x=y=24', 'list.edl');
+    expect(JSON.parse(answer.ok ? answer.value : '')).toMatchObject({
+      segments: [{ source: [1555, 1655] }, {}],
+    });
+  });
+
+  it('lists sound that is not that of the pictures', () => {
+    const answer = run('edit', '--fps', '25', 'sound.edl');
+    expect(JSON.parse(answer.ok ? answer.value : '')).toMatchObject({
+      segments: [{ clip: 'C0043' }],
+      sound: [{ clip: 'C0044', record: [25, 50] }],
+    });
+  });
+
+  it('takes the list itself in a batch, or a timeline', () => {
+    expect(ask({ tool: 'edit', edl: FILES['list.edl'], fps: 25 })).toMatchObject({
+      value: { segments: SEGMENTS },
+    });
+    const time = (value: number) => ({ OTIO_SCHEMA: 'RationalTime.1', value, rate: 24 });
+    const source_range = { OTIO_SCHEMA: 'TimeRange.1', start_time: time(12), duration: time(24) };
+    const clip = { OTIO_SCHEMA: 'Clip.2', name: 'C0043', source_range };
+    const tracks = {
+      OTIO_SCHEMA: 'Stack.1',
+      children: [{ OTIO_SCHEMA: 'Track.1', kind: 'Video', children: [clip] }],
+    };
+    const otio = { OTIO_SCHEMA: 'Timeline.1', name: 'Press', tracks };
+    const value = {
+      rate: [24, 1],
+      frames: 24,
+      segments: [{ clip: 'C0043', source: [12, 36], record: [0, 24], speed: [1, 1] }],
+    };
+    expect(ask({ tool: 'edit', otio: JSON.stringify(otio) })).toMatchObject({ value });
+    expect(ask({ tool: 'edit', otio, fps: 24 })).toMatchObject({ value });
   });
 });
 
@@ -113,6 +167,13 @@ describe('Wrong input', () => {
     [['timecode', '--rate', '12/7', '5'], 'whole frames a second'],
     [['timecode', '--rate', '25', '1', '2'], 'one frame or timecode'],
     [['timecode', '--rate', '30000/1001', '00:01:00;00'], 'does not exist'],
+    [['edit', '--fps', '25'], 'Give one edit list'],
+    [['edit', 'list.edl'], 'does not say its rate'],
+    [['edit', '--fps', '24000', 'lost.edl'], 'cannot be read'],
+    [['edit', '--fps', '20', 'list.edl'], 'Line 3: 00:00:01:23 has frames beyond 19'],
+    [['edit', '--fps', '25', '--clip-fps', 'C0043', 'list.edl'], 'NAME=RATE'],
+    [['edit', '--fps', '25', '--clip-fps', 'C0043=fast', 'list.edl'], 'no frame rate'],
+    [['edit', '--fps', '25', 'two.csv'], 'no event in this list'],
     [['chapters', '--to', 'text'], 'Give one list'],
     [['chapters', '--to', 'opera', 'chapters.csv'], 'Choose a form'],
     [['chapters', '--to', 'vtt', 'chapters.csv'], 'Give the length'],
@@ -137,6 +198,9 @@ describe('Wrong input', () => {
     ['{"tool":"timecode","rate":25,"frame":1,"timecode":"00:00:00:01"}', 'either a frame or a timecode'],
     ['{"tool":"timecode","rate":25,"frame":-1}', 'not below zero'],
     ['{"tool":"chapters","to":"json","chapters":7}', 'Give the chapters'],
+    ['{"tool":"edit","fps":25}', 'one edit list or one timeline'],
+    ['{"tool":"edit","fps":25,"otio":"{\\"OTIO_SCHEMA\\":"}', 'Line 1: the timeline is no JSON'],
+    ['{"tool":"edit","edl":7}', 'An edit list is text'],
   ])('in a batch, %s gets a sentence', (line, sentence) => {
     const answer = answerLine(line);
     expect(answer.ok ? '' : answer.error).toContain(sentence);
