@@ -2,14 +2,19 @@ import { type Answer, right, wrong } from '../../domain/answer.ts';
 import { type Tool } from '../tool.ts';
 import { chaptersTool } from './chapters.ts';
 import { editTool } from './edit.ts';
+import { fitTool, seatsTool } from './fit.ts';
 import { lengthTool } from './length.ts';
+import { sectionsTool } from './sections.ts';
 import { timecodeTool } from './timecode.ts';
 
 /** The tools by the name they are called by. */
 export const TOOLS: ReadonlyMap<string, Tool> = new Map([
   ['chapters', chaptersTool],
   ['edit', editTool],
+  ['fit', fitTool],
   ['length', lengthTool],
+  ['seats', seatsTool],
+  ['sections', sectionsTool],
   ['timecode', timecodeTool],
 ]);
 
