@@ -25,6 +25,9 @@ export const paths = {
     `/w/${part(workshop)}/${part(build)}/episodes/${String(number)}/captions/${part(captions)}.vtt`,
   part: (workshop: string, build: string, partId: string) =>
     `/w/${part(workshop)}/${part(build)}/parts/${part(partId)}`,
+  /** @param build when only one build is asked for */
+  subscribe: (workshop: string, build?: string) =>
+    `/w/${part(workshop)}/${build === undefined ? '' : `${part(build)}/`}subscribe`,
   media: (file: string, variant: string) => `/media/${part(file)}/${part(variant)}`,
 
   signUp: () => '/sign-up',
@@ -41,12 +44,18 @@ export const paths = {
   secondFactor: (next?: string) =>
     next === undefined ? '/account/second-factor' : `/account/second-factor?next=${part(next)}`,
   invitation: (id: string, token: string) => `/invitations/${part(id)}?token=${part(token)}`,
+  askedToSubscribe: () => '/subscriptions/asked',
+  confirmSubscription: (subscriber: string, token: string) =>
+    `/subscriptions/${part(subscriber)}/confirm?token=${part(token)}`,
+  leave: (subscriber: string, token: string) =>
+    `/subscriptions/${part(subscriber)}/leave?token=${part(token)}`,
 
   bench: () => '/bench',
   newWorkshop: () => '/bench/new',
   today: (workshop: string) => `/bench/${part(workshop)}`,
   team: (workshop: string) => `/bench/${part(workshop)}/team`,
   workshopSettings: (workshop: string) => `/bench/${part(workshop)}/settings`,
+  subscribers: (workshop: string) => `/bench/${part(workshop)}/subscribers`,
   newBuild: (workshop: string) => `/bench/${part(workshop)}/new`,
   storage: (workshop: string) => `/bench/${part(workshop)}/storage`,
   benchBuild: (workshop: string, build: string) => onBench(workshop, build),
@@ -64,6 +73,8 @@ export const paths = {
     onBench(workshop, build, `episodes/${part(episode)}`),
   publish: (workshop: string, build: string, episode: string) =>
     onBench(workshop, build, `episodes/${part(episode)}/publish`),
+  announcement: (workshop: string, build: string, episode: string) =>
+    onBench(workshop, build, `episodes/${part(episode)}/announcement`),
   preview: (workshop: string, build: string, episode: string) =>
     onBench(workshop, build, `episodes/${part(episode)}/preview`),
 
@@ -84,6 +95,11 @@ export const paths = {
     inWorkshop: (workshop: string, rest: string) => `/api/workshops/${part(workshop)}/${rest}`,
     inBuild: (workshop: string, build: string, rest: string) =>
       `/api/workshops/${part(workshop)}/builds/${part(build)}/${rest}`,
+    confirmSubscription: (subscriber: string) => `/api/subscriptions/${part(subscriber)}/confirm`,
+    /** Where a mailbox that leaves in one click posts to; its token is its authority. */
+    leave: (subscriber: string, token: string) =>
+      `/api/subscriptions/${part(subscriber)}/leave/${part(token)}`,
+    bounces: (token: string) => `/api/bounces/${part(token)}`,
     acceptInvitation: (invitation: string) => `/api/invitations/${part(invitation)}/accept`,
   },
 } as const;

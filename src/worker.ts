@@ -1,3 +1,4 @@
+import { audienceJobs } from './features/audience/jobs.ts';
 import { fileJobs } from './features/files/jobs.ts';
 import { sendInvitationJob } from './features/workshops/jobs.ts';
 import { liveUntilStopped, startProcess } from './process-life.ts';
@@ -6,7 +7,7 @@ import { readServiceSettings } from './server/env.ts';
 import { type JobDefinition, workQueue } from './server/jobs/queue.ts';
 
 /** Every job there is. */
-const JOBS: readonly JobDefinition[] = [sendInvitationJob, ...fileJobs];
+const JOBS: readonly JobDefinition[] = [sendInvitationJob, ...fileJobs, ...audienceJobs];
 
 await startProcess(async () => {
   const services = await openProcessServices(readServiceSettings(), 'worker');

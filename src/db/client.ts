@@ -4,7 +4,16 @@ import pg from 'pg';
 /** The database, or a transaction on it: verbs take whichever they are given. */
 export type Database = Pick<
   NodePgDatabase,
-  'select' | 'selectDistinct' | 'insert' | 'update' | 'delete' | 'execute' | '$with' | 'with' | '$count'
+  | 'select'
+  | 'selectDistinct'
+  | 'selectDistinctOn'
+  | 'insert'
+  | 'update'
+  | 'delete'
+  | 'execute'
+  | '$with'
+  | 'with'
+  | '$count'
 >;
 
 export interface DatabaseHandle {

@@ -5,6 +5,7 @@ export const EVENTS = [
   'media-found',
   'original-dropped',
   'file-ready',
+  'announcement-started',
 ] as const;
 export type EventName = (typeof EVENTS)[number];
 

@@ -4,6 +4,8 @@ export type MailBlock =
   | { readonly kind: 'paragraph'; readonly text: string }
   /** What the reader is asked to do: the words of the button and the whole http(s) address. */
   | { readonly kind: 'action'; readonly label: string; readonly url: string }
+  /** A way out or aside, without a button. */
+  | { readonly kind: 'link'; readonly label: string; readonly url: string }
   /** Something to copy or type elsewhere, such as a sign-in code. */
   | { readonly kind: 'code'; readonly text: string }
   | { readonly kind: 'list'; readonly items: readonly string[] }

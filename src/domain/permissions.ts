@@ -31,6 +31,7 @@ export const WORKSHOP_PERMISSIONS = {
   'episode.publish': OWNER,
   'episode.ask-to-publish': EDITORS,
   'announcement.send': OWNER,
+  'announcement.ask-to-send': EDITORS,
   'plans.release': OWNER,
   'address.see': OWNER,
   'question.sort': TEAM,
@@ -55,6 +56,9 @@ export const ACCOUNT_PERMISSIONS = {
   'invitation.accept': ['viewer'],
   // An address of media names no workshop; who may see it follows from where it is shown.
   'media.ask': ['viewer', 'anyone'],
+  // Whoever holds a mailed link, or the address that a mail server was given.
+  'mailed-link.follow': ['viewer', 'anyone'],
+  'bounce.report': ['viewer', 'anyone'],
 } as const satisfies Record<string, readonly Standing[]>;
 
 export type WorkshopPermission = keyof typeof WORKSHOP_PERMISSIONS;

@@ -53,6 +53,7 @@ export function benchGroups(
       items: [
         item('Team', paths.team(workshop.slug)),
         item('Storage', paths.storage(workshop.slug)),
+        ...(may(role, 'address.see') ? [item('Subscribers', paths.subscribers(workshop.slug))] : []),
         ...(may(role, 'workshop.change-settings')
           ? [item('Settings', paths.workshopSettings(workshop.slug))]
           : []),

@@ -2,12 +2,11 @@ import { type NodePgDatabase } from 'drizzle-orm/node-postgres';
 import { type Logger } from 'pino';
 import { openDatabase } from '../db/client.ts';
 import { requireMigrated } from '../db/migrate.ts';
-import { type Mail } from '../domain/mail.ts';
 import { type AccountMails, type Auth, openAuth } from './auth/auth.ts';
 import { type ServiceSettings } from './env.ts';
 import { type JobQueue, openJobQueue } from './jobs/queue.ts';
 import { openRateLimiter, type RateLimiter } from './limits/rate-limiter.ts';
-import { type Mailer, openMailer } from './mail/send-mail.ts';
+import { type Mailer, openMailer, type Outgoing } from './mail/send-mail.ts';
 import { openStorage, type Storage } from './storage/storage.ts';
 
 /** What one process works with; opened once, handed on in the context. */
@@ -16,6 +15,8 @@ export interface Services {
   readonly db: NodePgDatabase;
   readonly auth: Auth;
   readonly mailer: Mailer;
+  /** Sends a mail at once, for one with a token in it; whoever asked does not wait, and one that fails is only logged. */
+  sendAtOnce(outgoing: Outgoing): void;
   readonly jobs: JobQueue;
   readonly storage: Storage;
   readonly limiter: RateLimiter;
@@ -50,9 +51,9 @@ export async function openServices(parts: {
   const mailer = openMailer(settings, log);
   const storage = openStorage(settings, log);
   const onTheirWay = new Set<Promise<void>>();
-  function sendLater(to: string, mail: Mail): void {
+  function sendAtOnce(outgoing: Outgoing): void {
     const sending = mailer
-      .send({ to, mail })
+      .send(outgoing)
       .catch((error: unknown) => {
         log.error({ error: error instanceof Error ? error.message : String(error) }, 'A mail was not sent.');
       })
@@ -62,8 +63,17 @@ export async function openServices(parts: {
   return {
     settings,
     db: database.db,
-    auth: openAuth({ settings, db: database.db, mails: parts.accountMails, log, sendLater }),
+    auth: openAuth({
+      settings,
+      db: database.db,
+      mails: parts.accountMails,
+      log,
+      sendLater: (to, mail) => {
+        sendAtOnce({ to, mail });
+      },
+    }),
     mailer,
+    sendAtOnce,
     jobs,
     storage,
     limiter: openRateLimiter(database.pool),

@@ -16,6 +16,7 @@ export const RESERVED_BUILD_SLUGS: readonly string[] = [
   'settings',
   'storage',
   'subscribe',
+  'subscribers',
   'team',
 ];
 

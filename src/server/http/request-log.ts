@@ -21,9 +21,13 @@ export function millisecondsSince(startedAt: number): number {
   return Math.round((performance.now() - startedAt) * 10) / 10;
 }
 
+/** A signed token in a path, as long as base64url makes an HMAC-SHA-256: whoever reads it may use it. */
+const TOKEN_IN_PATH = /(?<=\/)[\w-]{43}(?=\/|$)/g;
+
 /** Writes the one line of a request. */
 export function logRequest(log: Logger, facts: RequestFacts): void {
-  const { requestId, method, path, status, startedAt, cache, aborted } = facts;
+  const { requestId, method, status, startedAt, cache, aborted } = facts;
+  const path = facts.path.replace(TOKEN_IN_PATH, '…');
   const ms = millisecondsSince(startedAt);
   log.info(
     { requestId, method, path, status, ms, cache, ...(aborted === true ? { aborted } : {}) },

@@ -30,6 +30,8 @@ export interface JobDefinition {
   readonly name: string;
   /** The event it follows, or when it runs by itself: five fields of cron, in UTC. */
   readonly on: EventName | { readonly cron: string };
+  /** Runs when a worker starts, too: for what the last one may have been killed in. */
+  readonly alsoAtStart?: boolean;
   /** Set for long work: a job of a worker that lives may take so long; of one that was killed it is back sooner. */
   readonly longestSeconds?: number;
   readonly tries: number;
@@ -146,6 +148,7 @@ export async function workQueue(
   });
   for (const definition of definitions) {
     if (typeof definition.on === 'object') await boss.schedule(definition.name, definition.on.cron);
+    if (definition.alsoAtStart) await boss.send(definition.name, {});
     await boss.work<EventIds>(definition.name, { pollingIntervalSeconds: 0.5 }, async ([job]) => {
       if (!job) return;
       // What a schedule sends has no ids.

@@ -51,6 +51,8 @@ function blockHtml(block: MailBlock): string {
       return `<p class="fine" style="margin:0 0 12px;font-size:14px;line-height:20px;color:#4b565c">${inline(block.text)}</p>`;
     case 'action':
       return actionHtml(block.label, block.url);
+    case 'link':
+      return `<p class="fine" style="margin:0 0 12px;font-size:14px;line-height:20px;color:#4b565c"><a class="address" href="${escapeHtml(cleanUrl(block.url))}" style="color:#202c82">${escapeHtml(cleanLine(block.label))}</a></p>`;
     case 'code':
       return `<p class="code" style="margin:0 0 16px;padding:12px 16px;background:#f6ecd6;border:1px solid #8a6112;color:#1a2024;${MONO};font-size:20px;word-break:break-all">${inline(block.text)}</p>`;
     case 'list':

@@ -33,6 +33,7 @@ function blockText(block: MailBlock): string {
     case 'small':
       return wrap(block.text);
     case 'action':
+    case 'link':
       // The address has a line to itself, so that no program cuts it or takes a full stop into it.
       return `${wrap(`${block.label}:`)}\n${cleanUrl(block.url)}`;
     case 'code':

@@ -31,6 +31,8 @@ export type Mailer = {
    * @throws RangeError for a header, Message-ID or link that cannot be written
    */
   send(outgoing: Outgoing): Promise<void>;
+  /** Whether it is being shut down and sends no more. */
+  readonly closed: boolean;
   /** Lets what is being sent finish, then closes the connections. */
   close(): Promise<void>;
 };
@@ -117,6 +119,9 @@ export function openMailer(settings: MailSettings, log: Logger, limits = MAIL_LI
   }
 
   return {
+    get closed() {
+      return closed;
+    },
     send(outgoing) {
       const sending = deliver(outgoing);
       underway.add(sending);

@@ -1,5 +1,6 @@
 import { type Page, type Response } from '@playwright/test';
 import { filesBelow } from '../architecture/import-graph.ts';
+import { paths } from '../../../src/paths.ts';
 import { PASSWORD, type TestPerson } from '../people.ts';
 import { enterPassword } from './steps.ts';
 import { type World } from './world.ts';
@@ -46,6 +47,11 @@ async function askForLink(page: Page): Promise<void> {
   await page.getByRole('button', { name: 'Mail me a link' }).click();
 }
 
+async function sendHalfAnAddress(page: Page): Promise<void> {
+  await page.getByLabel('E-mail address').fill('jo@example');
+  await page.getByRole('button', { name: 'Mail me the next episode' }).click();
+}
+
 /** Every page, in every state that looks different. */
 export const PAGES: readonly PageState[] = [
   { route: 'index', at: () => '/' },
@@ -61,6 +67,26 @@ export const PAGES: readonly PageState[] = [
   {
     route: 'w/[workshop]/[build]/episodes/[number]/print',
     at: (world) => `/w/${world.owner.workshop}/${world.build}/episodes/1/print`,
+  },
+  { route: 'w/[workshop]/subscribe', at: (world) => `/w/${world.owner.workshop}/subscribe` },
+  {
+    route: 'w/[workshop]/subscribe',
+    state: 'sent back',
+    at: (world) => `/w/${world.owner.workshop}/subscribe`,
+    then: sendHalfAnAddress,
+  },
+  {
+    route: 'w/[workshop]/[build]/subscribe',
+    at: (world) => `/w/${world.owner.workshop}/${world.build}/subscribe`,
+  },
+  { route: 'subscriptions/asked', at: () => '/subscriptions/asked' },
+  {
+    route: 'subscriptions/[subscriber]/confirm',
+    at: ({ subscriber }) => paths.confirmSubscription(subscriber.id, subscriber.confirm),
+  },
+  {
+    route: 'subscriptions/[subscriber]/leave',
+    at: ({ subscriber }) => paths.leave(subscriber.id, subscriber.leave),
   },
   { route: 'sign-up/index', at: () => '/sign-up' },
   { route: 'sign-up/index', state: 'sent back', at: () => '/sign-up', then: sendNamelessSignUp },
@@ -106,6 +132,7 @@ export const PAGES: readonly PageState[] = [
   { route: 'bench/[workshop]/team', state: 'for an editor', as: editor, at: bench('/team') },
   { route: 'bench/[workshop]/settings', as: owner, at: bench('/settings') },
   { route: 'bench/[workshop]/storage', as: owner, at: bench('/storage') },
+  { route: 'bench/[workshop]/subscribers', as: owner, at: bench('/subscribers') },
   { route: 'bench/[workshop]/[build]/footage', as: editor, at: inBuild(() => '/footage') },
   {
     route: 'bench/[workshop]/[build]/episodes/[episode]/preview',
@@ -135,6 +162,17 @@ export const PAGES: readonly PageState[] = [
     route: 'bench/[workshop]/[build]/episodes/[episode]/publish',
     as: owner,
     at: inBuild(({ episode }) => `/episodes/${episode}/publish`),
+  },
+  {
+    route: 'bench/[workshop]/[build]/episodes/[episode]/announcement',
+    as: owner,
+    at: inBuild(({ published }) => `/episodes/${published}/announcement`),
+  },
+  {
+    route: 'bench/[workshop]/[build]/episodes/[episode]/announcement',
+    state: 'refused',
+    as: editor,
+    at: inBuild(({ episode }) => `/episodes/${episode}/announcement`),
   },
 ];
 

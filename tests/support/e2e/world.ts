@@ -2,7 +2,11 @@ import { changeBuild } from '../../../src/features/builds/server/change-build.ts
 import { makeBuild } from '../../../src/features/builds/server/make-build.ts';
 import { bringInEpisodes } from '../../../src/features/episodes/server/bring-in-episodes.ts';
 import { makeEpisode } from '../../../src/features/episodes/server/make-episode.ts';
+import { getDesk } from '../../../src/features/episodes/server/get-desk.ts';
+import { publishEdition } from '../../../src/features/episodes/server/publish-edition.ts';
+import { setVideo } from '../../../src/features/episodes/server/set-video.ts';
 import { addPart } from '../../../src/features/parts/server/add-part.ts';
+import { addSubscribers, tokensOf } from '../audience.ts';
 import { inWorkshop, type TestPerson } from '../people.ts';
 import { type Owner, type Product } from './product.ts';
 
@@ -18,6 +22,10 @@ export interface World {
   readonly part: string;
   /** A draft. */
   readonly episode: string;
+  /** One on show, with its video elsewhere. */
+  readonly published: string;
+  /** Someone who asked to be mailed, and the tokens of their links. */
+  readonly subscriber: { readonly id: string; readonly confirm: string; readonly leave: string };
 }
 
 const PART = {
@@ -54,8 +62,25 @@ export async function makeWorld(product: Product): Promise<World> {
   await bringInEpisodes(context, { build, episodes: [EPISODE] });
   const { id: part } = await addPart(context, { ...PART, build });
   const { id: episode } = await makeEpisode(context, { build, title: 'The drum and its shaft' });
+  const { id: published } = await makeEpisode(context, { build, title: 'The mill drum, turned true' });
+  const ref = { build, episode: published };
+  await setVideo(context, {
+    ...ref,
+    fileId: null,
+    address: 'https://video.example/watch/drum',
+    length: '10:00',
+  });
+  await publishEdition(context, { ...ref, version: (await getDesk(context, ref)).episode.version });
+  const [subscriber = ''] = await addSubscribers(
+    product.services,
+    { workshopId: context.workshop.id },
+    owner.workshop,
+    3,
+  );
   return {
     owner,
+    published,
+    subscriber: { id: subscriber, ...tokensOf(product.services, subscriber) },
     editor,
     viewer: await product.person('Ida Kemp'),
     invited,

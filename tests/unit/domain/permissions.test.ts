@@ -26,6 +26,7 @@ const TABLE: readonly (readonly [Permission, string])[] = [
   ['episode.publish', 'o'],
   ['episode.ask-to-publish', 'oe'],
   ['announcement.send', 'o'],
+  ['announcement.ask-to-send', 'oe'],
   ['plans.release', 'o'],
   ['address.see', 'o'],
   ['question.sort', 'oem'],
@@ -72,11 +73,17 @@ describe('who may do what', () => {
     }
   });
 
-  test('an account’s own things need someone signed in; entering, invitations and media to look at do not', () => {
+  test('an account’s own things need someone signed in; entering, mailed links, media to look at and reports of bounces do not', () => {
     const forAnyone = Object.keys(ACCOUNT_PERMISSIONS).filter((permission) =>
       may('anyone', permission as Permission),
     );
-    expect(forAnyone).toEqual(['account.enter', 'invitation.read', 'media.ask']);
+    expect(forAnyone).toEqual([
+      'account.enter',
+      'invitation.read',
+      'media.ask',
+      'mailed-link.follow',
+      'bounce.report',
+    ]);
     for (const permission of Object.keys(ACCOUNT_PERMISSIONS) as Permission[]) {
       expect(may('viewer', permission)).toBe(true);
       expect(isWorkshopPermission(permission)).toBe(false);

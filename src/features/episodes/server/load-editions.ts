@@ -17,6 +17,7 @@ export async function findShownEdition(db: Database, episodeId: string) {
     id: edition.id,
     number: edition.number,
     publishedAt: edition.publishedAt,
+    backCatalogue: edition.backCatalogue,
     video: presentVideo(video),
     captions: row.captions,
   };

@@ -1,0 +1,19 @@
+import {
+  AnnouncementVersionInput,
+  episodeParams,
+  MadeAnnouncement,
+} from '../../../../../../../../../features/audience/audience.ts';
+import { resumeAnnouncement } from '../../../../../../../../../features/audience/server/resume-announcement.ts';
+import { paths } from '../../../../../../../../../paths.ts';
+import { apiRoute } from '../../../../../../../../../server/http/api-route.ts';
+
+export const POST = apiRoute({
+  verb: resumeAnnouncement,
+  params: episodeParams,
+  body: AnnouncementVersionInput,
+  answer: MadeAnnouncement,
+  form: {
+    page: ({ workshop, build, episode }) => paths.announcement(workshop, build, episode),
+    done: (_result, { workshop, build, episode }) => paths.announcement(workshop, build, episode),
+  },
+});
