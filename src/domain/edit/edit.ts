@@ -44,6 +44,8 @@ export interface EditWarning {
 export interface Edit {
   readonly title: string;
   readonly rate: Rate;
+  /** Whether the list says that its labels drop, however they are written. */
+  readonly drop: boolean;
   /** Where the last event ends, in frames of the episode. */
   readonly frames: Fraction;
   /** What is seen, in order, no two at one time: a higher track hides those below it. */
@@ -92,7 +94,7 @@ export function trimSegment(segment: Segment, from: Fraction, to: Fraction, rate
   const head = from.sub(record.in).mul(step.abs());
   const tail = record.out.sub(to).mul(step.abs());
   // What is left keeps the list's own source where it is not cut, however the speed was rounded.
-  const [first, last] = speed.s < 0n ? [tail, head] : [head, tail];
+  const [first, last] = speed.compare(0) < 0 ? [tail, head] : [head, tail];
   const out = source.out.sub(last);
   return {
     ...segment,

@@ -76,7 +76,7 @@ export function readRange(owner: OtioObject, field: string): OtioRange | null {
   if (range === null || range === undefined) return null;
   if (!isObject(range)) throw new OtioFault(`${sayObject(owner)} has a range that is none.`);
   const duration = readTime(range['duration'], owner);
-  if (duration.seconds.s < 0n) throw new OtioFault(`${sayObject(owner)} is shorter than nothing.`);
+  if (duration.seconds.compare(0) < 0) throw new OtioFault(`${sayObject(owner)} is shorter than nothing.`);
   return { start: readTime(range['start_time'], owner), duration };
 }
 
@@ -85,7 +85,7 @@ export function readOffset(transition: OtioObject, field: 'in_offset' | 'out_off
   const offset = transition[field];
   if (offset === null || offset === undefined) return new Fraction(0);
   const { seconds } = readTime(offset, transition);
-  return seconds.s < 0n ? new Fraction(0) : seconds;
+  return seconds.compare(0) < 0 ? new Fraction(0) : seconds;
 }
 
 /** The media that a clip shows: of Clip.2 the active one, of Clip.1 the only one. */

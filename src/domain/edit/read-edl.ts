@@ -150,10 +150,10 @@ function speedOf(timed: Timed, room: Fraction | null, { rate, warn }: Reading): 
     const [own, list] = [fps.div(clipFrames), fps.div(rateOf(rate))];
     const miss = (speed: Fraction) => inRecord.mul(speed.abs()).sub(inSource).abs();
     const speed = sameRate(clipRate, rate) || miss(own).compare(miss(list)) < 0 ? own : list;
-    if (speed.s < 0n) warn(event.speed.line, `Event ${event.number} plays backwards.`);
+    if (speed.compare(0) < 0) warn(event.speed.line, `Event ${event.number} plays backwards.`);
     // The speed is written to a tenth of a frame, and both ends are rounded to frames.
     const doubt = inRecord.div(20).add(new Fraction(ROUNDING).mul(speed.abs().add(1)));
-    if (speed.s !== 0n && miss(speed).mul(clipFrames).compare(doubt) > 0)
+    if (speed.compare(0) !== 0 && miss(speed).mul(clipFrames).compare(doubt) > 0)
       warn(
         event.speed.line,
         `The speed of event ${event.number} does not fit its lengths; it is taken as written.`,
@@ -308,7 +308,7 @@ const trackNumber = (track: string | null) => Number(track?.slice(1) ?? 0);
 /** Pictures from the lowest track up; on one track a later line records over an earlier one. */
 function layPictures(laid: readonly Laid[], { rate, warn }: Reading): Segment[] {
   const pictures = laid
-    .filter(({ track, layer }) => track !== null && lengthOf(layer.record).s > 0n)
+    .filter(({ track, layer }) => track !== null && lengthOf(layer.record).compare(0) > 0)
     .sort((a, b) => trackNumber(a.track) - trackNumber(b.track) || a.line - b.line);
   const order = [...pictures].sort(
     (a, b) => trackNumber(a.track) - trackNumber(b.track) || a.layer.record.in.compare(b.layer.record.in),
@@ -407,6 +407,7 @@ export function readEdl(text: string, { rate, clipRates = new Map() }: ReadEditO
   return right({
     title: found.title,
     rate,
+    drop: found.events.some(({ drop }) => drop === true),
     frames: end.sub(zero),
     picture: all(layPictures(laid, reading)),
     sound: all(laid.flatMap(({ sound }) => sound)),

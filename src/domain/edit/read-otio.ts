@@ -75,7 +75,7 @@ function changeAll(shown: Shown, length: Fraction, change: Change, move: (at: Fr
   });
   const markers = shown.markers
     .map((marker) => ({ ...marker, record: move(marker.record) }))
-    .filter(({ record }) => record.s >= 0n && record.compare(length) <= 0);
+    .filter(({ record }) => record.compare(0) >= 0 && record.compare(length) <= 0);
   return { length, layers, sound: all(shown.sound), dissolved: all(shown.dissolved), markers };
 }
 
@@ -117,7 +117,7 @@ function playAt(shown: Shown, speed: Fraction, length: Fraction): Shown {
   const change: Change = (segment) => {
     const end = move(segment.record.out);
     const short = length.sub(end);
-    const out = short.s > 0n && short.compare(ONE) < 0 ? length : end;
+    const out = short.compare(0) > 0 && short.compare(ONE) < 0 ? length : end;
     return { ...segment, speed: segment.speed.mul(speed), record: { in: move(segment.record.in), out } };
   };
   return changeAll(shown, length, change, move);
@@ -157,9 +157,9 @@ function readMarkers(item: OtioObject, range: OtioRange, speed: Fraction, { rate
     const marked = readRange(marker, 'marked_range');
     if (marked === null) return [];
     const since = marked.start.seconds.sub(range.start.seconds);
-    const record = (speed.s > 0n ? since.div(speed) : since).mul(rateOf(rate));
+    const record = (speed.compare(0) > 0 ? since.div(speed) : since).mul(rateOf(rate));
     const colour = isObject(marker['color']) ? nameOf(marker['color']) : marker['color'];
-    if (since.s >= 0n && record.compare(range.duration.seconds.mul(rateOf(rate))) <= 0)
+    if (since.compare(0) >= 0 && record.compare(range.duration.seconds.mul(rateOf(rate))) <= 0)
       return [{ record, name: nameOf(marker), colour: typeof colour === 'string' ? colour : null }];
     warn(`A mark of ${sayObject(item)} lies outside of what is used of it and is left out.`);
     return [];
@@ -196,7 +196,7 @@ function readClip(clip: OtioObject, place: Place, reading: Reading): Shown {
   if (media !== null && schemaOf(media) === 'GeneratorReference')
     return { ...NOTHING, length, layers: [{ record, segment: null }] };
   const speed = speedOf(clip, reading);
-  if (speed.s < 0n) reading.warn(`${sayObject(clip)} plays backwards.`);
+  if (speed.compare(0) < 0) reading.warn(`${sayObject(clip)} plays backwards.`);
   const names = namesOf(clip);
   const clipRate = findByClipName(reading.clipRates, names) ?? range.start.rate;
   const start = range.start.seconds.mul(rateOf(clipRate));
@@ -224,14 +224,14 @@ function useOf(item: OtioObject, whole: Shown, reading: Reading): Shown {
   const length = range === null ? whole.length : range.duration.seconds.mul(frames);
   const marks = readMarkers(item, range ?? wholeRange(length, reading.rate), speed, reading);
   const withMarks = (shown: Shown): Shown => ({ ...shown, markers: [...shown.markers, ...marks] });
-  const beside = from.compare(whole.length) >= 0 || from.add(length).s <= 0n;
-  if (range !== null && beside && length.s > 0n && whole.length.s > 0n) {
+  const beside = from.compare(whole.length) >= 0 || from.add(length).compare(0) <= 0;
+  if (range !== null && beside && length.compare(0) > 0 && whole.length.compare(0) > 0) {
     reading.warn(`The range of ${sayObject(item)} lies outside of all it holds; the whole of it is taken.`);
     return withMarks(whole);
   }
   if (speed.equals(0))
     return withMarks(hold(cutOut(whole, from, length, reading.rate), length, reading.rate));
-  if (speed.s < 0n)
+  if (speed.compare(0) < 0)
     reading.warn(`${sayObject(item)} plays several clips backwards; they are taken forwards.`);
   const content = cutOut(whole, from, length.mul(speed.abs()), reading.rate);
   return withMarks(speed.equals(1) ? content : playAt(content, speed.abs(), length));
@@ -263,23 +263,23 @@ function dissolve(
   const [last, first] = [only(before), only(after)];
   const stays = readOffset(transition, 'out_offset').mul(frames);
   const early = readOffset(transition, 'in_offset').mul(frames);
-  if (last !== null && stays.s > 0n) {
+  if (last !== null && stays.compare(0) > 0) {
     const step = framesPerFrame(last, rate);
-    const edge = step.s < 0n ? last.source.in : last.source.out;
+    const edge = step.compare(0) < 0 ? last.source.in : last.source.out;
     const end = edge.add(stays.mul(step));
     parts.push({
       ...last,
-      source: step.s < 0n ? { in: end, out: edge } : { in: edge, out: end },
+      source: step.compare(0) < 0 ? { in: end, out: edge } : { in: edge, out: end },
       record: { in: cut, out: cut.add(stays) },
     });
   }
-  if (first !== null && early.s > 0n) {
+  if (first !== null && early.compare(0) > 0) {
     const step = framesPerFrame(first, rate);
-    const edge = step.s < 0n ? first.source.out : first.source.in;
+    const edge = step.compare(0) < 0 ? first.source.out : first.source.in;
     const start = edge.sub(early.mul(step));
     parts.push({
       ...first,
-      source: step.s < 0n ? { in: edge, out: start } : { in: start, out: edge },
+      source: step.compare(0) < 0 ? { in: edge, out: start } : { in: start, out: edge },
       record: { in: cut.sub(early), out: cut },
     });
   }
@@ -451,6 +451,7 @@ export function readOtio(
     return right({
       title: nameOf(timeline),
       rate,
+      drop: false,
       frames: shown.length,
       picture: seen,
       sound: inRecordOrder(shown.sound),
