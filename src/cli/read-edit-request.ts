@@ -16,7 +16,8 @@ export const editFields = {
 };
 type Asked = z.output<z.ZodObject<typeof editFields>>;
 
-function readClipRates(asked: Asked['clip-fps']): Answer<ReadonlyMap<string, Rate>> {
+/** The rates of clips that a request gives, by name. */
+export function readClipRates(asked: Asked['clip-fps']): Answer<ReadonlyMap<string, Rate>> {
   const rates = new Map<string, Rate>();
   const written: (readonly [string, string])[] = [];
   if (typeof asked === 'object' && !Array.isArray(asked)) written.push(...Object.entries(asked));

@@ -4,6 +4,7 @@ import { chaptersTool } from './chapters.ts';
 import { editTool } from './edit.ts';
 import { fitTool, seatsTool } from './fit.ts';
 import { lengthTool } from './length.ts';
+import { placeTool } from './place.ts';
 import { sectionsTool } from './sections.ts';
 import { timecodeTool } from './timecode.ts';
 
@@ -13,6 +14,7 @@ export const TOOLS: ReadonlyMap<string, Tool> = new Map([
   ['edit', editTool],
   ['fit', fitTool],
   ['length', lengthTool],
+  ['place', placeTool],
   ['seats', seatsTool],
   ['sections', sectionsTool],
   ['timecode', timecodeTool],

@@ -12,6 +12,10 @@ const FILES: Readonly<Record<string, string>> = {
   'list.edl':
     '001 AX V C 00:00:31:05 00:00:33:05 01:00:00:00 01:00:02:00\n* FROM CLIP NAME: C0043\n' +
     '002 C0044 V C 00:00:00:00 00:00:01:23 01:00:02:00 01:00:03:00\nM2 C0044 047.6 00:00:00:00\n',
+  'notes.csv': 'id,clip,time\nn1,C0043,00:00:32:05\nn2,C0044.MP4,0.4\nn3,C0043,34\nn4,C0045,1\n',
+  'bare.csv': 'n1,C0043,31.2\n',
+  'bad.csv': 'id,clip,time\nn1,C0043,00:00:31:25\n',
+  'few.csv': 'id,time\nn1,1\n',
   'sound.edl': '1 C0043 V C 0 50 0 50\n2 C0044 A C 0 25 25 50\n',
 };
 const read = (path: string) => {
@@ -114,6 +118,52 @@ describe('edit', () => {
   });
 });
 
+describe('place', () => {
+  const place = (list: string) => run('place', '--edit', 'list.edl', '--fps', '25', list);
+
+  it('prints where notes come in the episode, in seconds', () => {
+    const notes = [
+      { id: 'n1', status: 'placed', at: [1] },
+      { id: 'n2', status: 'placed', at: [2 + 0.4 / 1.904] }, // 47.6 / 25 of its speed
+      { id: 'n3', status: 'snapped', at: [1.96] },
+      { id: 'n4', status: 'lost', at: [] },
+    ];
+    expect(place('notes.csv')).toEqual({ ok: true, value: `${JSON.stringify({ notes })}\n` });
+  });
+
+  it('needs no names over the columns', () => {
+    expect(place('bare.csv')).toMatchObject({
+      value: '{"notes":[{"id":"n1","status":"placed","at":[0]}]}\n',
+    });
+  });
+
+  it('takes rows in a batch, and labels at the clip’s own rate', () => {
+    const notes = [
+      { id: 7, clip: 'C0043', time: '00:00:31:10' },
+      { id: 'b', clip: 'C0044', time: 0 },
+    ];
+    const request = { tool: 'place', edl: FILES['list.edl'], fps: 25, 'clip-fps': 'C0043=50', notes };
+    expect(ask(request)).toEqual({
+      ok: true,
+      value: {
+        notes: [
+          { id: 7, status: 'placed', at: [0.1] },
+          { id: 'b', status: 'placed', at: [2] },
+        ],
+      },
+    });
+  });
+
+  it('reads the labels of a list that drops as it does', () => {
+    const edl = 'FCM: DROP FRAME\n1 C0043 V C 00:00:59:29 00:01:00:04 00:00:00:00 00:00:00:03';
+    const notes = [{ id: 1, clip: 'C0043', time: '00:01:00:02' }];
+    // OpenTimelineIO, tests/test_opentime.py: 00:01:00;02 is the frame after 00:00:59;29.
+    expect(ask({ tool: 'place', edl, fps: '30000/1001', notes })).toMatchObject({
+      value: { notes: [{ at: [1001 / 30000] }] },
+    });
+  });
+});
+
 describe('chapters', () => {
   const at = (form: string, path = 'chapters.csv') => run('chapters', '--to', form, '--length', '848', path);
 
@@ -174,6 +224,11 @@ describe('Wrong input', () => {
     [['edit', '--fps', '25', '--clip-fps', 'C0043', 'list.edl'], 'NAME=RATE'],
     [['edit', '--fps', '25', '--clip-fps', 'C0043=fast', 'list.edl'], 'no frame rate'],
     [['edit', '--fps', '25', 'two.csv'], 'no event in this list'],
+    [['place', '--fps', '25', 'notes.csv'], 'Say which edit'],
+    [['place', '--edit', 'list.edl', '--fps', '25'], 'Give one list of notes'],
+    [['place', '--edit', 'list.edl', '--fps', '25', 'bad.csv'], 'Line 2: 00:00:31:25 has frames beyond 24'],
+    [['place', '--edit', 'list.edl', '--fps', '25', 'few.csv'], 'needs the columns id, clip and time'],
+    [['place', '--edit', 'two.csv', '--fps', '25', 'notes.csv'], 'no event in this list'],
     [['chapters', '--to', 'text'], 'Give one list'],
     [['chapters', '--to', 'opera', 'chapters.csv'], 'Choose a form'],
     [['chapters', '--to', 'vtt', 'chapters.csv'], 'Give the length'],
@@ -198,6 +253,15 @@ describe('Wrong input', () => {
     ['{"tool":"timecode","rate":25,"frame":1,"timecode":"00:00:00:01"}', 'either a frame or a timecode'],
     ['{"tool":"timecode","rate":25,"frame":-1}', 'not below zero'],
     ['{"tool":"chapters","to":"json","chapters":7}', 'Give the chapters'],
+    ['{"tool":"place","fps":25,"edl":"1 A V C 0 5 0 5"}', 'Give the notes as a list'],
+    [
+      '{"tool":"place","fps":25,"edl":"1 A V C 0 5 0 5","notes":[{"id":1,"clip":"A","time":-1}]}',
+      'Note 1: -1 is no time',
+    ],
+    [
+      '{"tool":"place","fps":25,"edl":"1 A V C 0 5 0 5","notes":[{"id":1,"clip":"","time":1}]}',
+      'has no clip',
+    ],
     ['{"tool":"edit","fps":25}', 'one edit list or one timeline'],
     ['{"tool":"edit","fps":25,"otio":"{\\"OTIO_SCHEMA\\":"}', 'Line 1: the timeline is no JSON'],
     ['{"tool":"edit","edl":7}', 'An edit list is text'],
