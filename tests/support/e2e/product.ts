@@ -28,16 +28,16 @@ export interface Product {
   join(owner: Owner, person: TestPerson, role: InvitedRole): Promise<void>;
 }
 
-/** Opens the shared copy's database for one test process. */
-export async function openProduct(): Promise<Product> {
-  const settings = readServiceSettings();
+/** Opens a copy's database for one test process: the one that all specs share, or that of these settings. */
+export async function openProduct(source: Readonly<Record<string, string | undefined>> = process.env) {
+  const settings = readServiceSettings(source);
   const services = await openServices({
     settings,
     log: pino({ level: 'silent' }),
     accountMails: accountMails(settings.PUBLIC_URL),
     worker: false,
   });
-  return {
+  const product: Product = {
     services,
     cookiesOf: ({ headers }) => [
       ...(headers.get('cookie') ?? '').split('; '),
@@ -58,6 +58,7 @@ export async function openProduct(): Promise<Product> {
     },
     join: (owner, person, role) => joinTeam(services, { owner, slug: owner.workshop }, person, role),
   };
+  return product;
 }
 
 function newSlug(name: string): string {
