@@ -136,7 +136,8 @@ test.each(takers)('%s says at its field what was wrong, and never breaks', async
       expect(answer.status, `${name}: ${sent}, answered ${JSON.stringify(answer.json)}`).toBeLessThan(500);
       const what = seen(answer);
       // An address cannot hold half a character.
-      if (writes && UNKEPT.includes(sent)) expect(what, sent).toContain('a character in it that cannot be kept');
+      if (writes && UNKEPT.includes(sent))
+        expect(what, sent).toContain('a character in it that cannot be kept');
       else outcomes.set(sent, what);
     }
     note(`${door} · ${name}`, outcomes);

@@ -6,6 +6,7 @@ import { afterAll, beforeAll, expect, test, vi } from 'vitest';
 import { findFreePort } from '../../../scripts/ports.ts';
 import { changeSettings } from '../../../src/features/workshops/server/change-settings.ts';
 import { getSettings } from '../../../src/features/workshops/server/get-settings.ts';
+import { ChangeSettingsInput } from '../../../src/features/workshops/workshop.ts';
 import { paths } from '../../../src/paths.ts';
 import { newAddress, openProduct, type Owner, type Product } from '../../support/e2e/product.ts';
 import { outboxAt } from '../../support/outbox.ts';
@@ -69,7 +70,7 @@ test('a change is seen within a second at both web servers, which had kept the p
   for (const html of await both()) expect(html).toContain('Two of each');
   for (const name of ['Two of everything', 'Two and no more']) {
     const context = await contextFor(product.services, owner, owner.workshop);
-    await changeSettings(context, { ...(await getSettings(context, {})), name });
+    await changeSettings(context, ChangeSettingsInput.parse({ ...(await getSettings(context, {})), name }));
     await vi.waitUntil(() => named(name), { timeout: 1_000, interval: 50 });
   }
 });
