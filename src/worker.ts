@@ -1,4 +1,5 @@
 import { audienceJobs } from './features/audience/jobs.ts';
+import { eraseDeletedJob } from './features/episodes/jobs.ts';
 import { fileJobs } from './features/files/jobs.ts';
 import { sendInvitationJob } from './features/workshops/jobs.ts';
 import { liveUntilStopped, startProcess } from './process-life.ts';
@@ -7,7 +8,7 @@ import { readServiceSettings } from './server/env.ts';
 import { type JobDefinition, workQueue } from './server/jobs/queue.ts';
 
 /** Every job there is. */
-const JOBS: readonly JobDefinition[] = [sendInvitationJob, ...fileJobs, ...audienceJobs];
+const JOBS: readonly JobDefinition[] = [sendInvitationJob, ...fileJobs, eraseDeletedJob, ...audienceJobs];
 
 await startProcess(async () => {
   const services = await openProcessServices(readServiceSettings(), 'worker');

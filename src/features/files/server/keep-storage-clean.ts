@@ -1,9 +1,10 @@
-import { and, eq, isNotNull, isNull, lt } from 'drizzle-orm';
+import { and, eq, isNull, lt } from 'drizzle-orm';
 import { files } from '../../../db/schema/files.ts';
 import { type JobHandler } from '../../../server/jobs/queue.ts';
 import { type Services } from '../../../server/services.ts';
-import { INCOMING, incomingKey, keyOf } from '../../../server/storage/storage.ts';
+import { INCOMING, incomingKey } from '../../../server/storage/storage.ts';
 import { DELETED_DAYS, UNFINISHED_DAYS } from '../file.ts';
+import { eraseDeletedFiles } from './erase-deleted-files.ts';
 
 const HOUR_MS = 3_600_000;
 const DAY_MS = 24 * HOUR_MS;
@@ -17,7 +18,7 @@ const FORGOTTEN_MS = HOUR_MS;
 export const keepStorageClean: JobHandler = async (services) => {
   const now = Date.now();
   await giveUpUploads(services, new Date(now - UNFINISHED_DAYS * DAY_MS));
-  await eraseDeleted(services, new Date(now - DELETED_DAYS * DAY_MS));
+  await eraseDeletedFiles(services, new Date(now - DELETED_DAYS * DAY_MS));
   await checkForgotten(services, new Date(now - FORGOTTEN_MS));
 };
 
@@ -32,24 +33,6 @@ async function giveUpUploads({ db, storage }: Services, before: Date): Promise<v
   // Begun for a request that failed afterwards, or given up by a worker that was killed here.
   for (const { key, uploadId, begun } of await storage.uploads.listUnfinished(INCOMING)) {
     if (begun < before) await storage.uploads.abort(key, uploadId);
-  }
-}
-
-async function eraseDeleted({ db, storage, log }: Services, before: Date): Promise<void> {
-  const old = await db
-    .select({ id: files.id, workshopId: files.workshopId })
-    .from(files)
-    .where(and(isNotNull(files.deletedAt), lt(files.deletedAt, before)));
-  for (const { id, workshopId } of old) {
-    try {
-      // The row first: what still refers to it keeps it, objects and all.
-      await db.delete(files).where(eq(files.id, id));
-    } catch {
-      log.info({ fileId: id }, 'A deleted file is still referred to and stays.');
-      continue;
-    }
-    await storage.removeAll(keyOf(workshopId, id, ''));
-    await storage.remove(incomingKey(workshopId, id));
   }
 }
 
