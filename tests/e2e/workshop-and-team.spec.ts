@@ -72,7 +72,7 @@ test('a maker signs up, opens a workshop, takes on an editor and changes their r
   const second = await (await openBrowser()).newPage();
   await second.goto('/account');
   await enterPassword(second, owner.email);
-  await second.getByLabel('Code', { exact: true }).fill(codeOf(key));
+  await second.getByLabel('Code', { exact: true }).fill(codeOf(key, 1));
   await second.getByRole('button', { name: 'Sign in', exact: true }).click();
   await expect(second.getByRole('heading', { name: owner.name })).toBeVisible();
   await page.goto('/account');

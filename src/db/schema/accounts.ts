@@ -91,6 +91,15 @@ export const secondFactors = pgTable(
   ],
 );
 
+/** The newest time step whose code an account has used: by RFC 6238 a code is taken once. Ours, not better-auth's. */
+export const usedCodes = pgTable('used_codes', {
+  accountId: uuid('account_id')
+    .primaryKey()
+    .references(() => accounts.id, { onDelete: 'cascade' }),
+  /** Of 30 seconds since 1970. */
+  step: bigint('step', { mode: 'number' }).notNull(),
+});
+
 /** Counters of rate-limiter-flexible; `expire` is milliseconds since 1970. */
 export const rateLimits = pgTable('rate_limits', {
   key: text('key').primaryKey(),

@@ -87,6 +87,40 @@ describe('the second step', () => {
     expect(context.actor).toMatchObject({ kind: 'account', email, secondFactor: true });
   });
 
+  test('takes a code once, and none older than it', async () => {
+    const { email, key } = await aPerson(services, { secondFactor: true });
+    const used = { fields: { code: expect.stringContaining('used already') as string } };
+    const code = appCode(key!);
+    expect((await step(email, 'code', code)).actor.kind).toBe('account');
+    const context = await atSecondStep(email);
+    const again = (given: string) => verifySecondStep(context, { kind: 'code', code: given });
+    await expect(again(code)).rejects.toMatchObject(used);
+    await expect(again(appCode(key!, -1))).rejects.toMatchObject(used);
+    // Whoever was refused goes on with the next code, without the password again.
+    await again(appCode(key!, 1));
+    expect((await withCookiesOf(services, context)).actor.kind).toBe('account');
+  });
+
+  test('takes one of two at once with the same code', async () => {
+    const { email, key } = await aPerson(services, { secondFactor: true });
+    const code = appCode(key!);
+    const both = [await atSecondStep(email), await atSecondStep(email)];
+    const ends = await Promise.allSettled(
+      both.map((context) => verifySecondStep(context, { kind: 'code', code })),
+    );
+    expect(ends.map(({ status }) => status).sort()).toEqual(['fulfilled', 'rejected']);
+  });
+
+  test('does not take the code that turned it on', async () => {
+    const { person, context, started } = await setUp();
+    const code = appCode(started.secret);
+    await confirmSecondFactor(context, { code });
+    await expect(step(person.email, 'code', code)).rejects.toMatchObject({
+      fields: { code: expect.stringContaining('used already') as string },
+    });
+    expect((await step(person.email, 'code', appCode(started.secret, 1))).actor.kind).toBe('account');
+  });
+
   test('takes a recovery code once, whatever its case and spaces', async () => {
     const person = await aPerson(services, { secondFactor: true });
     const [first = '', second = ''] = person.recoveryCodes;

@@ -2,6 +2,7 @@ import { and, eq, inArray } from 'drizzle-orm';
 import { sessions } from '../../../db/schema/accounts.ts';
 import { callAuth } from '../../../server/auth/call-auth.ts';
 import { hintCookie } from '../../../server/auth/cookies.ts';
+import { useUpCode } from '../../../server/auth/used-codes.ts';
 import { verb } from '../../../server/verb.ts';
 import { DONE } from '../account.ts';
 
@@ -17,6 +18,7 @@ export const confirmSecondFactor = verb(
     const before = actor.secondFactor
       ? []
       : await db.select({ id: sessions.id }).from(sessions).where(ofActor);
+    await useUpCode(context, actor.id, code);
     await callAuth(context, (headers) =>
       services.auth.api.verifyTOTP({ body: { code }, headers, returnHeaders: true }),
     );
