@@ -1,29 +1,16 @@
 import { queryOptions } from '@tanstack/react-query';
 import { callApi } from '../../client/call-api.ts';
+import { callTagged, type Tagged } from '../../client/call-tagged.ts';
 import { paths } from '../../paths.ts';
-import {
-  type Appearance,
-  AppearanceAnswer,
-  AppearancesAnswer,
-  NoteAnswer,
-  type Note,
-  NotesAnswer,
-  RemovedAnswer,
-} from '../notes/note.ts';
-import { type Chapter, ChapterAnswer, ChaptersAnswer } from './episode.ts';
+import { AppearanceAnswer, NoteAnswer, type Note, RemovedAnswer } from '../notes/note.ts';
+import { DeskAnswer, type DeskLists } from './desk.ts';
+import { ChapterAnswer } from './episode.ts';
 
 /** Which episode's desk: the address names of its workshop and build, and its id. */
 export interface DeskOf {
   readonly workshop: string;
   readonly build: string;
   readonly episode: string;
-}
-
-/** What the server holds of an episode's desk. */
-export interface DeskLists {
-  readonly notes: readonly Note[];
-  readonly chapters: readonly Chapter[];
-  readonly appearances: readonly Appearance[];
 }
 
 /** How often an open desk looks for what others have written. */
@@ -33,21 +20,18 @@ function api({ workshop, build, episode }: DeskOf, rest: string): string {
   return paths.api.inBuild(workshop, build, `episodes/${episode}/${rest}`);
 }
 
-/** What the server holds of an episode's desk: notes, chapters, and parts put on the bench by hand. */
+let last: { readonly path: string; readonly tagged: Tagged; readonly lists: DeskLists } | undefined;
+
+/** What the server holds of an episode's desk; asked again every five seconds, and sent only when it has changed. */
 export function deskQuery(of: DeskOf) {
+  const path = api(of, 'desk');
   return queryOptions({
     queryKey: ['desk', of.workshop, of.build, of.episode],
     queryFn: async (): Promise<DeskLists> => {
-      const [notes, chapters, appearances] = await Promise.all([
-        callApi(api(of, 'notes')),
-        callApi(api(of, 'chapters')),
-        callApi(api(of, 'appearances')),
-      ]);
-      return {
-        notes: NotesAnswer.parse(notes).items,
-        chapters: ChaptersAnswer.parse(chapters).items,
-        appearances: AppearancesAnswer.parse(appearances).items,
-      };
+      const known = last?.path === path ? last : undefined;
+      const tagged = await callTagged(path, known?.tagged);
+      if (tagged !== known?.tagged) last = { path, tagged, lists: DeskAnswer.parse(tagged.answer) };
+      return last?.lists ?? DeskAnswer.parse(tagged.answer);
     },
     refetchInterval: LOOK_MS,
   });

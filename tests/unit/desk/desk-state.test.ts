@@ -15,6 +15,7 @@ import {
   isStored,
   markOf,
   noteConflict,
+  noteGone,
   noteRefused,
   noteSaved,
   pendingOps,
@@ -45,7 +46,7 @@ function aNote(given: Partial<Note> = {}): Note {
   };
 }
 
-const lists = (...notes: Note[]) => ({ notes, chapters: [], appearances: [] });
+const lists = (...notes: Note[]) => ({ notes, chapters: [], appearances: [], checks: [] });
 const texts = (state: Parameters<typeof shown>[0]) => shown(state, 'note').map(({ form }) => form.text);
 const type = (state: Parameters<typeof shown>[0], text: string) =>
   editRow(state, ID, { text }, 'Change a note', `text ${ID}`);
@@ -110,6 +111,23 @@ describe('saving', () => {
     expect(pendingOps(state)).toMatchObject([{ do: 'change', version: 2 }]);
   });
 
+  test('leaves the space after a word where it was typed, though the server takes it off', () => {
+    let state = type(startDesk(lists(aNote())), 'Turn ');
+    const [op] = pendingOps(state);
+    const stored = aNote({ version: 2, text: 'Turn' });
+    if (op) state = noteSaved(state, op, stored);
+    expect(pendingOps(state)).toEqual([]);
+    expect(texts(takeIn(state, lists(stored)))).toEqual(['Turn ']);
+    expect(texts(type(state, 'Turn it.'))).toEqual(['Turn it.']);
+  });
+
+  test('is done with a row that was to go and is not there any more', () => {
+    let state = deleteRow(startDesk(lists(aNote())), ID, 'Delete a note');
+    const [op] = pendingOps(state);
+    if (op) state = noteGone(state, op);
+    expect(state.rows.map(markOf)).toEqual(['saved']);
+  });
+
   test('keeps both texts when someone else saved, and sends mine on top of theirs', () => {
     let state = type(startDesk(lists(aNote())), 'Mine');
     const [op] = pendingOps(state);
@@ -167,5 +185,13 @@ describe('over a reload', () => {
     const again = putBack(startDesk(lists(aNote({ version: 2, text: 'Theirs' }))), unsavedRows(state));
     expect(again.rows[0]?.conflict?.form).toMatchObject({ text: 'Theirs' });
     expect(texts(again)).toEqual(['Mine']);
+  });
+
+  test('what was typed into a row that someone else deleted meanwhile is asked about, not lost', () => {
+    const state = type(startDesk(lists(aNote())), 'Mine');
+    const again = putBack(startDesk(lists()), unsavedRows(state));
+    expect(texts(again)).toEqual(['Mine']);
+    expect(pendingOps(again)).toMatchObject([{ do: 'change', version: 1 }]);
+    expect(texts(takeIn(again, lists()))).toEqual(['Mine']);
   });
 });

@@ -6,7 +6,8 @@ import { ChapterPanel } from './ChapterPanel.tsx';
 import { Composer, COMPOSER } from './Composer.tsx';
 import { isBegun } from './composer-draft.ts';
 import { type DeskData } from './desk-data.ts';
-import { isStored } from './desk-saving.ts';
+import { markOf } from './desk-saving.ts';
+import { type AnyRow } from './desk-rows.ts';
 import { redo, undo } from './desk-state.ts';
 import { DeskRule } from './DeskRule.tsx';
 import { KeysPanel } from './KeysPanel.tsx';
@@ -144,7 +145,6 @@ type DeskActionsProps = { readonly desk: Desk; readonly said: string; readonly o
 
 function DeskActions({ desk: { data, state, change, stalled }, said, onKeys }: DeskActionsProps) {
   const [back, on] = [state.done.at(-1), state.undone.at(-1)];
-  const open = state.rows.filter((row) => !isStored(row)).length;
   return (
     <div className="flex flex-wrap items-center gap-2">
       {data.mayChange && (
@@ -173,8 +173,14 @@ function DeskActions({ desk: { data, state, change, stalled }, said, onKeys }: D
         Keys
       </Button>
       <p role="status" className="ms-auto text-sm text-ink-soft">
-        {said} {data.mayChange && (open === 0 ? 'Everything is saved.' : stalled ? 'Not saved.' : 'Saving …')}
+        {said} {data.mayChange && saySaved(state.rows, stalled)}
       </p>
     </div>
   );
+}
+
+function saySaved(rows: readonly AnyRow[], stalled: boolean): string {
+  const marks = new Set(rows.map(markOf));
+  if (marks.has('waiting')) return stalled ? 'Not saved.' : 'Saving …';
+  return marks.has('open') || marks.has('conflict') ? 'Not everything is saved.' : 'Everything is saved.';
 }

@@ -1,7 +1,6 @@
 import { type EpisodeState } from '../../../../domain/episode-states.ts';
 import { type Rate } from '../../../../domain/time/rate.ts';
-import { type Appearance, type Note } from '../../../notes/note.ts';
-import { type Chapter } from '../../episode.ts';
+import { type DeskLists } from '../../desk.ts';
 
 /** A part as the desk offers it. */
 export interface DeskPart {
@@ -12,7 +11,7 @@ export interface DeskPart {
 }
 
 /** What the page of an episode's desk holds for its island, once. */
-export interface DeskData {
+export interface DeskData extends DeskLists {
   readonly workshop: string;
   readonly build: string;
   readonly episode: string;
@@ -27,9 +26,6 @@ export interface DeskData {
   readonly length: number | null;
   readonly parts: readonly DeskPart[];
   readonly team: readonly { readonly id: string; readonly name: string }[];
-  readonly notes: readonly Note[];
-  readonly chapters: readonly Chapter[];
-  readonly appearances: readonly Appearance[];
 }
 
 export const DESK_DATA_ID = 'desk-data';

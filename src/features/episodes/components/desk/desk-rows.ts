@@ -89,6 +89,14 @@ function sorted(form: object): unknown {
 
 const INPUTS = { note: AddNoteInput, chapter: AddChapterInput, appearance: AppearanceInput };
 
+/** Whether a row is stored but for what the server takes off a text, such as a space at its end. */
+export function isStoredTrimmed({ what, id, form }: AnyRow, stored: Forms[RowKind]): boolean {
+  const parsed = INPUTS[what].safeParse({ ...form, id });
+  if (!parsed.success) return false;
+  const { id: _id, ...trimmed } = parsed.data;
+  return sameForm(trimmed, stored);
+}
+
 /** What is wrong with a row before it is sent: a sentence a field, by the same words as on the server. */
 export function faultsOf(row: Pick<AnyRow, 'what' | 'id' | 'form'>): Readonly<Record<string, string>> {
   const parsed = INPUTS[row.what].safeParse({ ...row.form, id: row.id });

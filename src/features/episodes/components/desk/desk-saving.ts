@@ -1,6 +1,7 @@
 import {
   type AnyRow,
   faultsOf,
+  isStoredTrimmed,
   type RowKind,
   sameForm,
   storedAppearance,
@@ -8,7 +9,7 @@ import {
   storedNote,
   type StoredRow,
 } from './desk-rows.ts';
-import { type DeskLists } from '../../queries.ts';
+import { type DeskLists } from '../../desk.ts';
 import { type DeskState, findRow, replaceRow, rowsOf } from './desk-state.ts';
 
 /** What is asked of the server about one row. Undoing asks for the inverse, with the version that is known. */
@@ -23,9 +24,10 @@ export interface Op {
 export type RowMark = 'saved' | 'waiting' | 'open' | 'conflict';
 
 /** Whether the row is stored as it stands here. */
-export function isStored({ stored, form, gone }: AnyRow): boolean {
+export function isStored(row: AnyRow): boolean {
+  const { stored, form, gone } = row;
   if (stored === null) return gone;
-  return stored.gone === gone && (gone || sameForm(stored.form, form));
+  return stored.gone === gone && (gone || sameForm(stored.form, form) || isStoredTrimmed(row, stored.form));
 }
 
 /** What has to be asked next about a row; null when nothing has to, or nothing can. */
@@ -55,12 +57,8 @@ export function markOf(row: AnyRow): RowMark {
 /** Takes in what the server kept. @param answer the row as it answered; of a removed appearance nothing but its id */
 export function noteSaved(state: DeskState, op: Op, answer: unknown): DeskState {
   const stored = storedFrom(op.what, answer, op);
-  return replaceRow(state, op.id, (row) => {
-    const wrote = op.do === 'add' || op.do === 'change';
-    // The server trims: what it made of the text stands, unless more was typed meanwhile.
-    const form = wrote && sameForm(row.form, op.form) ? stored.form : row.form;
-    return { ...row, form, stored, refused: null } as AnyRow;
-  });
+  // The form stays as it was typed: the server trims, and whoever paused after a word would lose the space.
+  return replaceRow(state, op.id, (row) => ({ ...row, stored, refused: null }) as AnyRow);
 }
 
 /** Takes in that someone else stored the row meanwhile. */
@@ -85,6 +83,15 @@ export function noteRefused(
     const refused = { form: op.form, gone: op.do === 'delete', message, fields };
     return { ...row, refused } as AnyRow;
   });
+}
+
+/** Takes in that a row that was to go is not there any more. */
+export function noteGone(state: DeskState, op: Op): DeskState {
+  return replaceRow(
+    state,
+    op.id,
+    (row) => ({ ...row, stored: row.stored && { ...row.stored, gone: true }, refused: null }) as AnyRow,
+  );
 }
 
 /** Settles a conflict: mine is sent again on top of theirs; theirs takes the place of mine. */

@@ -1,4 +1,4 @@
-import { type DeskLists } from '../../queries.ts';
+import { type DeskLists } from '../../desk.ts';
 import {
   type AnyRow,
   type Forms,

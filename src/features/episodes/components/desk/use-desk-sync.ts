@@ -1,8 +1,17 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { type Dispatch, type SetStateAction, useEffect, useMemo, useRef, useState } from 'react';
 import { ApiError } from '../../../../client/call-api.ts';
-import { type DeskLists, deskQuery, type DeskOf, sendDeskChange } from '../../queries.ts';
-import { noteConflict, noteRefused, noteSaved, type Op, pendingOps, takeIn } from './desk-saving.ts';
+import { type DeskLists } from '../../desk.ts';
+import { deskQuery, type DeskOf, sendDeskChange } from '../../queries.ts';
+import {
+  noteConflict,
+  noteGone,
+  noteRefused,
+  noteSaved,
+  type Op,
+  pendingOps,
+  takeIn,
+} from './desk-saving.ts';
 import { type DeskState } from './desk-state.ts';
 import { readKept, writeKept } from './kept-in-tab.ts';
 import { type KeptRow, putBack, unsavedRows } from './unsaved-rows.ts';
@@ -87,7 +96,10 @@ export function useDeskSync(
         setStalled(false);
         setDesk((state) => noteSaved(state, op, answer));
       } catch (error) {
-        if (!(error instanceof ApiError) || error.status === 0 || error.status >= 500) setStalled(true);
+        const lost = !(error instanceof ApiError) || error.status === 0 || error.status >= 500;
+        setStalled(lost);
+        if (lost) return;
+        if (error.status === 404 && op.do === 'delete') setDesk((state) => noteGone(state, op));
         else if (error.status === 409) setDesk((state) => noteConflict(state, op, error.stored));
         else setDesk((state) => noteRefused(state, op, error.message, error.fields));
       } finally {
