@@ -17,6 +17,12 @@ export function answerLine(line: string): Answer<unknown> {
   }
 }
 
+/** Loads what the tool of a line needs, once; a line that names none needs nothing. */
+export async function prepareLine(line: string): Promise<void> {
+  const tool = findTool(parseLine(line)?.['tool']);
+  if (tool.ok) await tool.value.prepare?.();
+}
+
 function parseLine(line: string): Request | null {
   try {
     const parsed: unknown = JSON.parse(line);

@@ -2,8 +2,8 @@ import { readFileSync } from 'node:fs';
 import { createInterface } from 'node:readline';
 import { type Answer, right, wrong } from '../domain/answer.ts';
 import { decodeText } from '../domain/captions/decode-text.ts';
-import { answerLine } from './answer-line.ts';
-import { runCommand } from './run-command.ts';
+import { answerLine, prepareLine } from './answer-line.ts';
+import { prepareCommand, runCommand } from './run-command.ts';
 
 /** The exit status for input that is wrong; 1 stays for a fault of the program. */
 const BAD_INPUT = 2;
@@ -18,12 +18,13 @@ function readText(path: string): Answer<string> {
 
 async function answerBatch(): Promise<void> {
   for await (const line of createInterface({ input: process.stdin, crlfDelay: Number.POSITIVE_INFINITY }))
-    if (line.trim() !== '') process.stdout.write(`${JSON.stringify(answerOrFault(line))}\n`);
+    if (line.trim() !== '') process.stdout.write(`${JSON.stringify(await answerOrFault(line))}\n`);
 }
 
 /** A fault of the program in one line leaves the others answered, and is seen in the exit status. */
-function answerOrFault(line: string): Answer<unknown> {
+async function answerOrFault(line: string): Promise<Answer<unknown>> {
   try {
+    await prepareLine(line);
     return answerLine(line);
   } catch (error) {
     process.stderr.write(`${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`);
@@ -42,6 +43,7 @@ const args = process.argv.slice(2);
 if (args[0] === 'batch' && args.length === 1) {
   await answerBatch();
 } else {
+  await prepareCommand(args);
   const answer = runCommand(args, readText);
   if (answer.ok) process.stdout.write(answer.value);
   else {

@@ -13,3 +13,9 @@ export function runCommand([name, ...args]: readonly string[], read: ReadFile): 
   const { print = (value: unknown) => `${JSON.stringify(value)}\n` } = tool.value;
   return right(print(answer.value));
 }
+
+/** Loads what a command needs before it runs. */
+export async function prepareCommand([name]: readonly string[]): Promise<void> {
+  const tool = findTool(name);
+  if (tool.ok) await tool.value.prepare?.();
+}

@@ -12,6 +12,8 @@ export interface Tool {
    * @param read the text of a file that an argument names
    */
   readonly fromArguments: (args: readonly string[], read: ReadFile) => Answer<Request>;
+  /** What has to be loaded before the first run. */
+  readonly prepare?: () => Promise<void>;
   readonly run: (request: Request) => Answer<unknown>;
   /** What a command prints, where that is not the JSON of the value: a document in its own form. */
   readonly print?: (value: unknown) => string;

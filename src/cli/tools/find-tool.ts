@@ -5,7 +5,9 @@ import { editTool } from './edit.ts';
 import { fitTool, seatsTool } from './fit.ts';
 import { lengthTool } from './length.ts';
 import { placeTool } from './place.ts';
+import { portsTool } from './ports.ts';
 import { sectionsTool } from './sections.ts';
+import { stockTool } from './stock.ts';
 import { timecodeTool } from './timecode.ts';
 
 /** The tools by the name they are called by. */
@@ -15,8 +17,10 @@ export const TOOLS: ReadonlyMap<string, Tool> = new Map([
   ['fit', fitTool],
   ['length', lengthTool],
   ['place', placeTool],
+  ['ports', portsTool],
   ['seats', seatsTool],
   ['sections', sectionsTool],
+  ['stock', stockTool],
   ['timecode', timecodeTool],
 ]);
 

@@ -1,9 +1,12 @@
-import { describe, expect, it } from 'vitest';
+import { beforeAll, describe, expect, it } from 'vitest';
 import { wrong } from '../../../src/domain/answer.ts';
 import { answerLine } from '../../../src/cli/answer-line.ts';
-import { runCommand } from '../../../src/cli/run-command.ts';
+import { prepareCommand, runCommand } from '../../../src/cli/run-command.ts';
 
-const FILES: Readonly<Record<string, string>> = {};
+const FILES: Readonly<Record<string, string>> = {
+  'pieces.csv': 'length,quantity\n1200,4\n850,6\n',
+  'long.csv': '7000,1',
+};
 const read = (path: string) => {
   const text = FILES[path];
   return text === undefined ? wrong(`The file ${path} cannot be read.`) : { ok: true as const, value: text };
@@ -36,6 +39,35 @@ describe('fit', () => {
   });
 });
 
+describe('stock', () => {
+  beforeAll(() => prepareCommand(['stock']));
+
+  it('prints a plan with its proof', () => {
+    const answer = run('stock', '--length', '6000', '--kerf', '2.5', 'pieces.csv');
+    expect(JSON.parse(answer.ok ? answer.value : '')).toMatchObject({
+      bars: 2,
+      lowerBound: 2,
+      optimal: true,
+      plan: [{ stock: 6000 }, { stock: 6000 }],
+    });
+  });
+
+  it('answers a batch by the same names', () => {
+    expect(ask({ tool: 'stock', length: 6000, kerf: 2.5, pieces: [[1200, 4]], offcuts: [2400] })).toEqual({
+      ok: true,
+      value: {
+        bars: 1,
+        lowerBound: 1,
+        optimal: true,
+        plan: [
+          { stock: 2400, offcut: true, pieces: [1200], marks: [1200], left: 1197.5 },
+          { stock: 6000, pieces: [1200, 1200, 1200], marks: [1200, 2402.5, 3605], left: 2392.5 },
+        ],
+      },
+    });
+  });
+});
+
 describe('Wrong input', () => {
   it.each([
     [['sections'], 'Give one section'],
@@ -45,6 +77,12 @@ describe('Wrong input', () => {
     [['fit', '--size', '501', '--hole', 'H7'], '500 mm'],
     [['fit', '--size', '-25', '--hole', 'H7'], 'not understood'],
     [['seats', '--bore', '25'], 'Outside diameter'],
+    [['stock', 'pieces.csv'], 'Give the length'],
+    [['stock', '--length', '6000'], 'Give one list'],
+    [['stock', '--length', '6000', 'lost.csv'], 'cannot be read'],
+    [['stock', '--length', '6000', 'long.csv'], 'longer than any bar'],
+    [['stock', '--length', 'long', 'pieces.csv'], 'Bar'],
+    [['stock', '--length', '6000', '--kerf', '1/2', 'pieces.csv'], 'Kerf'],
   ])('%j gets a sentence', (args, sentence) => {
     const answer = run(...args);
     expect(answer.ok ? '' : answer.error).toContain(sentence);
