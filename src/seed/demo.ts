@@ -33,19 +33,19 @@ export async function seedDemo(
     timeZone: 'Europe/London',
   });
   const { person: owner, key } = await addSecondFactor(services, made);
-  await joinTeam(
-    services,
-    { owner, slug: SLUG },
-    await makePerson(services, PEOPLE.editor, tokenFor),
-    'editor',
-  );
+  const editor = await makePerson(services, PEOPLE.editor, tokenFor);
+  await joinTeam(services, { owner, slug: SLUG }, editor, 'editor');
   await joinTeam(
     services,
     { owner, slug: SLUG },
     await makePerson(services, PEOPLE.moderator, tokenFor),
     'moderator',
   );
-  await seedPress(await contextFor(services, owner, SLUG));
+  await services.storage.prepare();
+  await seedPress({
+    owner: await contextFor(services, owner, SLUG),
+    editor: await contextFor(services, editor, SLUG),
+  });
   await makePerson(services, PEOPLE.viewer, tokenFor);
   await makePerson(services, PEOPLE.builder, tokenFor);
   return Object.entries(PEOPLE).map(([who, { email }]) => ({
