@@ -1,6 +1,7 @@
-import { readFileSync, readdirSync } from 'node:fs';
+import { readFileSync } from 'node:fs';
 import { afterAll, beforeAll, expect, test, vi } from 'vitest';
 import { findFreePort } from '../../../scripts/ports.ts';
+import { childrenOf } from '../../support/child-processes.ts';
 import { type StartedProduct, startProduct } from '../../support/started-product.ts';
 import { throwawayFolder } from '../../support/throwaway.ts';
 
@@ -24,23 +25,6 @@ afterAll(async () => {
   await (product as StartedProduct | undefined)?.stop();
   folder.remove();
 });
-
-/** The processes that a process has started, by their command lines. */
-function childrenOf(parent: number | undefined): { pid: number; command: string }[] {
-  return readdirSync('/proc')
-    .filter((name) => /^\d+$/.test(name))
-    .flatMap((name) => {
-      try {
-        const [, ppid] = /\) \S (\d+)/.exec(readFileSync(`/proc/${name}/stat`, 'utf8')) ?? [];
-        if (Number(ppid) !== parent) return [];
-        return [
-          { pid: Number(name), command: readFileSync(`/proc/${name}/cmdline`, 'utf8').replaceAll('\0', ' ') },
-        ];
-      } catch {
-        return [];
-      }
-    });
-}
 
 async function answers(): Promise<boolean> {
   const { PUBLIC_URL = '' } = product.environment;
