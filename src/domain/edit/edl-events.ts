@@ -13,7 +13,7 @@ export interface EdlEvent {
   readonly transitionFrames: number;
   readonly source: readonly [WrittenTime, WrittenTime];
   readonly record: readonly [WrittenTime, WrittenTime];
-  /** Whether the list says here that its labels drop; null where it says nothing. */
+  /** Whether the list says here that its labels drop; null where it says nothing, or each label does. */
   readonly drop: boolean | null;
   from: string | null;
   to: string | null;
@@ -69,7 +69,8 @@ function readEvent(line: number, text: string, drop: boolean | null): EdlEvent |
     transitionFrames: frames,
     source: [sourceIn, sourceOut],
     record: [recordIn, recordOut],
-    drop,
+    // A list that marks labels which drop means by the others that they do not.
+    drop: times.some((word) => /[;.]\d+$/.test(word)) ? null : drop,
     from: null,
     to: null,
     file: null,

@@ -137,6 +137,8 @@ function tracksOf(channels: string): { readonly picture: string | null; readonly
   return { picture, sound };
 }
 
+const nominal = ({ num, den }: Rate) => new Fraction(Math.round(num / den));
+
 /** The speed that the list states, or that the lengths of an event leave. */
 function speedOf(timed: Timed, room: Fraction | null, { rate, warn }: Reading): [Fraction, Stretch] {
   const { event, clipRate, source, record } = timed;
@@ -146,10 +148,12 @@ function speedOf(timed: Timed, room: Fraction | null, { rate, warn }: Reading): 
   const apart = inSource.sub(inRecord).abs().mul(rateOf(rate));
   if (event.speed !== null) {
     const fps = new Fraction(event.speed.fps);
-    // Written in frames of the clip a second, or of the list: where the rates differ, the lengths tell which.
-    const [own, list] = [fps.div(clipFrames), fps.div(rateOf(rate))];
     const miss = (speed: Fraction) => inRecord.mul(speed.abs()).sub(inSource).abs();
-    const speed = sameRate(clipRate, rate) || miss(own).compare(miss(list)) < 0 ? own : list;
+    // Written in frames of the clip a second, or of the list, or of the whole rate beside it, as 30 stands for
+    // 30000/1001: where these differ, the lengths tell which.
+    const speed = [clipFrames, nominal(clipRate), rateOf(rate), nominal(rate)]
+      .map((frames) => fps.div(frames))
+      .reduce((best, other) => (miss(other).compare(miss(best)) < 0 ? other : best));
     if (speed.compare(0) < 0) warn(event.speed.line, `Event ${event.number} plays backwards.`);
     // The speed is written to a tenth of a frame, and both ends are rounded to frames.
     const doubt = inRecord.div(20).add(new Fraction(ROUNDING).mul(speed.abs().add(1)));
@@ -425,6 +429,6 @@ function lastLine(text: string): number {
 function fewest(warnings: readonly EditWarning[]): EditWarning[] {
   const sorted = [...warnings].sort((a, b) => (a.line ?? 0) - (b.line ?? 0));
   if (sorted.length <= MOST_WARNINGS) return sorted;
-  const more = `There are ${String(sorted.length - MOST_WARNINGS)} more lines to say something about.`;
+  const more = `${String(sorted.length - MOST_WARNINGS)} more of such lines are not listed.`;
   return [...sorted.slice(0, MOST_WARNINGS), { line: null, sentence: more }];
 }
