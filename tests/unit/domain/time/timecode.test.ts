@@ -74,25 +74,38 @@ describe('A day of labels', () => {
   });
 });
 
+const counted = fc.constantFrom<[Rate, boolean]>(
+  [FILM, false],
+  [rate(24), false],
+  [rate(25), false],
+  [VIDEO, false],
+  [VIDEO, true],
+  [{ num: 48000, den: 1001 }, false],
+  [rate(48), false],
+  [rate(30), false],
+  [rate(50), false],
+  [FAST, false],
+  [FAST, true],
+  [rate(60), false],
+  [rate(120), false],
+);
+
 describe('Every label', () => {
   it('comes back to its frame', () => {
-    const counted = fc.constantFrom<[Rate, boolean]>(
-      [FILM, false],
-      [rate(24), false],
-      [rate(25), false],
-      [VIDEO, false],
-      [VIDEO, true],
-      [rate(30), false],
-      [rate(50), false],
-      [FAST, false],
-      [FAST, true],
-      [rate(60), false],
-      [rate(120), false],
-    );
     fc.assert(
       fc.property(counted, fc.nat(2_000_000), ([at, drop], frame) => {
         const read = parseTimecode(formatTimecode(frame, at, drop), at);
         expect(read).toEqual({ ok: true, value: { frame, drop } });
+      }),
+    );
+  });
+
+  it('rises with its frame through the day', () => {
+    const digits = (label: string) => label.replace(/[:;]/g, '');
+    fc.assert(
+      fc.property(counted, fc.nat(2_000_000), ([at, drop], frame) => {
+        const [one, next] = [formatTimecode(frame, at, drop), formatTimecode(frame + 1, at, drop)];
+        expect(digits(one) < digits(next)).toBe(true);
       }),
     );
   });
