@@ -31,7 +31,7 @@ import {
 
 /** How deep stacks may lie in stacks, and how many things a timeline may hold when all is unfolded. Our own limits. */
 const DEEPEST = 64;
-const MOST_ITEMS = 200_000;
+const MOST_ITEMS = 20_000;
 
 const ZERO = new Fraction(0);
 const ONE = new Fraction(1);
@@ -224,6 +224,7 @@ function useOf(item: OtioObject, whole: Shown, reading: Reading): Shown {
   const length = range === null ? whole.length : range.duration.seconds.mul(frames);
   const marks = readMarkers(item, range ?? wholeRange(length, reading.rate), speed, reading);
   const withMarks = (shown: Shown): Shown => ({ ...shown, markers: [...shown.markers, ...marks] });
+  if (range === null && speed.equals(1)) return withMarks(whole);
   const beside = from.compare(whole.length) >= 0 || from.add(length).compare(0) <= 0;
   if (range !== null && beside && length.compare(0) > 0 && whole.length.compare(0) > 0) {
     reading.warn(`The range of ${sayObject(item)} lies outside of all it holds; the whole of it is taken.`);

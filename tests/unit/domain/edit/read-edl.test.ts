@@ -229,6 +229,7 @@ describe('Any list', () => {
         });
         expect(map(edit(lines, rate).picture)).toEqual(expected);
       }),
+      { numRuns: 60 },
     );
   });
 
@@ -284,6 +285,7 @@ describe('Any list', () => {
           if (next !== undefined) expect(next.record.in.compare(record.out)).toBeGreaterThanOrEqual(0);
         });
       }),
+      { numRuns: 60 },
     );
   });
 });

@@ -70,6 +70,7 @@ describe('A list that is written', () => {
         const text = writeEdl(edit, drop && hasDropFrame(rate));
         expect(map(read(readEdl(text, { rate })))).toEqual(map(edit));
       }),
+      { numRuns: 40 },
     );
   });
 
@@ -138,6 +139,7 @@ describe('A timeline that is written', () => {
         expect(back.rate).toEqual(rate);
         expect([map(back), marks(back)]).toEqual([map(edit), marks(edit)]);
       }),
+      { numRuns: 40 },
     );
   });
 

@@ -158,6 +158,7 @@ describe('Any notes on any edit', () => {
           } else expect(placed.status).toBe(Math.min(...apart, Infinity) <= 75 ? 'snapped' : 'lost');
         });
       }),
+      { numRuns: 60 },
     );
   });
 
@@ -171,6 +172,7 @@ describe('Any notes on any edit', () => {
           }
         });
       }),
+      { numRuns: 60 },
     );
   });
 });
