@@ -6,9 +6,11 @@ import { fitTool, seatsTool } from './fit.ts';
 import { lengthTool } from './length.ts';
 import { placeTool } from './place.ts';
 import { portsTool } from './ports.ts';
+import { ramTool } from './ram.ts';
 import { sectionsTool } from './sections.ts';
 import { stockTool } from './stock.ts';
 import { timecodeTool } from './timecode.ts';
+import { weldTool } from './weld.ts';
 
 /** The tools by the name they are called by. */
 export const TOOLS: ReadonlyMap<string, Tool> = new Map([
@@ -18,10 +20,12 @@ export const TOOLS: ReadonlyMap<string, Tool> = new Map([
   ['length', lengthTool],
   ['place', placeTool],
   ['ports', portsTool],
+  ['ram', ramTool],
   ['seats', seatsTool],
   ['sections', sectionsTool],
   ['stock', stockTool],
   ['timecode', timecodeTool],
+  ['weld', weldTool],
 ]);
 
 /** A tool by its name, or the sentence for a name that has none. */

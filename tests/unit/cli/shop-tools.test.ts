@@ -68,6 +68,45 @@ describe('stock', () => {
   });
 });
 
+describe('ram, weld and ports', () => {
+  const parsed = (...args: string[]) => {
+    const answer = run(...args);
+    return JSON.parse(answer.ok ? answer.value : answer.error) as Record<string, unknown>;
+  };
+
+  it('print their result with what was not checked and the cautions beside it', () => {
+    const pump = '11 gpm@650psi,3 gpm@2500psi';
+    const ram = parsed(
+      'ram',
+      '--bore',
+      '100',
+      '--rod',
+      '45',
+      '--stroke',
+      '600',
+      '--pressure',
+      '2500 psi',
+      '--pump',
+      pump,
+    );
+    // π/4 × 100² mm2 × 17.2369 N/mm2
+    expect(ram).toMatchObject({ extendForce: { kN: expect.closeTo(135.378, 2) }, warnings: [] });
+    expect(ram['notChecked']).toContainEqual(expect.stringContaining('Rod and frame not checked'));
+    expect([ram['cautions'], ram['guide']]).toEqual([
+      expect.arrayContaining([expect.stringContaining('never feel for a leak')]),
+      expect.stringContaining('not a design approval'),
+    ]);
+  });
+
+  it('answer a batch by the same names', () => {
+    const weld = { electrode: 'E7018', diameter: 3.2, leg: 5, length: 400, thickness: 10, other: 12 };
+    expect(ask({ tool: 'weld', ...weld })).toMatchObject({ value: { currentA: [110, 160], leastLegMm: 5 } });
+    expect(ask({ tool: 'ports', diameter: 16.6, pitch: '19 tpi' })).toMatchObject({
+      value: { candidates: [{ name: 'G 3/8' }, { name: 'R 3/8' }] },
+    });
+  });
+});
+
 describe('Wrong input', () => {
   it.each([
     [['sections'], 'Give one section'],
