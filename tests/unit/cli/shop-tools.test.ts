@@ -6,6 +6,18 @@ import { prepareCommand, runCommand } from '../../../src/cli/run-command.ts';
 const FILES: Readonly<Record<string, string>> = {
   'pieces.csv': 'length,quantity\n1200,4\n850,6\n',
   'long.csv': '7000,1',
+  'stages.json': JSON.stringify({
+    start: '2026-03-02',
+    hours: [0, 0, 4, 0, 0, 6, 0],
+    stages: [
+      { id: 'cut', work: 4 },
+      { id: 'weld', work: 6, after: ['cut'] },
+      { id: 'paint', work: 2, after: ['weld'], wait: 2 },
+      { id: 'order', work: 0, notBefore: '2026-03-04' },
+    ],
+  }),
+  'circle.json': '[{"id":"a","work":1,"after":["b"]},{"id":"b","work":1,"after":["a"]}]',
+  'no.json': 'stages',
 };
 const read = (path: string) => {
   const text = FILES[path];
@@ -68,6 +80,23 @@ describe('stock', () => {
   });
 });
 
+describe('Wrong lists', () => {
+  it.each([
+    [{ tool: 'schedule', stages: [] }, 'no stages'],
+    [{ tool: 'schedule', start: '2026-03-02', stages: [{ id: 'a', work: 1 }] }, 'together'],
+    [
+      { tool: 'schedule', start: '2026-03-02', hours: [0, 0, 0, 0, 0, 0, 0], stages: [{ id: 'a', work: 1 }] },
+      'shop hours',
+    ],
+    [{ tool: 'schedule', stages: [{ id: 'a', work: -1 }] }, 'not below zero'],
+    [{ tool: 'schedule', stages: [{ id: 'a', work: [3, 2, 1] }] }, 'have to rise'],
+    [{ tool: 'schedule', stages: [{ id: 'a', work: 1, notBefore: '2026-03-02' }] }, 'a number otherwise'],
+  ])('%j gets a sentence', (request, sentence) => {
+    const answer = ask(request);
+    expect(answer.ok ? '' : answer.error).toContain(sentence);
+  });
+});
+
 describe('ram, weld and ports', () => {
   const parsed = (...args: string[]) => {
     const answer = run(...args);
@@ -107,6 +136,46 @@ describe('ram, weld and ports', () => {
   });
 });
 
+describe('schedule', () => {
+  it('prints dates in shop hours, and the critical chain', () => {
+    // 2 March 2026 is a Monday: four hours on Wednesdays, six on Saturdays.
+    const answer = run('schedule', 'stages.json');
+    expect(JSON.parse(answer.ok ? answer.value : answer.error)).toMatchObject({
+      endDate: '2026-03-13',
+      critical: ['cut', 'weld', 'paint'],
+      stages: [
+        { id: 'cut', earliestStartDate: '2026-03-02', earliestEndDate: '2026-03-04', slack: 0 },
+        { id: 'order', earliestStartDate: '2026-03-04', critical: false },
+        { id: 'weld', earliestEndDate: '2026-03-07' },
+        { id: 'paint', earliestEndDate: '2026-03-13' },
+      ],
+    });
+  });
+
+  it('takes three guesses in a batch', () => {
+    const stages = [
+      { id: 'a', work: [1, 2, 9] },
+      { id: 'b', work: 1, after: ['a'] },
+    ];
+    expect(ask({ tool: 'schedule', stages })).toMatchObject({
+      value: { end: 4, critical: ['a', 'b'], variance: expect.closeTo(16 / 9, 12) },
+    });
+  });
+});
+
+describe('holes, drive, beam and square', () => {
+  it('answer in the same manner', () => {
+    expect(ask({ tool: 'holes', thread: 'M8' })).toMatchObject({ value: { tappingDrillMm: 6.8 } });
+    expect(ask({ tool: 'drive', rpm: 1440, driver: 80, driven: 240 })).toMatchObject({ value: { rpm: 480 } });
+    expect(
+      ask({ tool: 'beam', case: 'simple-centre', span: 1200, load: '1 kN', bar: '12x50' }),
+    ).toMatchObject({
+      value: { momentNm: 300, guide: expect.stringContaining('not a design approval') },
+    });
+    expect(ask({ tool: 'square', width: 300, height: 400 })).toMatchObject({ value: { diagonalMm: 500 } });
+  });
+});
+
 describe('Wrong input', () => {
   it.each([
     [['sections'], 'Give one section'],
@@ -117,6 +186,9 @@ describe('Wrong input', () => {
     [['fit', '--size', '-25', '--hole', 'H7'], 'not understood'],
     [['seats', '--bore', '25'], 'Outside diameter'],
     [['stock', 'pieces.csv'], 'Give the length'],
+    [['schedule'], 'Give one list'],
+    [['schedule', 'no.json'], 'no JSON'],
+    [['schedule', 'circle.json'], 'in a circle: a, b'],
     [['stock', '--length', '6000'], 'Give one list'],
     [['stock', '--length', '6000', 'lost.csv'], 'cannot be read'],
     [['stock', '--length', '6000', 'long.csv'], 'longer than any bar'],
