@@ -17,8 +17,8 @@ const WORKSHOP = 'marram-lane';
 const BUILD = 'orchard-press';
 const WIDE = { width: 1440, height: 1100 };
 const NARROW = { width: 390, height: 1100 };
-/** A second of episode 4 at which the adapters are on the bench. */
-const AT = 66;
+/** A second of episode 4 at which the bearing housings are on the bench. */
+const AT = 37;
 
 interface Picture {
   readonly name: string;
@@ -46,7 +46,7 @@ const PICTURES: readonly Picture[] = [
   { name: 'companion-narrow', viewport: NARROW, open: companion },
   {
     name: 'today',
-    viewport: { ...WIDE, height: 800 },
+    viewport: { ...WIDE, height: 480 },
     signedIn: true,
     open: (page) => page.goto(paths.today(WORKSHOP)),
   },
@@ -60,7 +60,14 @@ const PICTURES: readonly Picture[] = [
         .getByRole('main')
         .getByRole('link', { name: /14 or 40/ })
         .click();
-      await page.waitForFunction(() => (document.querySelector('video')?.readyState ?? 0) >= 2);
+      await page.waitForURL(/\/episodes\//);
+      const video = page.locator('video');
+      await video.evaluate((element: HTMLVideoElement) => (element.currentTime = 8));
+      await page.waitForFunction(() => {
+        const found = document.querySelector('video');
+        return found !== null && found.readyState >= 3 && !found.seeking && found.currentTime > 1;
+      });
+      await page.evaluate(() => scrollTo(0, 0));
     },
   },
   {
