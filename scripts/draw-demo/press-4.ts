@@ -199,20 +199,20 @@ const ports: Shot = {
             box(px - 27, -172, 54, 40, 'brass') +
             box(px - 15, -230, 30, 58, 'bright-up'),
           {
-            move: `translate(0 ${String(-70 * (1 - fit))})`,
+            move: `translate(0 ${String(36 - 90 * (1 - fit))})`,
           },
         ),
       )
       .join('');
     return [
       group(
-        seen(lyingCylinder() + group(adapters, { opacity: come(3, 0.2) }), 40, -50, 1.15) +
+        seen(group(adapters, { opacity: come(3, 0.2) }) + lyingCylinder(), 40, -50, 1.15) +
           balloon(640, 610, '124', [640, 495], on(0, 2)) +
           group(label(150, 170, 'G 3/8', 'brass') + line('M230 222L262 330', 'mark'), {
             opacity: come(0, 3.2) * (1 - come(3, -0.3)),
           }) +
           group(
-            balloon(110, 230, '125', [232, 262], on(3), { inPlans: false }) +
+            balloon(110, 230, '125', [236, 290], on(3), { inPlans: false }) +
               triangle(450, 240, 'C') +
               words(526, 214, 'Not in revision B:', { size: 25, kind: 'strong' }) +
               words(526, 246, 'it comes with the next', { size: 24 }),
