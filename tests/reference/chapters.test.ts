@@ -5,13 +5,14 @@ import { toJsonChapters } from '../../src/domain/chapters/write-chapters.ts';
 import { referenceFolder } from './support/reference-folder.ts';
 
 const folder = referenceFolder('chapters');
+const skipped = folder === null ? ' (skipped: no reference folder here)' : '';
 
 interface Sample {
   readonly chapters: readonly { readonly startTime: number; readonly title: string }[];
 }
 
 /** Podcastindex-org/podcast-namespace, docs/examples/chapters/example.json. */
-describe.skipIf(folder === null)('The public example of podcast chapters', () => {
+describe.skipIf(folder === null)(`The public example of podcast chapters${skipped}`, () => {
   it('is what its own starts and titles are written as', () => {
     const { chapters } = JSON.parse(readFileSync(join(folder ?? '', 'example.json'), 'utf8')) as Sample;
     const written = toJsonChapters(

@@ -7,6 +7,7 @@ import { formatTimecode } from '../../src/domain/time/timecode.ts';
 import { referenceFolder } from './support/reference-folder.ts';
 
 const folder = referenceFolder('timeline');
+const skipped = folder === null ? ' (skipped: no reference folder here)' : '';
 
 function read(name: string, fps = 24) {
   const rate = name.endsWith('.otio') ? null : { num: fps, den: 1 };
@@ -28,7 +29,7 @@ const seenIn = ({ dissolved }: Edit) => dissolved.map(({ record }) => lengthOf(r
 const SCREENING = [31, 50, 28, 115, 101, 161, 170, 136, 257];
 
 /** Expected: tests/test_cmx_3600_adapter.py of OpenTimelineIO/otio-cmx3600-adapter. */
-describe.skipIf(folder === null)('The public edit lists', () => {
+describe.skipIf(folder === null)(`The public edit lists${skipped}`, () => {
   it.each<[string, number, readonly number[]]>([
     ['screening_example.edl', 24, SCREENING],
     ['no_spaces_test.edl', 24, SCREENING],
@@ -180,7 +181,7 @@ const OTIO: readonly [string, number, readonly (readonly number[])[]][] = [
 ];
 
 /** Computed from OpenTimelineIO's tests/sample_data by the rules of its tutorials. */
-describe.skipIf(folder === null)('The public timelines', () => {
+describe.skipIf(folder === null)(`The public timelines${skipped}`, () => {
   it.each(OTIO)('%s.otio, %i frames, maps source to record', (name, total, expected) => {
     const timeline = edit(`${name}.otio`);
     expect(map(timeline.picture)).toEqual(expected);

@@ -253,9 +253,11 @@ interface Laid {
 }
 
 function layEvent(timed: Timed, before: Timed | undefined, room: Fraction | null, reading: Reading): Laid {
-  const { event, clipRate, source } = timed;
+  const { event, clipRate } = timed;
   const made = isGenerated(event);
   const [speed, record] = made ? [new Fraction(1), timed.record] : speedOf(timed, room, reading);
+  // A held frame is one frame, however long a source the list gives it.
+  const source = speed.equals(0) ? { in: timed.source.in, out: timed.source.in.add(1) } : timed.source;
   const { picture, sound } = tracksOf(event.channels);
   if (picture === null && sound.length === 0)
     reading.warn(

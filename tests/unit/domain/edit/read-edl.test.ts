@@ -115,6 +115,14 @@ describe('An edit list', () => {
     }
   });
 
+  it('holds one frame at a speed of 0, whatever its source', () => {
+    for (const out of ['11', '60', '10']) {
+      const read = edit([`1 C0043 V C 10 ${out} 0 50`, 'M2 C0043 000.0 10']);
+      expect(map(read.picture)).toEqual([['C0043', 10, 11, 0, 50, '0']]);
+      expect(said(read)).toEqual([]);
+    }
+  });
+
   it('has sound apart from the picture', () => {
     const read = edit(['1 C0043 V C 0 50 0 50', '2 C0044 A2 C 0 25 25 50', '3 C0045 B C 0 10 50 60']);
     expect(map(read.picture).map(([clip]) => clip)).toEqual(['C0043', 'C0045']);
