@@ -28,6 +28,17 @@ export const paths = {
   /** @param build when only one build is asked for */
   subscribe: (workshop: string, build?: string) =>
     `/w/${part(workshop)}/${build === undefined ? '' : `${part(build)}/`}subscribe`,
+  question: (workshop: string, build: string, question: string) =>
+    `/w/${part(workshop)}/${part(build)}/questions/${part(question)}`,
+  /** @param about what the question is about: an episode by number and seconds into it, a part, a note */
+  ask: (
+    workshop: string,
+    build: string,
+    about: Readonly<Partial<Record<'episode' | 't' | 'part' | 'note', string | number>>> = {},
+  ) => {
+    const query = new URLSearchParams(Object.entries(about).map(([name, value]) => [name, String(value)]));
+    return `/w/${part(workshop)}/${part(build)}/ask${query.size === 0 ? '' : `?${query.toString()}`}`;
+  },
   media: (file: string, variant: string) => `/media/${part(file)}/${part(variant)}`,
 
   signUp: () => '/sign-up',
@@ -43,6 +54,7 @@ export const paths = {
   account: () => '/account',
   secondFactor: (next?: string) =>
     next === undefined ? '/account/second-factor' : `/account/second-factor?next=${part(next)}`,
+  confirmQuestion: (id: string, token: string) => `/questions/${part(id)}?token=${part(token)}`,
   invitation: (id: string, token: string) => `/invitations/${part(id)}?token=${part(token)}`,
   askedToSubscribe: () => '/subscriptions/asked',
   confirmSubscription: (subscriber: string, token: string) =>
@@ -56,6 +68,12 @@ export const paths = {
   team: (workshop: string) => `/bench/${part(workshop)}/team`,
   workshopSettings: (workshop: string) => `/bench/${part(workshop)}/settings`,
   subscribers: (workshop: string) => `/bench/${part(workshop)}/subscribers`,
+  questions: (workshop: string, list?: string) =>
+    `/bench/${part(workshop)}/questions${list === undefined ? '' : `?list=${part(list)}`}`,
+  pasteQuestion: (workshop: string, build?: string) =>
+    `/bench/${part(workshop)}/questions/paste${build === undefined ? '' : `?build=${part(build)}`}`,
+  benchQuestion: (workshop: string, question: string) =>
+    `/bench/${part(workshop)}/questions/${part(question)}`,
   newBuild: (workshop: string) => `/bench/${part(workshop)}/new`,
   storage: (workshop: string) => `/bench/${part(workshop)}/storage`,
   benchBuild: (workshop: string, build: string) => onBench(workshop, build),
@@ -100,6 +118,9 @@ export const paths = {
     leave: (subscriber: string, token: string) =>
       `/api/subscriptions/${part(subscriber)}/leave/${part(token)}`,
     bounces: (token: string) => `/api/bounces/${part(token)}`,
+    sortQuestion: (workshop: string, question: string, action: string) =>
+      `/api/workshops/${part(workshop)}/questions/${part(question)}/${action}`,
+    confirmQuestion: (question: string) => `/api/questions/${part(question)}/confirm`,
     acceptInvitation: (invitation: string) => `/api/invitations/${part(invitation)}/accept`,
   },
 } as const;
@@ -109,7 +130,10 @@ export function takesLists(pathname: string): boolean {
   return /^\/api\/workshops\/[^/]+\/builds\/[^/]+\/(parts\/import|episodes\/[^/]+\/captions)$/.test(pathname);
 }
 
+/** The page that asks a question knows who is signed in, and what is asked about. */
+const ASK_PAGE = /^\/w\/[^/]+\/[^/]+\/ask$/;
+
 /** Whether the front server may render a page once for everyone: no session, no query. */
 export function isPublicPage(pathname: string): boolean {
-  return pathname === '/' || pathname.startsWith('/w/');
+  return pathname === '/' || (pathname.startsWith('/w/') && !ASK_PAGE.test(pathname));
 }

@@ -1,6 +1,7 @@
 import { audienceJobs } from './features/audience/jobs.ts';
 import { eraseDeletedJob } from './features/episodes/jobs.ts';
 import { fileJobs } from './features/files/jobs.ts';
+import { questionJobs } from './features/questions/jobs.ts';
 import { sendInvitationJob } from './features/workshops/jobs.ts';
 import { liveUntilStopped, startProcess } from './process-life.ts';
 import { openProcessServices } from './process-services.ts';
@@ -8,7 +9,13 @@ import { readServiceSettings } from './server/env.ts';
 import { type JobDefinition, workQueue } from './server/jobs/queue.ts';
 
 /** Every job there is. */
-const JOBS: readonly JobDefinition[] = [sendInvitationJob, ...fileJobs, eraseDeletedJob, ...audienceJobs];
+const JOBS: readonly JobDefinition[] = [
+  sendInvitationJob,
+  ...fileJobs,
+  eraseDeletedJob,
+  ...questionJobs,
+  ...audienceJobs,
+];
 
 await startProcess(async () => {
   const services = await openProcessServices(readServiceSettings(), 'worker');

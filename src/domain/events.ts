@@ -6,6 +6,9 @@ export const EVENTS = [
   'original-dropped',
   'file-ready',
   'announcement-started',
+  'question-sent',
+  'question-urgent',
+  'question-answered',
 ] as const;
 export type EventName = (typeof EVENTS)[number];
 

@@ -40,6 +40,8 @@ export const WORKSHOP_PERMISSIONS = {
   'question.answer-risky': OWNER,
   'question.draft-risky': TEAM,
   'question.ask': SIGNED_IN,
+  // It waits only once a link that was sent to the address has been opened.
+  'question.ask-by-mail': ANYONE,
   'question.follow': SIGNED_IN,
   'build-list.keep': SIGNED_IN,
   'published.read': ANYONE,

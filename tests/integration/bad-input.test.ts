@@ -6,6 +6,7 @@ import { exportedFunctions, isRoute, paramsOf, sourceFiles } from '../support/au
 import { callRoute, fieldsOf, type RouteAnswer, type RouteCall } from '../support/call-route.ts';
 import { aShownBuild, aShownEpisode, BUILD, noteAt } from '../support/companion.ts';
 import { aWorkshop, PASSWORD } from '../support/people.ts';
+import { ask } from '../support/questions.ts';
 import { storageServices } from '../support/storage.ts';
 import { type RuledRoute } from '../../src/server/http/api-route.ts';
 import { addStage } from '../../src/features/builds/server/add-stage.ts';
@@ -37,6 +38,7 @@ const THERE: Readonly<Record<string, string>> = {
   build: BUILD,
   episode,
   stage,
+  question: await ask(owner, { text: 'Which grease is on it?' }),
   part: parts.get('117') ?? '',
   note: await noteAt(owner, episode, 1, { text: 'The shaft.', audience: 'team' }),
 };

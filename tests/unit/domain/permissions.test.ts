@@ -35,6 +35,7 @@ const TABLE: readonly (readonly [Permission, string])[] = [
   ['question.answer-risky', 'o'],
   ['question.draft-risky', 'oem'],
   ['question.ask', 'oemv'],
+  ['question.ask-by-mail', 'oemva'],
   ['question.follow', 'oemv'],
   ['build-list.keep', 'oemv'],
   ['published.read', 'oemva'],

@@ -7,6 +7,7 @@ import { editions, episodes } from '../../../db/schema/episodes.ts';
 import { files } from '../../../db/schema/files.ts';
 import { anchors, appearances, chapters, noteParts, notes } from '../../../db/schema/notes.ts';
 import { parts } from '../../../db/schema/parts.ts';
+import { questionParts, questions } from '../../../db/schema/questions.ts';
 import { type Services } from '../../../server/services.ts';
 import { KEPT_DAYS } from '../../builds/build.ts';
 import { eraseDeletedFiles } from '../../files/server/erase-deleted-files.ts';
@@ -38,6 +39,9 @@ export async function eraseDeleted(services: Services, now: Date): Promise<void>
 
 /** Notes, chapters and parts in view, each with the anchor that was made for it. */
 async function eraseMarked(db: Database, before: Date): Promise<void> {
+  // What was asked about a note stays, at its moment.
+  const old = db.select({ id: notes.id }).from(notes).where(lt(notes.deletedAt, before));
+  await db.update(questions).set({ noteId: null }).where(inArray(questions.noteId, old));
   for (const table of [notes, chapters, appearances]) {
     const gone = await db
       .delete(table)
@@ -56,7 +60,7 @@ async function eraseStages(db: Database, before: Date): Promise<void> {
 }
 
 async function eraseParts(db: Database, before: Date): Promise<void> {
-  const uses = [noteParts, appearances].map((table) =>
+  const uses = [noteParts, appearances, questionParts].map((table) =>
     notExists(db.select({ partId: table.partId }).from(table).where(eq(table.partId, parts.id))),
   );
   await db.delete(parts).where(and(lt(parts.deletedAt, before), ...uses));
@@ -72,7 +76,7 @@ async function eraseEpisodes(db: Database, which: SQL): Promise<void> {
 /** Leaves nothing of a build but its files, which are marked to be erased with their objects. */
 async function emptyBuild(db: Database, id: string, before: Date): Promise<void> {
   await eraseEpisodes(db, eq(episodes.buildId, id));
-  for (const table of [anchors, diaryEntries, stages, parts] as const)
+  for (const table of [questions, anchors, diaryEntries, stages, parts] as const)
     await db.delete(table as PgTable).where(eq(table.buildId, id));
   await db
     .update(files)
