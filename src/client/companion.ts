@@ -1,4 +1,5 @@
 import { BenchNow } from './bench-now.ts';
+import { MomentAsk } from './moment-ask.ts';
 import { MomentLink } from './moment-link.ts';
 import { NotesNow } from './notes-now.ts';
 import { OutsideVideo } from './outside-video.ts';
@@ -10,5 +11,6 @@ customElements.define('bench-now', BenchNow);
 customElements.define('notes-now', NotesNow);
 customElements.define('rule-now', RuleNow);
 customElements.define('moment-link', MomentLink);
+customElements.define('moment-ask', MomentAsk);
 customElements.define('outside-video', OutsideVideo);
 customElements.define('video-follow', VideoFollow);

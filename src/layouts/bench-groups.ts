@@ -31,8 +31,18 @@ export function benchGroups(
     current: here === href || (build !== undefined && here.startsWith(`${href}/`)),
   });
   const today = paths.today(workshop.slug);
+  const questions = paths.questions(workshop.slug);
   return [
-    { items: [{ label: 'Today', href: today, current: here === today }] },
+    {
+      items: [
+        { label: 'Today', href: today, current: here === today },
+        {
+          label: 'Questions',
+          href: questions,
+          current: here === questions || here.startsWith(`${questions}/`),
+        },
+      ],
+    },
     ...(build
       ? [
           {

@@ -93,6 +93,17 @@ export interface Companion {
   readonly of: number;
 }
 
+/** Where a part is in view in one published episode. */
+export interface PartPlaces {
+  readonly episode: { readonly id: string; readonly number: number; readonly title: string };
+  readonly places: readonly {
+    /** Seconds from the start of the video. */
+    readonly at: number;
+    /** The note that brings it into view; null where that was set by hand. */
+    readonly note: Pick<CompanionNote, 'id' | 'kind' | 'text' | 'standing' | 'topic'> | null;
+  }[];
+}
+
 /** An episode's number as its address has it; 0, which no episode has, for anything else. */
 export function numberInAddress(text: string | undefined): number {
   return /^[1-9]\d{0,3}$/.test(text ?? '') ? Number(text) : 0;

@@ -52,6 +52,11 @@ async function sendHalfAnAddress(page: Page): Promise<void> {
   await page.getByRole('button', { name: 'Mail me the next episode' }).click();
 }
 
+async function askAgain(page: Page): Promise<void> {
+  await page.getByLabel('Your question').fill('Is this frame strong enough for 12 tonnes?');
+  await page.getByRole('button', { name: 'Send the question' }).click();
+}
+
 /** Every page, in every state that looks different. */
 export const PAGES: readonly PageState[] = [
   { route: 'index', at: () => '/' },
@@ -88,6 +93,46 @@ export const PAGES: readonly PageState[] = [
     route: 'subscriptions/[subscriber]/leave',
     at: ({ subscriber }) => paths.leave(subscriber.id, subscriber.leave),
   },
+  {
+    route: 'w/[workshop]/[build]/parts/[part]',
+    at: (world) => `/w/${world.owner.workshop}/${world.build}/parts/${world.part}`,
+  },
+  {
+    route: 'w/[workshop]/[build]/questions/[question]',
+    at: (world) => `/w/${world.owner.workshop}/${world.build}/questions/${world.question}`,
+  },
+  {
+    route: 'w/[workshop]/[build]/ask',
+    at: (world) => `/w/${world.owner.workshop}/${world.build}/ask?episode=1&t=75`,
+  },
+  {
+    route: 'w/[workshop]/[build]/ask',
+    state: 'asked already',
+    as: viewer,
+    at: (world) => `/w/${world.owner.workshop}/${world.build}/ask?part=${world.part}`,
+    then: askAgain,
+  },
+  { route: 'questions/[question]', at: ({ waiting }) => `/questions/${waiting}?token=abc` },
+  { route: 'bench/[workshop]/questions/index', as: editor, at: bench('/questions') },
+  {
+    route: 'bench/[workshop]/questions/index',
+    state: 'answered',
+    as: editor,
+    at: bench('/questions?list=answered'),
+  },
+  {
+    route: 'bench/[workshop]/questions/[question]',
+    state: 'waiting',
+    as: editor,
+    at: (world) => `/bench/${world.owner.workshop}/questions/${world.waiting}`,
+  },
+  {
+    route: 'bench/[workshop]/questions/[question]',
+    state: 'answered',
+    as: owner,
+    at: (world) => `/bench/${world.owner.workshop}/questions/${world.question}`,
+  },
+  { route: 'bench/[workshop]/questions/paste', as: editor, at: bench('/questions/paste') },
   { route: 'sign-up/index', at: () => '/sign-up' },
   { route: 'sign-up/index', state: 'sent back', at: () => '/sign-up', then: sendNamelessSignUp },
   { route: 'sign-up/check-mail', at: () => '/sign-up/check-mail' },
@@ -127,7 +172,7 @@ export const PAGES: readonly PageState[] = [
   { route: 'bench/index', as: viewer, at: () => '/bench' },
   { route: 'bench/new', as: viewer, at: () => '/bench/new' },
   { route: 'bench/[workshop]/index', as: owner, at: bench() },
-  { route: 'bench/[workshop]/index', state: 'nothing waits', as: editor, at: bench() },
+  { route: 'bench/[workshop]/index', state: 'for an editor', as: editor, at: bench() },
   { route: 'bench/[workshop]/team', as: owner, at: bench('/team') },
   { route: 'bench/[workshop]/team', state: 'for an editor', as: editor, at: bench('/team') },
   { route: 'bench/[workshop]/settings', as: owner, at: bench('/settings') },

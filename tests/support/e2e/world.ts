@@ -5,9 +5,11 @@ import { makeEpisode } from '../../../src/features/episodes/server/make-episode.
 import { getDesk } from '../../../src/features/episodes/server/get-desk.ts';
 import { publishEdition } from '../../../src/features/episodes/server/publish-edition.ts';
 import { setVideo } from '../../../src/features/episodes/server/set-video.ts';
+import { answerQuestion } from '../../../src/features/questions/server/answer-question.ts';
 import { addPart } from '../../../src/features/parts/server/add-part.ts';
 import { addSubscribers, tokensOf } from '../audience.ts';
 import { inWorkshop, type TestPerson } from '../people.ts';
+import { ask } from '../questions.ts';
 import { type Owner, type Product } from './product.ts';
 
 /** What the pages have to show: a workshop with its team, an invitation that waits, and a build on show with an episode. */
@@ -26,6 +28,9 @@ export interface World {
   readonly published: string;
   /** Someone who asked to be mailed, and the tokens of their links. */
   readonly subscriber: { readonly id: string; readonly confirm: string; readonly leave: string };
+  /** One that is risky and answered by the owner, and one that waits. */
+  readonly question: string;
+  readonly waiting: string;
 }
 
 const PART = {
@@ -77,16 +82,25 @@ export async function makeWorld(product: Product): Promise<World> {
     owner.workshop,
     3,
   );
+  const viewer = await product.person('Ida Kemp');
+  const asking = await inWorkshop(product.services, viewer, owner.workshop);
+  const asked = { build, episode: 1, t: 75, parts: [part] };
+  const question = await ask(asking, { ...asked, text: 'Is the frame strong enough for 12 tonnes?' });
+  const text = '**No.** It is drawn for 8, and I did the sums for 8 only.';
+  await answerQuestion(context, { question, text, send: 'answer', version: 0 });
+  const waiting = await ask(asking, { ...asked, text: 'Which glue holds the slats?' });
   return {
     owner,
     published,
     subscriber: { id: subscriber, ...tokensOf(product.services, subscriber) },
     editor,
-    viewer: await product.person('Ida Kemp'),
+    viewer,
     invited,
     invitation,
     build,
     part,
     episode,
+    question,
+    waiting,
   };
 }

@@ -1,4 +1,5 @@
 import { formatClock } from '../../../../domain/time/format-clock.ts';
+import { paths } from '../../../../paths.ts';
 import { type Companion, type CompanionChapter } from '../../companion.ts';
 import { groupNotes } from './list-rows.ts';
 import { NoteRow } from './NoteRow.tsx';
@@ -7,7 +8,13 @@ import { TapeStretch } from './TapeStretch.tsx';
 import { timeAddress } from './video-times.ts';
 
 /** The notes of an episode under their chapters. One component, because a render of each row by itself is slow. */
-export function NoteGroups({ companion }: { readonly companion: Companion }) {
+export function NoteGroups({
+  companion,
+  workshop,
+}: {
+  readonly companion: Companion;
+  readonly workshop: string;
+}) {
   const { notes, chapters, parts, video } = companion;
   const groups = groupNotes(notes, chapters, ruleLength(companion));
   const byId = new Map(parts.map((part) => [part.id, part]));
@@ -37,6 +44,7 @@ export function NoteGroups({ companion }: { readonly companion: Companion }) {
                 parts={note.partIds.flatMap((id) => byId.get(id) ?? [])}
                 partNumbers={partNumbers}
                 href={timeAddress(video, note.at)}
+                partHref={(id) => paths.part(workshop, companion.build.slug, id)}
                 next={after}
                 first={group === 0 && row === 0 && chapter === null}
                 last={isLast && row === rows.length - 1}

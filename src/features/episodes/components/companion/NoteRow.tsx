@@ -14,6 +14,7 @@ type NoteRowProps = {
   readonly parts: readonly CompanionPart[];
   readonly partNumbers: readonly string[];
   readonly href: string;
+  readonly partHref: (id: string) => string;
   /** The second at which the row after it begins. */
   readonly next: number;
   /** Whether the tape begins or ends with this row. */
@@ -22,7 +23,7 @@ type NoteRowProps = {
 };
 
 /** A note of the list: a small sheet beside the tape on narrow screens, a line of a table on wide ones. */
-export function NoteRow({ note, parts, partNumbers, href, next, first, last }: NoteRowProps) {
+export function NoteRow({ note, parts, partNumbers, href, partHref, next, first, last }: NoteRowProps) {
   const caution = note.topic === null ? null : USUAL_CAUTIONS[note.topic];
   return (
     <li
@@ -51,7 +52,7 @@ export function NoteRow({ note, parts, partNumbers, href, next, first, last }: N
         {parts.length > 0 && (
           <span className="ms-auto flex flex-wrap justify-end gap-1.5 max-lg:pe-1 lg:row-span-3 lg:max-w-40">
             {parts.map(({ id, number, name, inPlans }) => (
-              <Balloon key={id} number={number} name={name} dashed={!inPlans} />
+              <Balloon key={id} number={number} name={name} dashed={!inPlans} href={partHref(id)} />
             ))}
           </span>
         )}
