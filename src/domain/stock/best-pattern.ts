@@ -12,8 +12,8 @@ export interface BestPattern {
   readonly counts: readonly number[];
 }
 
-/** How many cells a table may have; beyond it the search goes piece by piece. */
-const CELLS_AT_MOST = 12_000_000;
+/** How many cells, of two bytes, a table may have; beyond it the search goes piece by piece. */
+const CELLS_AT_MOST = 40_000_000;
 /** How many steps that search may take. */
 const STEPS_AT_MOST = 3_000_000;
 

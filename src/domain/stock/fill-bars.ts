@@ -14,7 +14,7 @@ export const fillLongestFirst: FillBar = ({ pieces }, left, capacity) => {
 };
 
 /** How many steps a search for the fullest bar takes before it keeps the best so far. */
-const STEPS_AT_MOST = 20_000;
+const STEPS_AT_MOST = 100_000;
 
 /** The fullest bar that holds the longest piece left: a bounded search, exact for short bars. */
 export const fillFullest: FillBar = ({ pieces }, left, capacity) => {
@@ -28,8 +28,8 @@ export const fillFullest: FillBar = ({ pieces }, left, capacity) => {
     if (room < least) [least, best] = [room, [...counts]];
     for (let next = at; next < pieces.length && least > 0 && steps < STEPS_AT_MOST; next += 1) {
       const size = pieces[next]?.size ?? 0;
-      if (size > room || (counts[next] ?? 0) >= (left[next] ?? 0)) continue;
       steps += 1;
+      if (size > room || (counts[next] ?? 0) >= (left[next] ?? 0)) continue;
       counts[next] = (counts[next] ?? 0) + 1;
       search(next, room - size);
       counts[next] = (counts[next] ?? 0) - 1;

@@ -169,15 +169,29 @@ describe('A cutting plan', () => {
   }, 60_000);
 });
 
-/** The fewest bars of 100 by trying every placing. */
-function search(pieces: readonly number[]): number {
+describe('A cutting plan with offcuts', () => {
+  it('buys as few bars as a search of all placings', () => {
+    const drawn = fc.array(fc.integer({ min: 15, max: 70 }), { minLength: 1, maxLength: 7 });
+    fc.assert(
+      fc.property(drawn, fc.array(fc.integer({ min: 10, max: 120 }), { maxLength: 2 }), (pieces, offcuts) => {
+        const wanted = job(pieces, [100], { offcuts: offcuts.map((length) => new Fraction(length)) });
+        const least = search(pieces, offcuts);
+        expect(count(plan(wanted))).toEqual([least, least]);
+      }),
+      { numRuns: 60 },
+    );
+  }, 60_000);
+});
+
+/** The fewest new bars of 100 by trying every placing, after what offcuts hold. */
+function search(pieces: readonly number[], offcuts: readonly number[] = []): number {
   let best = pieces.length;
-  const rooms: number[] = [];
+  const rooms: number[] = [...offcuts];
   const place = (at: number): void => {
-    if (rooms.length >= best) return;
+    if (rooms.length - offcuts.length >= best) return;
     const piece = pieces[at];
     if (piece === undefined) {
-      best = rooms.length;
+      best = rooms.length - offcuts.length;
       return;
     }
     for (let bar = 0; bar < rooms.length; bar += 1) {
