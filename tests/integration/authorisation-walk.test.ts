@@ -80,9 +80,8 @@ describe('every endpoint', () => {
   });
 
   test('that takes a write from any site is listed here', () => {
-    expect(
-      routes.filter(({ thing }) => thing.route.origin === 'any').map(({ file }) => file),
-    ).toMatchInlineSnapshot(`
+    expect(routes.filter(({ thing }) => thing.route.origin === 'any').map(({ file }) => file))
+      .toMatchInlineSnapshot(`
       [
         "src/pages/api/bounces/[token].ts",
         "src/pages/api/subscriptions/[subscriber]/leave/[token].ts",

@@ -82,3 +82,28 @@ export function tokensOf(services: Services, subscriber: string) {
     leave: signToken(AUTH_SECRET, LEAVE_PURPOSE, subscriber),
   };
 }
+
+/** What a list of mails comes to when each address should have had one. */
+export interface Tally {
+  readonly addresses: number;
+  /** Mails beyond the first to an address. */
+  readonly doubled: number;
+  /** Of those, the ones under another Message-ID than the first: there must be none. */
+  readonly strange: number;
+}
+
+/** Counts mails by address. */
+export function tally(
+  mails: readonly { readonly to: readonly string[]; readonly messageId: string | undefined }[],
+): Tally {
+  const byAddress = new Map<string, (string | undefined)[]>();
+  for (const { to, messageId } of mails) {
+    for (const address of to) byAddress.set(address, [...(byAddress.get(address) ?? []), messageId]);
+  }
+  const extra = [...byAddress.values()].map((ids) => ({ more: ids.length - 1, kinds: new Set(ids).size }));
+  return {
+    addresses: byAddress.size,
+    doubled: extra.reduce((sum, { more }) => sum + more, 0),
+    strange: extra.filter(({ kinds }) => kinds > 1).length,
+  };
+}

@@ -17,3 +17,12 @@ export function childrenOf(parent: number | undefined): { pid: number; command: 
       }
     });
 }
+
+/** The parts of a started copy, and what the command line of each has in it. */
+export const PROGRAMS = {
+  web: 'dist/web.mjs',
+  worker: 'dist/worker.mjs',
+  storage: 'fake-s3/main.ts',
+  mail: 'fake-smtp/main.ts',
+  PostgreSQL: 'bin/postgres',
+} as const;

@@ -1,7 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { afterAll, beforeAll, expect, test, vi } from 'vitest';
 import { findFreePort } from '../../../scripts/ports.ts';
-import { childrenOf } from '../../support/child-processes.ts';
+import { childrenOf, PROGRAMS } from '../../support/child-processes.ts';
 import { type StartedProduct, startProduct } from '../../support/started-product.ts';
 import { throwawayFolder } from '../../support/throwaway.ts';
 
@@ -49,24 +49,21 @@ test('it serves and names its address and its outbox', async () => {
   expect(product.printed()).toContain(String(product.environment['OUTBOX_URL']));
 });
 
-test.each([
-  ['web', 'dist/web.mjs'],
-  ['worker', 'dist/worker.mjs'],
-  ['storage', 'fake-s3/main.ts'],
-  ['mail', 'fake-smtp/main.ts'],
-  ['PostgreSQL', 'bin/postgres'],
-])('a killed part is reported by name and started again: %s', async (name, program) => {
-  const [part] = childrenOf(product.process.pid).filter(({ command }) => command.includes(program));
-  process.kill(part!.pid, 'SIGKILL');
-  await vi.waitFor(
-    async () => {
-      expect(product.printed()).toContain(`${name} was ended by SIGKILL; starting it again.`);
-      expect(product.printed()).toContain(`${name} is running again.`);
-      expect(await answers()).toBe(true);
-    },
-    { timeout: 25_000, interval: 100 },
-  );
-});
+test.each(Object.entries(PROGRAMS))(
+  'a killed part is reported by name and started again: %s',
+  async (name, program) => {
+    const [part] = childrenOf(product.process.pid).filter(({ command }) => command.includes(program));
+    process.kill(part!.pid, 'SIGKILL');
+    await vi.waitFor(
+      async () => {
+        expect(product.printed()).toContain(`${name} was ended by SIGKILL; starting it again.`);
+        expect(product.printed()).toContain(`${name} is running again.`);
+        expect(await answers()).toBe(true);
+      },
+      { timeout: 25_000, interval: 100 },
+    );
+  },
+);
 
 // A whole second start fits into it, however busy the machine is.
 test(
