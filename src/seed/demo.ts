@@ -2,6 +2,7 @@ import { makeWorkshop } from '../features/workshops/server/make-workshop.ts';
 import { type Services } from '../server/services.ts';
 import { addSecondFactor, contextFor, DEMO_PASSWORD, joinTeam, makePerson } from './people.ts';
 import { seedPress } from './press.ts';
+import { seedSubscribers } from './subscribers.ts';
 
 const SLUG = 'marram-lane';
 
@@ -48,6 +49,7 @@ export async function seedDemo(
   });
   await makePerson(services, PEOPLE.viewer, tokenFor);
   await makePerson(services, PEOPLE.builder, tokenFor);
+  await seedSubscribers(await contextFor(services, owner, SLUG), await contextFor(services, null, SLUG));
   return Object.entries(PEOPLE).map(([who, { email }]) => ({
     who,
     email,

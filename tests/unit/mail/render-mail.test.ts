@@ -31,6 +31,16 @@ describe('the text part', () => {
     expect(renderMail(mail).text.split('\n')).toContain(LINK);
   });
 
+  test('gives a quiet link a line of its own, too, and escapes it in HTML', () => {
+    const { text, html } = renderMail({
+      subject: 'A',
+      blocks: [{ kind: 'link', label: '<Leave>', url: LINK }],
+    });
+    expect(text.split('\n')).toContain(LINK);
+    expect(html).toContain('&lt;Leave&gt;');
+    expect(html).toContain(`href="${LINK.replace('&', '&amp;')}"`);
+  });
+
   test('keeps the line breaks of a paragraph and sets off a code', () => {
     const { text } = renderMail(mail);
     expect(text).toContain('Hello Wren,\nyou asked');
