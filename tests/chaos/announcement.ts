@@ -17,7 +17,9 @@ const VICTIMS = ['worker', 'web', 'mail', 'PostgreSQL'] as const;
 type Victim = (typeof VICTIMS)[number];
 
 /** A round that has not come to its end by then has lost its way. */
-const ROUND_MS = 5 * 60_000;
+const ROUND_MS = 10 * 60_000;
+const POLL_MS = 200;
+const KILLS_OF_EACH = 2;
 
 /** How one round went. */
 export interface Round extends Tally {
@@ -31,7 +33,7 @@ export interface Round extends Tally {
 
 /**
  * Announces an episode to 500 subscribers on a whole copy of the product, and kills its worker, web server, mail
- * server and database with SIGKILL at random moments meanwhile. Each is killed at least once.
+ * server and database with SIGKILL at random moments meanwhile, each twice.
  * @param random gives numbers from 0 to 1
  */
 export async function announceUnderFire(random: () => number): Promise<Round> {
@@ -48,20 +50,22 @@ export async function announceUnderFire(random: () => number): Promise<Round> {
     await start(product);
     const begun = Date.now();
     const kills = { worker: 0, web: 0, mail: 0, PostgreSQL: 0 };
+    const plan = planKills(random);
     let states: Record<string, number> = {};
     for (;;) {
-      if (Date.now() - begun > ROUND_MS)
-        throw new Error(`A round was not over in time: ${JSON.stringify(states)}`);
-      await wait(500 + random() * 3_000);
+      if (Date.now() - begun > ROUND_MS) {
+        throw new Error(`A round was not over in time: ${JSON.stringify({ states, kills })}`);
+      }
+      await wait(POLL_MS);
       const now = await readStates(product);
       states = now?.states ?? states;
       if (now?.announcement === 'sent') break;
-      // Before half of it is out whoever was not killed yet is next; then it is left in peace to finish.
-      const unhurt = VICTIMS.filter((victim) => kills[victim] === 0);
-      if (unhurt.length === 0 && (states['sent'] ?? 0) > SUBSCRIBERS / 2) continue;
-      const from = unhurt.length > 0 ? unhurt : VICTIMS;
-      const victim = from[Math.floor(random() * from.length)] ?? 'worker';
-      if (kill(product, victim)) kills[victim] += 1;
+      const [next] = plan;
+      if (next === undefined || (states['sent'] ?? 0) < next.at) continue;
+      await wait(random() * 1_000);
+      if (!kill(product, next.victim)) continue;
+      kills[next.victim] += 1;
+      plan.shift();
     }
     const counted = tally(
       await outboxAt(product.environment['OUTBOX_URL'] ?? '').messages({ limit: '1000' }),
@@ -83,6 +87,13 @@ export async function announceUnderFire(random: () => number): Promise<Round> {
     await product.stop();
     folder.remove();
   }
+}
+
+/** Who is killed, and after how many sent messages, in the order in which it happens. */
+function planKills(random: () => number): { victim: Victim; at: number }[] {
+  return VICTIMS.flatMap((victim) => Array<Victim>(KILLS_OF_EACH).fill(victim))
+    .map((victim) => ({ victim, at: Math.floor(random() * SUBSCRIBERS * 0.9) }))
+    .sort((a, b) => a.at - b.at);
 }
 
 async function start({ environment }: StartedProduct): Promise<void> {
