@@ -11,7 +11,7 @@ import { Forbidden, NotFound, SecondFactorNeeded, SignInNeeded } from './errors.
 
 export interface Rule<P extends Permission = Permission> {
   readonly may: P;
-  /** False for account verbs: better-auth writes on connections of its own. */
+  /** False for account verbs, since better-auth writes on connections of its own, and where mail goes at once. */
   readonly transaction?: false;
 }
 

@@ -2,7 +2,7 @@ import { type JobDefinition } from '../../server/jobs/queue.ts';
 
 const load = async () => (await import('./server/send-messages.ts')).sendMessages;
 
-export const sendAnnouncementJob: JobDefinition = {
+const sendAnnouncementJob: JobDefinition = {
   name: 'send-announcement',
   on: 'announcement-started',
   tries: 3,
@@ -11,7 +11,7 @@ export const sendAnnouncementJob: JobDefinition = {
 };
 
 /** What a lap has left, or a killed worker had in hand, goes on with the next minute, or with the next worker. */
-export const carryOnAnnouncementsJob: JobDefinition = {
+const carryOnAnnouncementsJob: JobDefinition = {
   name: 'carry-on-announcements',
   on: { cron: '* * * * *' },
   alsoAtStart: true,
@@ -20,4 +20,16 @@ export const carryOnAnnouncementsJob: JobDefinition = {
   load,
 };
 
-export const audienceJobs: readonly JobDefinition[] = [sendAnnouncementJob, carryOnAnnouncementsJob];
+const forgetUnconfirmedJob: JobDefinition = {
+  name: 'forget-unconfirmed',
+  on: { cron: '43 3 * * *' },
+  tries: 3,
+  retryDelaySeconds: 60,
+  load: async () => (await import('./server/forget-unconfirmed.ts')).forgetUnconfirmed,
+};
+
+export const audienceJobs: readonly JobDefinition[] = [
+  sendAnnouncementJob,
+  carryOnAnnouncementsJob,
+  forgetUnconfirmedJob,
+];

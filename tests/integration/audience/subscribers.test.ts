@@ -4,6 +4,7 @@ import { subscribers } from '../../../src/db/schema/audience.ts';
 import { confirmSubscription } from '../../../src/features/audience/server/confirm-subscription.ts';
 import { countSubscribers } from '../../../src/features/audience/server/count-subscribers.ts';
 import { exportSubscribers } from '../../../src/features/audience/server/export-subscribers.ts';
+import { forgetUnconfirmed } from '../../../src/features/audience/server/forget-unconfirmed.ts';
 import { leave } from '../../../src/features/audience/server/leave.ts';
 import { listSubscribers } from '../../../src/features/audience/server/list-subscribers.ts';
 import { subscribe } from '../../../src/features/audience/server/subscribe.ts';
@@ -136,6 +137,18 @@ describe('confirming', () => {
       .set({ askedAt: new Date(0) })
       .where(eq(subscribers.id, id));
     expect(codeOf(await again())).toBe('invalid');
+  });
+
+  test('that never happens has the address erased', async () => {
+    await subscribe(shed.anyone, { email: 'stranger@example.com' });
+    await subscribe(shed.anyone, { email: 'late@example.com' });
+    await services.db
+      .update(subscribers)
+      .set({ askedAt: new Date(0) })
+      .where(eq(subscribers.email, 'stranger@example.com'));
+    await forgetUnconfirmed(services, {});
+    expect(await rowOf('stranger@example.com')).toBeUndefined();
+    expect(await rowOf('late@example.com')).toBeDefined();
   });
 
   test('is refused when another site sends it', async () => {

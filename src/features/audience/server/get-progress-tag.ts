@@ -1,4 +1,4 @@
-import { and, desc, eq, ne } from 'drizzle-orm';
+import { and, desc, eq, ne, sql } from 'drizzle-orm';
 import { announcements, messages } from '../../../db/schema/audience.ts';
 import { NotFound } from '../../../server/errors.ts';
 import { read } from '../../../server/verb.ts';
@@ -8,20 +8,28 @@ import { type EpisodeRef } from '../../episodes/server/load-episode.ts';
 export const getProgressTag = read(
   { may: 'announcement.ask-to-send' },
   async ({ db, workshop }, ref: EpisodeRef): Promise<string> => {
+    // By itself, so that it is one look at the end of an index.
+    const newest = db
+      .select({ at: messages.updatedAt })
+      .from(messages)
+      .where(eq(messages.announcementId, announcements.id))
+      .orderBy(desc(messages.updatedAt))
+      .limit(1);
     const [row] = await db
-      .select({ version: announcements.version, state: announcements.state, at: messages.updatedAt })
+      .select({
+        version: announcements.version,
+        state: announcements.state,
+        at: sql<string | null>`(${newest})::text`,
+      })
       .from(announcements)
-      .leftJoin(messages, eq(messages.announcementId, announcements.id))
       .where(
         and(
           eq(announcements.workshopId, workshop.id),
           eq(announcements.episodeId, ref.episode),
           ne(announcements.state, 'cancelled'),
         ),
-      )
-      .orderBy(desc(messages.updatedAt))
-      .limit(1);
+      );
     if (!row) throw new NotFound('This announcement');
-    return `${String(row.version)}-${row.state}-${String(row.at?.getTime() ?? 0)}`;
+    return `${String(row.version)}-${row.state}-${row.at?.replaceAll(/\D/g, '') ?? ''}`;
   },
 );

@@ -1,4 +1,4 @@
-import { eq } from 'drizzle-orm';
+import { eq, sql } from 'drizzle-orm';
 import { newId } from '../../../db/columns.ts';
 import { type Database } from '../../../db/client.ts';
 import { announcements, messages } from '../../../db/schema/audience.ts';
@@ -67,7 +67,7 @@ export const sendAnnouncement = verb(
       );
     }
     const host = new URL(services.settings.PUBLIC_URL).hostname;
-    await fixList(db, { workshopId: workshop.id, announcementId: id, host, now }, recipients);
+    await fixList(db, { workshopId: workshop.id, announcementId: id, host }, recipients);
     await services.jobs.enqueue(db, 'announcement-started', { announcementId: id });
     return { id };
   },
@@ -79,11 +79,10 @@ async function fixList(
     readonly workshopId: string;
     readonly announcementId: string;
     readonly host: string;
-    readonly now: Date;
   },
   recipients: readonly { readonly id: string }[],
 ): Promise<void> {
-  const { workshopId, announcementId, host, now } = of;
+  const { workshopId, announcementId, host } = of;
   for (let from = 0; from < recipients.length; from += ROWS_AT_ONCE) {
     await db.insert(messages).values(
       recipients.slice(from, from + ROWS_AT_ONCE).map((subscriber) => {
@@ -94,7 +93,8 @@ async function fixList(
           announcementId,
           subscriberId: subscriber.id,
           messageId: `<message.${id}@${host}>`,
-          notBefore: now,
+          // The workers go by the database's clock.
+          notBefore: sql`now()`,
         };
       }),
     );
