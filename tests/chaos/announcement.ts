@@ -54,7 +54,8 @@ export async function announceUnderFire(random: () => number): Promise<Round> {
     let states: Record<string, number> = {};
     for (;;) {
       if (Date.now() - begun > ROUND_MS) {
-        throw new Error(`A round was not over in time: ${JSON.stringify({ states, kills })}`);
+        const said = product.printed().slice(-2_000);
+        throw new Error(`A round was not over in time: ${JSON.stringify({ states, kills })}\n${said}`);
       }
       await wait(POLL_MS);
       const now = await readStates(product);
