@@ -5,6 +5,7 @@ import { diaryEntries } from '../../../src/db/schema/diary.ts';
 import { episodes } from '../../../src/db/schema/episodes.ts';
 import { anchors, appearances, chapters, notes } from '../../../src/db/schema/notes.ts';
 import { parts } from '../../../src/db/schema/parts.ts';
+import { questionParts, questions } from '../../../src/db/schema/questions.ts';
 import { addStage } from '../../../src/features/builds/server/add-stage.ts';
 import { deleteBuild } from '../../../src/features/builds/server/delete-build.ts';
 import { deleteStage } from '../../../src/features/builds/server/delete-stage.ts';
@@ -48,9 +49,31 @@ const anEntry = (given: Record<string, string> = {}, { owner } = shed) =>
 /** A film of the build with its object, as one of an episode. */
 const aFilm = () => aKeptVideo(shed.owner, buildId, { seconds: 60, bytes: new Uint8Array(100) });
 
+/** What a viewer asked, about a note or a part. */
+async function aQuestion(about: { noteId?: string | undefined; partId?: string }, { owner } = shed) {
+  const build = await getBuild(owner, ref);
+  const tenant = { workshopId: owner.workshop.id };
+  const asked = { text: 'How deep?', source: 'mail', askerName: 'Ida', noteId: about.noteId } as const;
+  const [row] = await db
+    .insert(questions)
+    .values({ ...tenant, ...asked, buildId: build.id })
+    .returning({ id: questions.id });
+  const id = row?.id ?? '';
+  const { partId } = about;
+  if (partId !== undefined)
+    await db.insert(questionParts).values({ ...tenant, questionId: id, partId, position: 0 });
+  return id;
+}
+
 const has = async (
   table:
-    typeof notes | typeof stages | typeof diaryEntries | typeof parts | typeof episodes | typeof chapters,
+    | typeof notes
+    | typeof stages
+    | typeof diaryEntries
+    | typeof parts
+    | typeof episodes
+    | typeof chapters
+    | typeof questions,
   id: string,
 ) => (await db.select({ id: table.id }).from(table).where(eq(table.id, id))).length === 1;
 
@@ -64,6 +87,7 @@ describe('what was deleted', () => {
     const gone = await anEntry();
     const [note] = await db.select({ id: notes.id, anchorId: notes.anchorId }).from(notes);
     const [chapter] = (await getDesk(shed.owner, of)).chapters;
+    const asked = await aQuestion({ noteId: note?.id });
     await deleteNote(shed.owner, { ...of, note: note?.id ?? '', version: 1 });
     await deleteChapter(shed.owner, { ...of, chapter: chapter?.id ?? '', version: 1 });
     await deleteStage(shed.owner, { ...ref, stage: stage.id, version: 1, entries: 'none' });
@@ -74,6 +98,7 @@ describe('what was deleted', () => {
     expect(await has(stages, stage.id)).toBe(true);
     await eraseDeleted(services, inDays(31));
     expect(await has(notes, note?.id ?? '')).toBe(false);
+    expect(await has(questions, asked)).toBe(true);
     expect(
       await db
         .select()
@@ -99,6 +124,9 @@ describe('what was deleted', () => {
     const [named, unnamed] = [partIds.get('117') ?? '', partIds.get('118') ?? ''];
     await deletePart(shed.owner, { ...ref, part: named, version: 1 });
     await deletePart(shed.owner, { ...ref, part: unnamed, version: 1 });
+    const third = partIds.get('125') ?? '';
+    await aQuestion({ partId: third });
+    await db.update(parts).set({ deletedAt: new Date() }).where(eq(parts.id, third));
     const tenant = { workshopId: shed.id };
     const [anchor] = await db
       .insert(anchors)
@@ -107,6 +135,7 @@ describe('what was deleted', () => {
     await db.insert(appearances).values({ ...tenant, anchorId: anchor?.id ?? '', partId: named });
     await eraseDeleted(services, inDays(31));
     expect(await has(parts, named)).toBe(true);
+    expect(await has(parts, third)).toBe(true);
     expect(await has(parts, unnamed)).toBe(false);
   });
 
@@ -118,6 +147,7 @@ describe('what was deleted', () => {
     const fileId = await aKeptVideo(other.owner, gone.id, film);
     const stays = await aFilm();
     await aShownEpisode(other.owner, ids, { fileId });
+    await aQuestion({ partId: ids.get('117') ?? '' }, other);
     const stage = await addStage(other.owner, { ...ref, name: 'Mill', about: '' });
     await anEntry({ stage: stage.id }, other);
     await deleteBuild(other.owner, { ...ref, version: gone.version });
