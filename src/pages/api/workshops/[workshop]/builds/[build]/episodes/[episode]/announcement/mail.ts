@@ -3,7 +3,7 @@ import { episodeParams } from '../../../../../../../../../features/audience/audi
 import { getAnnouncement } from '../../../../../../../../../features/audience/server/get-announcement.ts';
 import { apiRoute, NONE } from '../../../../../../../../../server/http/api-route.ts';
 
-/** The HTML part of the mail, for the frame on the announcement's page: as a mailbox shows it, without scripts. */
+/** The HTML part of the mail, as a mailbox shows it, without scripts. */
 export const GET = apiRoute({
   verb: getAnnouncement,
   params: episodeParams,
@@ -16,8 +16,7 @@ export const GET = apiRoute({
         'cache-control': 'private, no-store',
         // A mail brings its styles in its elements.
         'content-security-policy':
-          "default-src 'none'; style-src 'unsafe-inline'; frame-ancestors 'self'; sandbox",
-        'x-frame-options': 'SAMEORIGIN',
+          "default-src 'none'; style-src 'unsafe-inline'; frame-ancestors 'none'; sandbox",
       },
     }),
 });
