@@ -2,6 +2,7 @@ import { makeWorkshop } from '../features/workshops/server/make-workshop.ts';
 import { type Services } from '../server/services.ts';
 import { addSecondFactor, contextFor, DEMO_PASSWORD, joinTeam, makePerson } from './people.ts';
 import { seedPress } from './press.ts';
+import { seedQuestions } from './press-questions.ts';
 import { seedSubscribers } from './subscribers.ts';
 
 const SLUG = 'marram-lane';
@@ -36,19 +37,23 @@ export async function seedDemo(
   const { person: owner, key } = await addSecondFactor(services, made);
   const editor = await makePerson(services, PEOPLE.editor, tokenFor);
   await joinTeam(services, { owner, slug: SLUG }, editor, 'editor');
-  await joinTeam(
-    services,
-    { owner, slug: SLUG },
-    await makePerson(services, PEOPLE.moderator, tokenFor),
-    'moderator',
-  );
+  const moderator = await makePerson(services, PEOPLE.moderator, tokenFor);
+  await joinTeam(services, { owner, slug: SLUG }, moderator, 'moderator');
   await services.storage.prepare();
   await seedPress({
     owner: await contextFor(services, owner, SLUG),
     editor: await contextFor(services, editor, SLUG),
   });
-  await makePerson(services, PEOPLE.viewer, tokenFor);
-  await makePerson(services, PEOPLE.builder, tokenFor);
+  const viewer = await makePerson(services, PEOPLE.viewer, tokenFor);
+  const builder = await makePerson(services, PEOPLE.builder, tokenFor);
+  await seedQuestions({
+    owner: await contextFor(services, owner, SLUG),
+    editor: await contextFor(services, editor, SLUG),
+    moderator: await contextFor(services, moderator, SLUG),
+    viewer: await contextFor(services, viewer, SLUG),
+    builder: await contextFor(services, builder, SLUG),
+    anyone: await contextFor(services, null, SLUG),
+  });
   await seedSubscribers(await contextFor(services, owner, SLUG), await contextFor(services, null, SLUG));
   return Object.entries(PEOPLE).map(([who, { email }]) => ({
     who,
