@@ -1,31 +1,7 @@
-import { writeFile } from 'node:fs/promises';
 import { type Page } from '@playwright/test';
 import { paths } from '../../src/paths.ts';
+import { cutVideo, makeBuildFromList, writeNote } from '../support/e2e/maker-steps.ts';
 import { expect, test } from '../support/e2e/test.ts';
-import { makeMedia } from '../support/media-samples.ts';
-
-/** Sixteen seconds whose every frame says its own number. @param pattern the source of ffmpeg that draws them */
-async function cut(path: string, pattern: string): Promise<string> {
-  const picture = ['-f', 'lavfi', '-i', `${pattern}=size=320x180:rate=25:duration=16`];
-  const coding = ['-c:v', 'libx264', '-preset', 'ultrafast', '-g', '25', '-pix_fmt', 'yuv420p'];
-  await writeFile(path, await makeMedia('cut.mp4', ...picture, ...coding));
-  return path;
-}
-
-/** Writes a note on the desk at a time, as a maker does: the time typed, the kind by its key, the part by its number. */
-async function writeNote(desk: Page, time: string, words: string, part: string): Promise<void> {
-  const composer = desk.getByRole('region', { name: 'New note' });
-  await desk.getByLabel('Go to a time, such as 3:41').fill(time);
-  await desk.keyboard.press('Enter');
-  await desk.keyboard.press('Escape');
-  await desk.keyboard.press('1');
-  await expect(composer.getByLabel('Words')).toBeFocused();
-  await desk.keyboard.type(words);
-  await composer.getByRole('combobox', { name: 'Parts' }).fill(part);
-  await desk.keyboard.press('Enter');
-  await composer.getByRole('button', { name: 'Save the note' }).click();
-  await expect(desk.getByRole('region', { name: 'Notes' }).getByText(words)).toBeVisible();
-}
 
 async function show(page: Page, seconds: number): Promise<void> {
   await page.locator('video').evaluate(async (video: HTMLVideoElement, at) => {
@@ -55,35 +31,14 @@ test('an owner and an editor take a build from a list of parts to a page that vi
   await signIn(maker);
   const { workshop } = maker;
 
-  await owner.goto(paths.newBuild(workshop));
-  await owner.getByLabel('Name', { exact: true }).fill('Orchard press');
-  await owner.getByLabel('Address name').fill('press');
-  await owner.getByRole('button', { name: 'Make the build' }).click();
-  await expect(owner).toHaveURL(new RegExp(`/bench/${workshop}/press/`));
-  await owner.goto(paths.importParts(workshop, 'press'));
-  const list = 'Mark;Called;Off\n117;drum shaft;1\n118;bearing housing;2\n';
-  await owner
-    .getByLabel('A file')
-    .setInputFiles({ name: 'parts.csv', mimeType: 'text/csv', buffer: Buffer.from(list) });
-  await owner.getByRole('button', { name: 'Read the list' }).click();
-  await owner.getByLabel('names the columns').check();
-  await owner.getByLabel('Number', { exact: true }).selectOption('0');
-  await owner.getByLabel('Name', { exact: true }).selectOption('1');
-  await owner.getByLabel('Needed').selectOption('2');
-  await owner.getByRole('button', { name: 'Look it over' }).click();
-  await owner.getByRole('button', { name: 'Take 2 parts in' }).click();
-  await expect(owner.getByText('2 added, 0 updated.')).toBeVisible();
-  await owner.goto(paths.buildSettings(workshop, 'press'));
-  await owner.getByLabel('Everyone').check();
-  await owner.getByRole('button', { name: 'Save this build' }).click();
-  await expect(owner.getByText('On show at')).toBeVisible();
+  await makeBuildFromList(owner, workshop);
 
   const editor = await (await openBrowser(helper)).newPage();
   await editor.goto(paths.footage(workshop, 'press'));
   const [first, second] = [testInfo.outputPath('first-cut.mp4'), testInfo.outputPath('second-cut.mp4')];
   await editor
     .getByLabel('Choose files…')
-    .setInputFiles([await cut(first, 'testsrc2'), await cut(second, 'testsrc')]);
+    .setInputFiles([await cutVideo(first, 'testsrc2'), await cutVideo(second, 'testsrc')]);
   for (const name of ['first-cut.mp4', 'second-cut.mp4'])
     await expect(editor.getByRole('region', { name: 'Clips' }).getByRole('link', { name })).toBeVisible({
       timeout: 60_000,
