@@ -46,7 +46,7 @@ test('an owner, a moderator and two viewers go from a list of parts and a video 
   await owner.getByRole('link', { name: 'Publish…' }).click();
   await owner.getByRole('button', { name: 'Publish the episode' }).click();
   await owner.getByRole('link', { name: 'See the announcement' }).click();
-  await owner.getByRole('button', { name: 'Mail it to 1 person' }).click();
+  await owner.getByRole('button', { name: 'Mail it to 1 subscriber' }).click();
   const told = await outbox.messageTo(following, (await outbox.messages({ to: following }))[0]?.id ?? '');
   expect(told.subject).toContain('The drum shaft');
   const shown = paths.episode(workshop, 'press', 1);
@@ -84,7 +84,9 @@ test('an owner, a moderator and two viewers go from a list of parts and a video 
 
   await owner.goto(paths.today(workshop));
   await owner.getByRole('link', { name: /What pressure/ }).click();
-  await expect(owner.getByLabel('Answer')).toHaveValue('165 bar, and sealed.');
+  await expect(owner.getByRole('textbox', { name: 'Answer', exact: true })).toHaveValue(
+    '165 bar, and sealed.',
+  );
   await owner.getByRole('button', { name: 'Send the answer' }).click();
   const answered = await outbox.messageTo(asking, link.id);
   expect(answered.text).toContain('165 bar, and sealed.');
