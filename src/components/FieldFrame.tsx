@@ -36,7 +36,7 @@ export function FieldFrame({ id, label, hint, error, required = false, children 
     <div className="grid gap-1">
       <label htmlFor={id} className="justify-self-start font-medium">
         {label}
-        {!required && <span className="ps-2 text-sm font-normal text-ink-soft">can be left out</span>}
+        {!required && <span className="ps-1 text-sm font-normal text-ink-soft"> can be left out</span>}
       </label>
       {hint !== undefined && (
         <p id={`${id}-hint`} className="text-sm text-ink-soft">

@@ -17,8 +17,6 @@ export function securityHeaders(publicUrl: string): HeaderPair[] {
   const scratch = new ServerResponse(new IncomingMessage(new Socket()));
   const middleware = helmet({
     contentSecurityPolicy: false,
-    // A frame of ours without scripts cannot have it, and browsers warn of the difference.
-    originAgentCluster: false,
     crossOriginOpenerPolicy: { policy: 'same-origin' },
     crossOriginResourcePolicy: { policy: 'same-origin' },
     referrerPolicy: { policy: 'same-origin' },

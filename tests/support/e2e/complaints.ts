@@ -2,9 +2,6 @@ import { type BrowserContext, type ConsoleMessage } from '@playwright/test';
 
 const OWN_STATUS = /^Failed to load resource: the server responded with a status of (4\d\d|500)/;
 
-/** The recorder of traces puts a script into every frame; one that may not run any says so. */
-const RECORDER_REFUSED = /^Blocked script execution in '[^']+' because the document's frame is sandboxed/;
-
 /**
  * Collects what the browser complains about: errors and warnings in the console, the policy's violations among
  * them, and errors that nothing caught. A page that is itself answered with 4xx is the spec's own business.
@@ -16,7 +13,6 @@ export function listenForComplaints(context: BrowserContext, complaints: string[
   });
   context.on('console', (message) => {
     if (!['error', 'warning'].includes(message.type()) || isOwnStatus(message, documents)) return;
-    if (RECORDER_REFUSED.test(message.text())) return;
     complaints.push(`${message.type()}: ${message.text()} (${message.location().url})`);
   });
   context.on('weberror', (error) => {
