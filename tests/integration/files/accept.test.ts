@@ -3,14 +3,7 @@ import { PDFDocument } from 'pdf-lib';
 import sharp from 'sharp';
 import { describe, expect, test } from 'vitest';
 import { incomingKey, keyOf } from '../../../src/server/storage/storage.ts';
-import {
-  look,
-  makeFilm,
-  makeHeic,
-  makeMedia,
-  makePhoto,
-  makeSound,
-} from '../../support/media-samples.ts';
+import { look, makeFilm, makeHeic, makeMedia, makePhoto, makeSound } from '../../support/media-samples.ts';
 import { aWorkshop } from '../../support/people.ts';
 import { storageServices } from '../../support/storage.ts';
 import { aBuild, check, rowOf, upload, uploadAndCheck } from '../../support/uploads.ts';
