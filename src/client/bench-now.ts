@@ -28,6 +28,9 @@ export class BenchNow extends HTMLElement {
         copy.removeAttribute('data-part');
         copy.toggleAttribute('data-filled', filled);
         if (filled && selector === undefined) copy.setAttribute('aria-current', 'true');
+        // The balloons alone stand in a summary, which holds no links.
+        if (selector !== undefined)
+          for (const link of copy.querySelectorAll('a')) link.replaceWith(...link.childNodes);
         return [copy];
       });
     for (const list of this.querySelectorAll('[data-bench-list]')) list.replaceChildren(...copies());

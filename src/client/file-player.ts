@@ -14,13 +14,15 @@ export function filePlayer(video: HTMLVideoElement, { rate, onFrame, onLength }:
   };
   if ('requestVideoFrameCallback' in video) {
     const next = (_now: number, { mediaTime }: VideoFrameCallbackMetadata) => {
-      onFrame(mediaTimeToFrame(Math.max(0, mediaTime), rate), mediaTime);
+      // While another instant is sought, this is a frame of where it was.
+      if (!video.seeking) onFrame(mediaTimeToFrame(Math.max(0, mediaTime), rate), mediaTime);
       video.requestVideoFrameCallback(next);
     };
     video.requestVideoFrameCallback(next);
   } else {
     (video as HTMLVideoElement).addEventListener('timeupdate', sayClock);
   }
+  video.addEventListener('seeked', sayClock);
   video.addEventListener('durationchange', sayLength);
   if (video.readyState > 0) sayLength();
   video.addEventListener('error', retry);
