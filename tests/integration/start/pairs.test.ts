@@ -63,7 +63,7 @@ afterAll(async () => {
   folder.remove();
 });
 
-test('a change is seen within a second at both web servers, which had kept the page', async () => {
+test('a change is seen at both web servers, which had kept the page', async () => {
   const page = paths.workshop(owner.workshop);
   const both = () => Promise.all(ports.map((port) => ask(port, page)));
   const named = async (name: string) => (await both()).every((html) => html.includes(`>${name}</h1>`));
@@ -71,7 +71,8 @@ test('a change is seen within a second at both web servers, which had kept the p
   for (const name of ['Two of everything', 'Two and no more']) {
     const context = await contextFor(product.services, owner, owner.workshop);
     await changeSettings(context, ChangeSettingsInput.parse({ ...(await getSettings(context, {})), name }));
-    await vi.waitUntil(() => named(name), { timeout: 1_000, interval: 50 });
+    // That it takes less than a second is for the test of page changes, on a page that costs nothing to render.
+    await vi.waitUntil(() => named(name), { timeout: 10_000, interval: 50 });
   }
 });
 
