@@ -11,6 +11,7 @@ import {
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core';
+import { type AnnouncementContent } from '../../domain/audience/announcement-content.ts';
 import {
   ANNOUNCEMENT_STATES,
   MESSAGE_STATES,
@@ -56,19 +57,6 @@ export const subscribers = pgTable(
     }).onDelete('cascade'),
   ],
 );
-
-/** What an announcement says, fixed when it is sent. */
-export interface AnnouncementContent {
-  readonly workshop: string;
-  readonly build: string;
-  readonly number: number;
-  readonly title: string;
-  readonly about: string;
-  /** The owner's own, above the rest. */
-  readonly words: string;
-  /** The whole address of the episode's page. */
-  readonly link: string;
-}
 
 /** The mail about one episode, to everyone who asked for it. */
 export const announcements = pgTable(

@@ -1,7 +1,7 @@
 /** How the two ends of a cylinder are held. */
 export type Mounting = 'pinned' | 'fixed-pinned' | 'fixed-fixed' | 'fixed-free';
 
-/** Effective length factors of the four cases of Euler: any text on strength of materials; here for ideal ends. */
+/** Effective length factors for ideal ends: ANSI/AISC 360, commentary, table C-A-7.1, theoretical values. From memory. */
 export const LENGTH_FACTORS: Readonly<Record<Mounting, number>> = {
   pinned: 1,
   'fixed-pinned': 0.7,

@@ -1,3 +1,4 @@
+import { type AnnouncementContent } from '../../domain/audience/announcement-content.ts';
 import { type Mail, type MailBlock } from '../../domain/mail.ts';
 import { CONFIRM_DAYS } from './audience.ts';
 
@@ -44,17 +45,12 @@ export function alreadySubscribedMail(props: {
 }
 
 /** An episode is out. */
-export function announcementMail(props: {
-  readonly workshop: string;
-  readonly build: string;
-  readonly number: number;
-  readonly title: string;
-  readonly about: string;
-  /** The owner's own words, above the rest; may be empty. */
-  readonly words: string;
-  readonly link: string;
-  readonly leave: string;
-}): Mail {
+export function announcementMail(
+  props: AnnouncementContent & {
+    /** Where one reader leaves the list. */
+    readonly leave: string;
+  },
+): Mail {
   const episode = `Episode ${String(props.number)}`;
   const paragraphs = (text: string): MailBlock[] =>
     text

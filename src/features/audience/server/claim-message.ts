@@ -38,24 +38,7 @@ function ofAnnouncement(id: string | undefined): SQL | undefined {
  */
 export async function claimMessage(db: Services['db'], announcementId: string | undefined) {
   return db.transaction(async (tx) => {
-    const [next] = await tx
-      .select({
-        id: messages.id,
-        messageId: messages.messageId,
-        subscriberId: messages.subscriberId,
-        tries: messages.tries,
-        content: announcements.content,
-        email: subscribers.email,
-      })
-      .from(messages)
-      .innerJoin(announcements, eq(announcements.id, messages.announcementId))
-      .innerJoin(
-        subscribers,
-        and(eq(subscribers.id, messages.subscriberId), eq(subscribers.state, 'confirmed')),
-      )
-      .innerJoin(episodes, eq(episodes.id, announcements.episodeId))
-      .innerJoin(builds, eq(builds.id, episodes.buildId))
-      .where(and(ofAnnouncement(announcementId), onShow, isFree()))
+    const [next] = await openMessages(tx, and(ofAnnouncement(announcementId), onShow, isFree()))
       .orderBy(asc(messages.notBefore), asc(messages.id))
       .limit(1)
       .for('update', { of: messages, skipLocked: true });
@@ -82,15 +65,23 @@ export async function findWork(
   db: Database,
   announcementId: string | undefined,
 ): Promise<'now' | 'later' | 'none'> {
-  const [due] = await openMessages(db, and(ofAnnouncement(announcementId), onShow, isFree()));
+  const [due] = await openMessages(db, and(ofAnnouncement(announcementId), onShow, isFree())).limit(1);
   if (due) return 'now';
-  const [later] = await openMessages(db, ofAnnouncement(announcementId));
+  const [later] = await openMessages(db, ofAnnouncement(announcementId)).limit(1);
   return later ? 'later' : 'none';
 }
 
+/** Messages that are not done, to people who are on the list, each with what it says. */
 function openMessages(db: Database, where: SQL | undefined) {
   return db
-    .select({ id: messages.id })
+    .select({
+      id: messages.id,
+      messageId: messages.messageId,
+      subscriberId: messages.subscriberId,
+      tries: messages.tries,
+      content: announcements.content,
+      email: subscribers.email,
+    })
     .from(messages)
     .innerJoin(announcements, eq(announcements.id, messages.announcementId))
     .innerJoin(
@@ -99,8 +90,7 @@ function openMessages(db: Database, where: SQL | undefined) {
     )
     .innerJoin(episodes, eq(episodes.id, announcements.episodeId))
     .innerJoin(builds, eq(builds.id, episodes.buildId))
-    .where(and(where, sql`${messages.state} in ('waiting', 'sending')`))
-    .limit(1);
+    .where(and(where, sql`${messages.state} in ('waiting', 'sending')`));
 }
 
 /**

@@ -1,12 +1,8 @@
 import { createHash } from 'node:crypto';
 import { and, asc, eq, inArray, isNull, ne, notExists, or, sql } from 'drizzle-orm';
 import { type Database } from '../../../db/client.ts';
-import {
-  type AnnouncementContent,
-  announcements,
-  messages,
-  subscribers,
-} from '../../../db/schema/audience.ts';
+import { announcements, messages, subscribers } from '../../../db/schema/audience.ts';
+import { type AnnouncementContent } from '../../../domain/audience/announcement-content.ts';
 import {
   type AnnouncementState,
   NEXT_ANNOUNCEMENT_STATES,

@@ -6,8 +6,7 @@ export function DropZone({ onFiles }: { readonly onFiles: (files: readonly File[
   const inputId = useId();
   const [over, setOver] = useState(false);
   return (
-    // Dropping is a shortcut of the pointer; the button inside is the way for everyone.
-    // eslint-disable-next-line jsx-a11y/no-static-element-interactions
+    // eslint-disable-next-line jsx-a11y/no-static-element-interactions -- Dropping is a shortcut of the pointer; the button inside is the way for everyone.
     <div
       className={joinClasses(
         'flex flex-wrap items-center gap-x-6 gap-y-3 border border-dashed px-4 py-6',
