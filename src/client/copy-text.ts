@@ -1,5 +1,4 @@
-/** How long it says that the text was copied, in milliseconds. */
-const SAID_MS = 4000;
+import { copy } from './copy.ts';
 
 /** Copies the text of its textarea; where nothing may be copied, selects it. Without a script the text stands there. */
 class CopyText extends HTMLElement {
@@ -12,14 +11,7 @@ class CopyText extends HTMLElement {
   async #copy(): Promise<void> {
     const field = this.querySelector('textarea');
     const status = this.querySelector('[role="status"]');
-    try {
-      await navigator.clipboard.writeText(field?.value ?? '');
-      if (!status) return;
-      status.textContent = 'Copied.';
-      setTimeout(() => (status.textContent = ''), SAID_MS);
-    } catch {
-      field?.select();
-    }
+    if (!(await copy(field?.value ?? '', status, 'Copied.'))) field?.select();
   }
 }
 

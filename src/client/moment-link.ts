@@ -1,7 +1,5 @@
+import { copy } from './copy.ts';
 import { followOf } from './video-now.ts';
-
-/** How long it says that the link was copied, in milliseconds. */
-const SAID_MS = 4000;
 
 /** Copies a link to the present instant; where nothing may be copied, shows it selected. */
 export class MomentLink extends HTMLElement {
@@ -14,16 +12,9 @@ export class MomentLink extends HTMLElement {
     const link = location.origin + location.pathname + (seconds === 0 ? '' : `?t=${String(seconds)}`);
     const field = this.querySelector('input');
     const status = this.querySelector('[role="status"]');
-    try {
-      await navigator.clipboard.writeText(link);
-      if (!status) return;
-      status.textContent = 'Link copied.';
-      setTimeout(() => (status.textContent = ''), SAID_MS);
-    } catch {
-      if (!field) return;
-      field.value = link;
-      field.closest('[hidden]')?.removeAttribute('hidden');
-      field.select();
-    }
+    if ((await copy(link, status, 'Link copied.')) || !field) return;
+    field.value = link;
+    field.closest('[hidden]')?.removeAttribute('hidden');
+    field.select();
   }
 }

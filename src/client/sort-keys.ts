@@ -1,5 +1,4 @@
-/** As the desk remembers it: one choice for all pages with single keys. */
-const KEY = 'desk-single-keys';
+import { keepSingleKeys, singleKeysAreOn } from './single-keys.ts';
 
 /** Presses the button inside that names the key, as long as nobody is typing and single keys are on. */
 class SortKeys extends HTMLElement {
@@ -7,14 +6,10 @@ class SortKeys extends HTMLElement {
     document.addEventListener('keydown', this.#press);
     const box = this.querySelector<HTMLInputElement>('[data-keys]');
     if (!box) return;
-    box.checked = keysAreOn();
+    box.checked = singleKeysAreOn();
     box.closest('[hidden]')?.removeAttribute('hidden');
     box.addEventListener('change', () => {
-      try {
-        localStorage.setItem(KEY, box.checked ? 'on' : 'off');
-      } catch {
-        // A browser may refuse to remember; the box itself still says so for this page.
-      }
+      keepSingleKeys(box.checked);
     });
   }
 
@@ -26,7 +21,7 @@ class SortKeys extends HTMLElement {
     if (event.ctrlKey || event.metaKey || event.altKey || event.repeat) return;
     if (event.target instanceof Element && event.target.closest('input, textarea, select, [contenteditable]'))
       return;
-    const on = this.querySelector<HTMLInputElement>('[data-keys]')?.checked ?? keysAreOn();
+    const on = this.querySelector<HTMLInputElement>('[data-keys]')?.checked ?? singleKeysAreOn();
     const key = event.key.toLowerCase();
     if (!on || !/^[a-z]$/.test(key)) return;
     const button = this.querySelector<HTMLElement>(`[aria-keyshortcuts="${key}"]`);
@@ -34,14 +29,6 @@ class SortKeys extends HTMLElement {
     event.preventDefault();
     button.click();
   };
-}
-
-function keysAreOn(): boolean {
-  try {
-    return localStorage.getItem(KEY) !== 'off';
-  } catch {
-    return true;
-  }
 }
 
 customElements.define('sort-keys', SortKeys);

@@ -94,16 +94,6 @@ export interface DiaryEntry {
   readonly version: number;
 }
 
-/** Today's date where the workshop is, year first. */
-export function dayIn(timeZone: string, instant: Date): string {
-  return new Intl.DateTimeFormat('en-CA', {
-    timeZone,
-    year: 'numeric',
-    month: '2-digit',
-    day: '2-digit',
-  }).format(instant);
-}
-
 /** A day as it is read: "Tue 3 November 2026". */
 export function sayDay(date: string): string {
   return new Date(`${date}T12:00:00Z`).toLocaleDateString('en-GB', {

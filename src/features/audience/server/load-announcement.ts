@@ -8,6 +8,7 @@ import {
   NEXT_ANNOUNCEMENT_STATES,
 } from '../../../domain/audience/audience-states.ts';
 import { daysSince, NEWS_DAYS } from '../../../domain/audience/announcement-rules.ts';
+import { dayIn } from '../../../domain/time/day-in.ts';
 import { paths } from '../../../paths.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
 import { Conflict, Invalid, NotFound } from '../../../server/errors.ts';
@@ -73,9 +74,7 @@ export function refusalToAnnounce(
 
 /** Whether an episode came out too long ago to be announced without a word from the owner. */
 export function isOldNews({ workshop, now }: WorkshopContext, publishedOn: string | null): boolean {
-  // Swedish writes dates as ISO 8601 does.
-  const today = now.toLocaleDateString('sv-SE', { timeZone: workshop.timeZone });
-  return publishedOn !== null && daysSince(publishedOn, today) > NEWS_DAYS;
+  return publishedOn !== null && daysSince(publishedOn, dayIn(workshop.timeZone, now)) > NEWS_DAYS;
 }
 
 /** What the announcement of an episode says, as of now. */

@@ -3,6 +3,7 @@ import { editions, episodes } from '../../../db/schema/episodes.ts';
 import { NEXT_EPISODE_STATES } from '../../../domain/episode-states.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
 import { Invalid } from '../../../server/errors.ts';
+import { dayIn } from '../../../domain/time/day-in.ts';
 import { verb } from '../../../server/verb.ts';
 import { announceEpisode } from './announce-episode.ts';
 import { findDraftCaptions, findDraftVideo, type EpisodeRef, lockEpisode } from './load-episode.ts';
@@ -56,10 +57,4 @@ async function replaceShown({ db, now }: WorkshopContext, episodeId: string): Pr
     .update(editions)
     .set({ replacedAt: now })
     .where(and(eq(editions.episodeId, episodeId), isNull(editions.replacedAt), isNull(editions.withdrawnAt)));
-}
-
-/** The day it is somewhere, as 2026-11-12. */
-function dayIn(timeZone: string, at: Date): string {
-  // Swedish writes dates as ISO 8601 does.
-  return at.toLocaleDateString('sv-SE', { timeZone });
 }

@@ -1,4 +1,5 @@
 import { and, eq } from 'drizzle-orm';
+import { isId } from '../../../domain/ids.ts';
 import { builds } from '../../../db/schema/builds.ts';
 import { questions } from '../../../db/schema/questions.ts';
 import { NotFound } from '../../../server/errors.ts';
@@ -6,8 +7,6 @@ import { read } from '../../../server/verb.ts';
 import { getPublicBuild } from '../../builds/server/get-public-build.ts';
 import { loadQuestions } from './load-questions.ts';
 import { presentPublic } from './present-question.ts';
-
-const LIKE_AN_ID = /^[\da-f]{8}(-[\da-f]{4}){3}-[\da-f]{12}$/;
 
 /**
  * A question that everyone sees, by its address. One that repeats another gives that other; `id` says which.
@@ -18,7 +17,7 @@ export const getPublicQuestion = read(
   async (context, input: { readonly build: string; readonly question: string }) => {
     const { db, workshop } = context;
     const build = await getPublicBuild(context, input);
-    if (!LIKE_AN_ID.test(input.question)) throw new NotFound('This question');
+    if (!isId(input.question)) throw new NotFound('This question');
     const find = async (id: string) => {
       const [row] = await loadQuestions(
         db,

@@ -2,28 +2,26 @@ import { and, desc, eq } from 'drizzle-orm';
 import { accounts } from '../../../db/schema/accounts.ts';
 import { answers, answerVersions, questions } from '../../../db/schema/questions.ts';
 import { type Database } from '../../../db/client.ts';
+import { isId } from '../../../domain/ids.ts';
 import { NotFound } from '../../../server/errors.ts';
 import { read } from '../../../server/verb.ts';
 import { isBarred } from './find-barred.ts';
-import { findLike } from './find-like.ts';
 import { loadQuestions } from './load-questions.ts';
 import { presentForTeam } from './present-question.ts';
 
-/** A question as its team sees it, with what its answer said before and what it may repeat. @throws NotFound */
+/** A question as its team sees it, with what its answer said before. @throws NotFound */
 export const getQuestion = read(
   { may: 'question.sort' },
   async (context, { question: id }: { readonly question: string }) => {
+    if (!isId(id)) throw new NotFound('This question');
     const { db, workshop } = context;
     const [row] = await loadQuestions(db, and(eq(questions.id, id), eq(questions.workshopId, workshop.id)));
     if (!row) throw new NotFound('This question');
-    const { askerId, askerEmail, buildId, text } = row.question;
-    const like = await findLike(db, buildId, text);
+    const { askerId, askerEmail } = row.question;
     return {
       ...presentForTeam(context, row),
       barred: await isBarred(db, workshop.id, { accountId: askerId, email: askerEmail }),
       canBeBarred: askerId !== null || askerEmail !== null,
-      /** Answered questions like it, which it may repeat. */
-      like: like.filter((one) => one.id !== id),
       earlier: await loadEarlier(db, id),
     };
   },

@@ -1,16 +1,15 @@
 import { type APIRoute } from 'astro';
+import { isId } from '../../../domain/ids.ts';
 import { getMedia } from '../../../features/files/server/get-media.ts';
 import { toErrorAnswer } from '../../../server/http/error-answer.ts';
 import { answerMedia } from '../../../server/http/media-answer.ts';
 import { contextOf } from '../../../server/http/request-context.ts';
 
-const ID = /^[0-9a-f]{8}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{4}-[0-9a-f]{12}$/;
-
 /** Photos, films and plans for whoever may have them; for everyone else there is nothing here. */
 export const GET: APIRoute = async ({ params, request, locals }) => {
   const { file = '', variant = '' } = params;
   try {
-    if (!ID.test(file)) return notHere();
+    if (!isId(file)) return notHere();
     const context = await contextOf(locals.parts, null);
     const media = await getMedia(context, { file, variant });
     return await answerMedia(request, media, context.services.storage, context.now);

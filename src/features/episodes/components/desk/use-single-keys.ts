@@ -1,27 +1,14 @@
 import { useState } from 'react';
-
-const KEY = 'desk-single-keys';
+import { keepSingleKeys, singleKeysAreOn } from '../../../../client/single-keys.ts';
 
 /** Whether keys without Ctrl do anything, as this browser remembers it. */
 export function useSingleKeys() {
-  const [singles, setSingles] = useState(() => read() !== 'off');
+  const [singles, setSingles] = useState(singleKeysAreOn);
   return {
     singles,
     setSingles: (on: boolean) => {
       setSingles(on);
-      try {
-        localStorage.setItem(KEY, on ? 'on' : 'off');
-      } catch {
-        // A browser may refuse to remember; it then holds for this page.
-      }
+      keepSingleKeys(on);
     },
   };
-}
-
-function read(): string | null {
-  try {
-    return localStorage.getItem(KEY);
-  } catch {
-    return null;
-  }
 }
