@@ -2,7 +2,6 @@ import { and, desc, eq } from 'drizzle-orm';
 import { accounts } from '../../../db/schema/accounts.ts';
 import { answers, answerVersions, questions } from '../../../db/schema/questions.ts';
 import { type Database } from '../../../db/client.ts';
-import { isId } from '../../../domain/ids.ts';
 import { NotFound } from '../../../server/errors.ts';
 import { read } from '../../../server/verb.ts';
 import { isBarred } from './find-barred.ts';
@@ -13,7 +12,6 @@ import { presentForTeam } from './present-question.ts';
 export const getQuestion = read(
   { may: 'question.sort' },
   async (context, { question: id }: { readonly question: string }) => {
-    if (!isId(id)) throw new NotFound('This question');
     const { db, workshop } = context;
     const [row] = await loadQuestions(db, and(eq(questions.id, id), eq(questions.workshopId, workshop.id)));
     if (!row) throw new NotFound('This question');
