@@ -13,6 +13,10 @@ const QUEUES_LOCK = 734_202;
 
 export const DEAD_LETTERS = 'dead-letters';
 
+/** deadlock_detected (PostgreSQL, appendix A, class 40). */
+const DEADLOCK = '40P01';
+const DEADLOCK_TRIES = 5;
+
 /** A job whose worker says nothing for so long is given to another. */
 const LIVING_SECONDS = 120;
 const TELL_MS = 20_000;
@@ -71,7 +75,7 @@ export async function openJobQueue(
     monitorStateIntervalSeconds: 30,
   });
   boss.on('error', options.onError);
-  await boss.start();
+  await inTurn(url, () => boss.start());
   const createQueues = (names: readonly string[]) => createMissingQueues(boss, url, names);
   await createQueues([EVENTS_QUEUE]);
   return {
@@ -90,18 +94,32 @@ export async function openJobQueue(
   };
 }
 
-/** One process at a time: each queue is a table of its own, and two that make tables at once deadlock. */
-async function createMissingQueues(boss: PgBoss, url: string, names: readonly string[]): Promise<void> {
+/** One process at a time: starting makes queues too, each is a table of its own, and two that make tables deadlock. */
+async function inTurn(url: string, work: () => Promise<unknown>): Promise<void> {
   const client = new pg.Client({ connectionString: url });
   await client.connect();
   try {
     await client.query('select pg_advisory_lock($1)', [QUEUES_LOCK]);
-    for (const name of [DEAD_LETTERS, ...names]) {
-      if (await boss.getQueue(name)) continue;
-      await boss.createQueue(name, name === DEAD_LETTERS ? { name } : { name, deadLetter: DEAD_LETTERS });
-    }
+    await work();
   } finally {
     await client.end();
+  }
+}
+
+async function createMissingQueues(boss: PgBoss, url: string, names: readonly string[]): Promise<void> {
+  await inTurn(url, async () => {
+    for (const name of [DEAD_LETTERS, ...names]) await createQueue(boss, name);
+  });
+}
+
+/** A worker's housekeeping takes no turn: whoever PostgreSQL stops to end a deadlock with it goes again. */
+async function createQueue(boss: PgBoss, name: string, triesLeft = DEADLOCK_TRIES): Promise<void> {
+  if (await boss.getQueue(name)) return;
+  try {
+    await boss.createQueue(name, name === DEAD_LETTERS ? { name } : { name, deadLetter: DEAD_LETTERS });
+  } catch (error) {
+    if (triesLeft <= 1 || !(error instanceof pg.DatabaseError) || error.code !== DEADLOCK) throw error;
+    await createQueue(boss, name, triesLeft - 1);
   }
 }
 
