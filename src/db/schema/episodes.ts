@@ -7,6 +7,7 @@ import {
   foreignKey,
   index,
   integer,
+  jsonb,
   pgEnum,
   pgTable,
   primaryKey,
@@ -15,13 +16,17 @@ import {
   uniqueIndex,
   uuid,
 } from 'drizzle-orm/pg-core';
+import { type EditRecord } from '../../domain/edit/edit-record.ts';
+import { EDIT_SOURCES } from '../../domain/edit/edit-sources.ts';
 import { EPISODE_STATES } from '../../domain/episode-states.ts';
 import { idColumn, instant, timestamps, versionColumn } from '../columns.ts';
 import { accounts } from './accounts.ts';
 import { builds } from './builds.ts';
 import { files } from './files.ts';
+import { clips } from './footage.ts';
 
 export const episodeState = pgEnum('episode_state', EPISODE_STATES);
+export const editSource = pgEnum('edit_source', EDIT_SOURCES);
 
 export const episodes = pgTable(
   'episodes',
@@ -136,7 +141,62 @@ export const captions = pgTable(
   ],
 );
 
-/** What viewers see of an episode: one video and one captions version, fixed when the owner published. */
+/** The segments of clips that make an episode; each import is a version, the newest is the draft's. */
+export const edits = pgTable(
+  'edits',
+  {
+    id: idColumn(),
+    workshopId: uuid('workshop_id').notNull(),
+    episodeId: uuid('episode_id').notNull(),
+    number: integer('number').notNull(),
+    source: editSource('source').notNull(),
+    sourceName: text('source_name').notNull(),
+    /** What was imported, as it came; null for one built by hand. */
+    sourceText: text('source_text'),
+    rateNum: integer('rate_num').notNull(),
+    rateDen: integer('rate_den').notNull(),
+    frames: bigint('frames', { mode: 'number' }).notNull(),
+    record: jsonb('record').$type<EditRecord>().notNull(),
+    takenBy: uuid('taken_by').references(() => accounts.id),
+    createdAt: timestamps().createdAt,
+  },
+  (table) => [
+    unique('edits_tenant_unique').on(table.workshopId, table.id),
+    unique('edits_number_unique').on(table.episodeId, table.number),
+    foreignKey({
+      name: 'edits_episode_fk',
+      columns: [table.workshopId, table.episodeId],
+      foreignColumns: [episodes.workshopId, episodes.id],
+    }).onDelete('cascade'),
+  ],
+);
+
+/** Which clip of the footage a name in an edit stands for; null where it was said that it is none. */
+export const editClips = pgTable(
+  'edit_clips',
+  {
+    workshopId: uuid('workshop_id').notNull(),
+    editId: uuid('edit_id').notNull(),
+    name: text('name').notNull(),
+    clipId: uuid('clip_id'),
+  },
+  (table) => [
+    primaryKey({ name: 'edit_clips_pkey', columns: [table.editId, table.name] }),
+    foreignKey({
+      name: 'edit_clips_edit_fk',
+      columns: [table.workshopId, table.editId],
+      foreignColumns: [edits.workshopId, edits.id],
+    }).onDelete('cascade'),
+    foreignKey({
+      name: 'edit_clips_clip_fk',
+      columns: [table.workshopId, table.clipId],
+      foreignColumns: [clips.workshopId, clips.id],
+    }).onDelete('restrict'),
+    index('edit_clips_clip_index').on(table.clipId),
+  ],
+);
+
+/** What viewers see of an episode: one video, one edit and one captions version, fixed when the owner published. */
 export const editions = pgTable(
   'editions',
   {
@@ -146,6 +206,7 @@ export const editions = pgTable(
     number: integer('number').notNull(),
     videoId: uuid('video_id').notNull(),
     captionsId: uuid('captions_id'),
+    editId: uuid('edit_id'),
     publishedAt: instant('published_at').notNull(),
     publishedBy: uuid('published_by').references(() => accounts.id),
     replacedAt: instant('replaced_at'),
@@ -170,6 +231,11 @@ export const editions = pgTable(
       name: 'editions_captions_fk',
       columns: [table.workshopId, table.captionsId],
       foreignColumns: [captions.workshopId, captions.id],
+    }).onDelete('restrict'),
+    foreignKey({
+      name: 'editions_edit_fk',
+      columns: [table.workshopId, table.editId],
+      foreignColumns: [edits.workshopId, edits.id],
     }).onDelete('restrict'),
     // What viewers see now: at most one.
     uniqueIndex('editions_shown_unique')

@@ -19,7 +19,7 @@ import { idColumn, instant, timestamps, versionColumn } from '../columns.ts';
 import { accounts } from './accounts.ts';
 import { builds } from './builds.ts';
 import { episodes } from './episodes.ts';
-import { files } from './files.ts';
+import { clips } from './footage.ts';
 import { parts } from './parts.ts';
 
 export const anchorClock = pgEnum('anchor_clock', ['shop', 'clip', 'episode']);
@@ -40,12 +40,18 @@ export const anchors = pgTable(
     shopAt: instant('shop_at'),
     shopUntil: instant('shop_until'),
     clipId: uuid('clip_id'),
+    /** Of a clip time that was typed at an episode's desk: that episode. */
     episodeId: uuid('episode_id'),
     /** Frames at rateNum/rateDen of the clip or the episode's video; half-open where there is an end. */
     frame: bigint('frame', { mode: 'number' }),
     endFrame: bigint('end_frame', { mode: 'number' }),
     rateNum: integer('rate_num'),
     rateDen: integer('rate_den'),
+    /** Of a clip time that was typed as an episode time before an edit covered it: what an edition without one shows. */
+    typedFrame: bigint('typed_frame', { mode: 'number' }),
+    typedEndFrame: bigint('typed_end_frame', { mode: 'number' }),
+    typedRateNum: integer('typed_rate_num'),
+    typedRateDen: integer('typed_rate_den'),
     createdAt: timestamps().createdAt,
   },
   (table) => [
@@ -58,7 +64,7 @@ export const anchors = pgTable(
     foreignKey({
       name: 'anchors_clip_fk',
       columns: [table.workshopId, table.clipId],
-      foreignColumns: [files.workshopId, files.id],
+      foreignColumns: [clips.workshopId, clips.id],
     }).onDelete('restrict'),
     foreignKey({
       name: 'anchors_episode_fk',
@@ -75,7 +81,12 @@ export const anchors = pgTable(
     ),
     check('anchors_end_after_start', sql`${table.endFrame} is null or ${table.endFrame} > ${table.frame}`),
     index('anchors_episode_index').on(table.episodeId),
+    check(
+      'anchors_typed_whole',
+      sql`num_nonnulls(${table.typedFrame}, ${table.typedRateNum}, ${table.typedRateDen}) in (0, 3)`,
+    ),
     index('anchors_clip_index').on(table.clipId),
+    index('anchors_build_index').on(table.buildId),
   ],
 );
 

@@ -1,12 +1,10 @@
 import Fraction from 'fraction.js';
 import { type Answer, right, wrong } from '../answer.ts';
+import { type CreationMeans } from './clip-facts.ts';
 
 /** Before any camera that writes files of its own. Our own limit: a file that says 1904 or 1970 says nothing. */
 const FIRST_YEAR = 1990;
 const DAY_MS = 86_400_000;
-
-/** What a camera means by the time in its file: when the clip began, or when it was closed. */
-export type CreationMeans = 'start' | 'end';
 
 /**
  * When a clip began by its camera's clock.

@@ -1,7 +1,7 @@
 import { eq, sql } from 'drizzle-orm';
 import { type Database } from '../../../db/client.ts';
 import { files } from '../../../db/schema/files.ts';
-import { anchors } from '../../../db/schema/notes.ts';
+import { clips } from '../../../db/schema/footage.ts';
 import { diaryPhotos } from '../../../db/schema/diary.ts';
 import { videos } from '../../../db/schema/episodes.ts';
 import { Invalid } from '../../../server/errors.ts';
@@ -28,7 +28,7 @@ export const deleteFile = verb({ may: 'footage.change' }, async (context, input:
 async function findUser(db: Database, id: string): Promise<string | null> {
   const { rows } = await db.execute<{ user: string | null }>(sql`select case
     when exists (select from ${videos} where ${videos.fileId} = ${id}) then 'An episode'
-    when exists (select from ${anchors} where ${anchors.clipId} = ${id}) then 'A note'
+    when exists (select from ${clips} where ${clips.fileId} = ${id} and ${clips.deletedAt} is null) then 'A clip'
     when exists (select from ${diaryPhotos} where ${diaryPhotos.fileId} = ${id}) then 'The diary'
   end as user`);
   return rows[0]?.user ?? null;
