@@ -5,6 +5,8 @@ export const EVENTS = [
   'media-found',
   'original-dropped',
   'file-ready',
+  // Of a build: clips came or went, or when they ran is known otherwise.
+  'footage-changed',
   'announcement-started',
   'question-sent',
   'question-urgent',
