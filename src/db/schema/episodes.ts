@@ -157,6 +157,8 @@ export const edits = pgTable(
     rateDen: integer('rate_den').notNull(),
     frames: bigint('frames', { mode: 'number' }).notNull(),
     record: jsonb('record').$type<EditRecord>().notNull(),
+    /** Grows whenever its places are computed again. */
+    placesVersion: integer('places_version').notNull().default(0),
     takenBy: uuid('taken_by').references(() => accounts.id),
     createdAt: timestamps().createdAt,
   },

@@ -40,6 +40,8 @@ export const anchors = pgTable(
     shopAt: instant('shop_at'),
     shopUntil: instant('shop_until'),
     clipId: uuid('clip_id'),
+    /** Of a stretch marked over a cut: the clip that its end counts on. */
+    endClipId: uuid('end_clip_id'),
     /** Of a clip time that was typed at an episode's desk: that episode. */
     episodeId: uuid('episode_id'),
     /** Frames at rateNum/rateDen of the clip or the episode's video; half-open where there is an end. */
@@ -79,7 +81,15 @@ export const anchors = pgTable(
         else ${table.episodeId} is not null and num_nonnulls(${table.frame}, ${table.rateNum}, ${table.rateDen}) = 3
       end`,
     ),
-    check('anchors_end_after_start', sql`${table.endFrame} is null or ${table.endFrame} > ${table.frame}`),
+    foreignKey({
+      name: 'anchors_end_clip_fk',
+      columns: [table.workshopId, table.endClipId],
+      foreignColumns: [clips.workshopId, clips.id],
+    }).onDelete('restrict'),
+    check(
+      'anchors_end_after_start',
+      sql`${table.endFrame} is null or ${table.endFrame} > ${table.frame} or ${table.endClipId} is not null`,
+    ),
     index('anchors_episode_index').on(table.episodeId),
     check(
       'anchors_typed_whole',

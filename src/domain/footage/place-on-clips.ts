@@ -5,10 +5,10 @@ import { type CameraClock, shopTimeAt } from './camera-clock.ts';
 /** A clip as its camera made it. */
 export interface FilmedClip {
   readonly id: string;
-  /** Its first frame by the camera's clock, milliseconds since 1970. */
-  readonly start: Fraction;
-  /** How long it plays, in seconds. */
-  readonly length: Fraction;
+  /** Its first frame by the camera's clock, milliseconds since 1970; null until known: no shop time lies on it then. */
+  readonly start: Fraction | null;
+  /** How long it plays, in seconds; null until known: no shop time lies on it then. */
+  readonly length: Fraction | null;
   readonly rate: Rate;
   /** Seconds of the shop that a second of it shows: 1 as filmed, 20 for time-lapse 1:20, 1/4 for slow motion. */
   readonly pace: Fraction;
@@ -38,8 +38,11 @@ export interface ClipPlaces {
   readonly clips: readonly OnClip[];
 }
 
+/** A clip that is known to have run from one moment to another. */
+export type TimedClip = FilmedClip & { readonly start: Fraction; readonly length: Fraction };
+
 interface Ran {
-  readonly clip: FilmedClip;
+  readonly clip: TimedClip;
   readonly from: Fraction;
   readonly to: Fraction;
   /** The same as doubles, for what is plainly too far. */
@@ -48,8 +51,18 @@ interface Ran {
 
 const ZERO = new Fraction(0);
 
+/** Whether it is known when a clip ran. */
+export function isTimed(clip: FilmedClip): clip is TimedClip {
+  return clip.start !== null && clip.length !== null;
+}
+
 /** When a clip ran, in shop time, half-open: milliseconds since 1970. */
-export function shopStretch({ start, length, pace, clock }: FilmedClip): readonly [Fraction, Fraction] {
+export function shopStretch({
+  start,
+  length,
+  pace,
+  clock,
+}: Omit<TimedClip, 'id' | 'rate'>): readonly [Fraction, Fraction] {
   const end = start.add(length.mul(pace).mul(1000));
   return [shopTimeAt(clock, start), shopTimeAt(clock, end)];
 }
@@ -66,21 +79,40 @@ function momentOf({ clip, from, to }: Ran, shop: Fraction): OnClip {
   return { id, at: shop.sub(from).mul(length).div(to.sub(from)), apart: ZERO };
 }
 
+/** The clips that a moment may lie on or near. @param latestEnds up to each clip, the latest end so far */
+function aroundMoment(ran: readonly Ran[], latestEnds: readonly number[], about: number): Ran[] {
+  const reach = NEAR_SECONDS * 1000 + 1;
+  let [low, high] = [0, ran.length];
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if ((ran[middle]?.roughly[0] ?? 0) - reach <= about) low = middle + 1;
+    else high = middle;
+  }
+  const found: Ran[] = [];
+  for (let index = low - 1; index >= 0 && (latestEnds[index] ?? 0) + reach >= about; index -= 1) {
+    const one = ran[index];
+    if (one !== undefined && one.roughly[1] + reach >= about) found.push(one);
+  }
+  return found.reverse();
+}
+
 /**
  * Where moments of the shop lie on its clips.
  * @param moments milliseconds since 1970
  * @returns for each, in the same order, the clips it lies on or near
  */
 export function placeOnClips(clips: readonly FilmedClip[], moments: readonly Fraction[]): ClipPlaces[] {
-  const ran = clips.map((clip): Ran => {
-    const [from, to] = shopStretch(clip);
-    return { clip, from, to, roughly: [from.valueOf(), to.valueOf()] };
-  });
+  const ran = clips
+    .filter(isTimed)
+    .map((clip): Ran => {
+      const [from, to] = shopStretch(clip);
+      return { clip, from, to, roughly: [from.valueOf(), to.valueOf()] };
+    })
+    .sort((a, b) => a.roughly[0] - b.roughly[0]);
+  const latestEnds: number[] = [];
+  for (const { roughly } of ran) latestEnds.push(Math.max(roughly[1], latestEnds.at(-1) ?? roughly[1]));
   return moments.map((shop) => {
-    const about = shop.valueOf();
-    const reach = NEAR_SECONDS * 1000 + 1;
-    const found = ran
-      .filter(({ roughly: [from, to] }) => from - reach <= about && about <= to + reach)
+    const found = aroundMoment(ran, latestEnds, shop.valueOf())
       .map((one) => ({
         ...momentOf(one, shop),
         holds: one.from.compare(shop) <= 0 && shop.compare(one.to) < 0,
