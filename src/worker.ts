@@ -1,5 +1,5 @@
 import { audienceJobs } from './features/audience/jobs.ts';
-import { eraseDeletedJob } from './features/episodes/jobs.ts';
+import { eraseDeletedJob, placeFootageJob } from './features/episodes/jobs.ts';
 import { fileJobs } from './features/files/jobs.ts';
 import { questionJobs } from './features/questions/jobs.ts';
 import { sendInvitationJob } from './features/workshops/jobs.ts';
@@ -12,6 +12,7 @@ import { type JobDefinition, workQueue } from './server/jobs/queue.ts';
 const JOBS: readonly JobDefinition[] = [
   sendInvitationJob,
   ...fileJobs,
+  placeFootageJob,
   eraseDeletedJob,
   ...questionJobs,
   ...audienceJobs,

@@ -3,6 +3,7 @@ import { EPISODE_STATES } from '../../domain/episode-states.ts';
 import { lineOfText, runningText } from '../../domain/plain-text.ts';
 import { PositionInput } from '../../domain/positions.ts';
 import { buildParams } from '../builds/build.ts';
+import { PlaceAnswer } from '../notes/note.ts';
 
 export const EPISODE_TITLE_LENGTH = 120;
 export const EPISODE_ABOUT_LENGTH = 5000;
@@ -110,6 +111,8 @@ export const ChapterAnswer = z.object({
     endFrame: z.number().nullable(),
     rate: z.object({ num: z.number(), den: z.number() }),
   }),
+  /** Null where the episode has no edit. */
+  place: PlaceAnswer.nullable(),
 });
 export type Chapter = z.output<typeof ChapterAnswer>;
 export const ChaptersAnswer = z.object({ items: z.array(ChapterAnswer), nextCursor: z.null() });

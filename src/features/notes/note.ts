@@ -1,7 +1,8 @@
 import { z } from 'zod';
 import { NOTE_AUDIENCES, NOTE_KINDS, SIZE_STANDINGS } from '../../domain/note-kinds.ts';
 import { runningText } from '../../domain/plain-text.ts';
-import { type Position, PositionInput } from '../../domain/positions.ts';
+import { PLACE_STATUSES } from '../../domain/place/place-statuses.ts';
+import { PositionInput } from '../../domain/positions.ts';
 
 export const NOTE_TEXT_LENGTH = 2000;
 export const NOTE_PARTS_LENGTH = 20;
@@ -60,6 +61,25 @@ const position = z.object({
   rate: z.object({ num: z.number(), den: z.number() }),
 });
 
+/** What a desk says of where something comes in its edit. */
+export const PlaceAnswer = z.object({
+  status: z.enum(PLACE_STATUSES),
+  /** The other places of a moment that is used more than once, in seconds of the episode. */
+  also: z.array(z.number()),
+  byPicture: z.boolean(),
+  toEdge: z.boolean(),
+  /** Of what is not in this edit: the segment that the edit before used it in. */
+  dropped: z.string().nullable(),
+  /** The clip it lies on, with seconds since that clip's first frame. */
+  on: z.object({ clip: z.string(), at: z.number() }).nullable(),
+});
+export type Place = z.output<typeof PlaceAnswer>;
+
+/** Whether something is shown by its episode's edit; everything is where there is none. */
+export function isInEdit({ place }: { readonly place: Place | null }): boolean {
+  return place === null || (place.status !== 'lost' && place.status !== 'no-footage');
+}
+
 /** A note as its team sees it. */
 export const NoteAnswer = z.object({
   id,
@@ -74,26 +94,22 @@ export const NoteAnswer = z.object({
   proposed: z.boolean(),
   partIds: z.array(id),
   position,
+  /** Null where the episode has no edit. */
+  place: PlaceAnswer.nullable(),
   writtenBy: z.string().nullable(),
 });
 export type Note = z.output<typeof NoteAnswer>;
 
 export const NotesAnswer = z.object({ items: z.array(NoteAnswer), nextCursor: z.null() });
 
-export const AppearanceAnswer = z.object({ id, version: z.number(), partId: id, position });
+export const AppearanceAnswer = z.object({
+  id,
+  version: z.number(),
+  partId: id,
+  position,
+  place: PlaceAnswer.nullable(),
+});
 export type Appearance = z.output<typeof AppearanceAnswer>;
 export const AppearancesAnswer = z.object({ items: z.array(AppearanceAnswer), nextCursor: z.null() });
-
-/** Where a stored anchor stands. */
-export function positionOf(anchor: {
-  readonly frame: number | null;
-  readonly endFrame: number | null;
-  readonly rateNum: number | null;
-  readonly rateDen: number | null;
-}): Position {
-  const { frame, endFrame, rateNum, rateDen } = anchor;
-  if (frame === null || rateNum === null || rateDen === null) throw new Error('The anchor has no frames.');
-  return { frame, endFrame, rate: { num: rateNum, den: rateDen } };
-}
 
 export const RemovedAnswer = z.object({ id });

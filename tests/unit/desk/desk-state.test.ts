@@ -41,6 +41,7 @@ function aNote(given: Partial<Note> = {}): Note {
     proposed: false,
     partIds: [],
     position: { frame: 100, endFrame: null, rate: { num: 25, den: 1 } },
+    place: null,
     writtenBy: 'Wren',
     ...given,
   };

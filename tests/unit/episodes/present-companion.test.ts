@@ -24,6 +24,7 @@ function note(id: string, seconds: number, more: Partial<Note> = {}): Note {
     partIds: [],
     writtenBy: null,
     position: { frame: seconds * 50, endFrame: null, rate: { num: 50, den: 1 } },
+    place: null,
     ...more,
   };
 }
@@ -34,6 +35,7 @@ function present(notes: readonly Note[], seconds: number | null = 100) {
     version: 1,
     title: `From ${String(at)}`,
     position: { frame: at, endFrame: null, rate: { num: 1, den: 1 } },
+    place: null,
   }));
   return presentCompanion({
     video: { seconds, rate: { num: 25, den: 1 } },

@@ -1,10 +1,12 @@
 import { and, eq, isNull } from 'drizzle-orm';
-import { anchors, chapters } from '../../../db/schema/notes.ts';
+import { chapters } from '../../../db/schema/notes.ts';
 import { type Position } from '../../../domain/positions.ts';
 import { onUniqueViolation } from '../../../server/constraint.ts';
 import { verb } from '../../../server/verb.ts';
 import { type Chapter } from '../episode.ts';
 import { announceEpisode } from './announce-episode.ts';
+import { findDraftView } from '../../notes/server/episode-view.ts';
+import { makeAnchor } from '../../notes/server/write-anchor.ts';
 import { loadChaptersWhere } from './load-chapters.ts';
 import { type EpisodeRef, loadEpisode } from './load-episode.ts';
 
@@ -16,25 +18,14 @@ export const addChapter = verb(
   async (context, input: Input): Promise<Chapter> => {
     const { db, workshop } = context;
     const { episode } = await loadEpisode(context, input);
+    const view = await findDraftView(db, episode.id);
     const [sentBefore] = await loadChaptersWhere(
       db,
+      view,
       and(eq(chapters.id, input.id), eq(chapters.episodeId, episode.id), isNull(chapters.deletedAt)),
     );
     if (sentBefore) return sentBefore;
-    const { frame, rate } = input.position;
-    const [anchor] = await db
-      .insert(anchors)
-      .values({
-        workshopId: workshop.id,
-        buildId: episode.buildId,
-        clock: 'episode',
-        episodeId: episode.id,
-        frame,
-        rateNum: rate.num,
-        rateDen: rate.den,
-      })
-      .returning({ id: anchors.id });
-    if (!anchor) throw new Error('The anchor was not kept.');
+    const anchorId = await makeAnchor(context, episode, { ...input.position, endFrame: null });
     await onUniqueViolation(
       { chapters_pkey: { id: 'This chapter is kept already. Open the page again.' } },
       () =>
@@ -42,12 +33,12 @@ export const addChapter = verb(
           id: input.id,
           workshopId: workshop.id,
           episodeId: episode.id,
-          anchorId: anchor.id,
+          anchorId,
           title: input.title,
         }),
     );
     await announceEpisode(context, episode);
-    const [chapter] = await loadChaptersWhere(db, eq(chapters.id, input.id));
+    const [chapter] = await loadChaptersWhere(db, view, eq(chapters.id, input.id));
     if (!chapter) throw new Error('The chapter was not kept.');
     return chapter;
   },

@@ -1,5 +1,5 @@
 import { read } from '../../../server/verb.ts';
-import { loadChapters } from './load-chapters.ts';
+import { loadDraftChapters } from './load-chapters.ts';
 import { type EpisodeRef, findDraftCaptions, findDraftVideo, loadEpisode } from './load-episode.ts';
 import { findShownEdition } from './load-editions.ts';
 
@@ -12,7 +12,7 @@ export const getDesk = read({ may: 'workshop.see-bench' }, async (context, ref: 
     episode,
     video: await findDraftVideo(db, episode.id),
     captions: await findDraftCaptions(db, episode.id),
-    chapters: await loadChapters(db, episode.id),
+    chapters: await loadDraftChapters(db, episode.id),
     shown: await findShownEdition(db, episode.id),
   };
 });

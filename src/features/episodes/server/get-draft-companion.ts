@@ -1,5 +1,6 @@
 import { isShownToViewers } from '../../../domain/notes/shown-notes.ts';
 import { read } from '../../../server/verb.ts';
+import { isInEdit } from '../../notes/note.ts';
 import { listAppearances } from '../../notes/server/list-appearances.ts';
 import { listNotes } from '../../notes/server/list-notes.ts';
 import { type Companion } from '../companion.ts';
@@ -18,8 +19,10 @@ export const getDraftCompanion = read(
     const { db, workshop } = context;
     const { build, episode, video, captions, chapters } = await getDesk(context, ref);
     if (!video) return null;
-    const notes = (await listNotes(context, ref)).items.filter(isShownToViewers);
-    const { items: byHand } = await listAppearances(context, ref);
+    const notes = (await listNotes(context, ref)).items.filter(
+      (note) => isShownToViewers(note) && isInEdit(note),
+    );
+    const byHand = (await listAppearances(context, ref)).items.filter(isInEdit);
     const { items: published } = await listPublicEpisodes(context, { buildId: build.id });
     const partIds = new Set([
       ...notes.flatMap((note) => note.partIds),
@@ -36,7 +39,7 @@ export const getDraftCompanion = read(
         video,
         notes,
         byHand,
-        chapters,
+        chapters: chapters.filter(isInEdit),
         parts: await loadShownParts(db, workshop.id, [...partIds]),
       }),
       series: series

@@ -1,12 +1,13 @@
 import { and, eq, inArray, isNull } from 'drizzle-orm';
 import { fileVariants } from '../../../db/schema/files.ts';
-import { anchors, notes } from '../../../db/schema/notes.ts';
+import { notes } from '../../../db/schema/notes.ts';
 import { type Database } from '../../../db/client.ts';
 import { paths } from '../../../paths.ts';
 import { type Feed } from '../../../server/feeds/write-feed.ts';
 import { read } from '../../../server/verb.ts';
 import { getPublicBuild } from '../../builds/server/get-public-build.ts';
 import { type Note } from '../../notes/note.ts';
+import { findShownViews, shownToViewers } from '../../notes/server/episode-view.ts';
 import { loadNotes } from '../../notes/server/load-notes.ts';
 import { listPublicEpisodes } from './list-public-episodes.ts';
 import { describeInFeed, feedInstant } from './present-feed-item.ts';
@@ -80,23 +81,17 @@ async function loadShownNotes(
   episodeIds: readonly string[],
 ): Promise<Map<string, Note[]>> {
   if (episodeIds.length === 0) return new Map();
-  const shown = and(
-    inArray(anchors.episodeId, [...episodeIds]),
-    eq(notes.workshopId, workshopId),
-    eq(notes.audience, 'viewers'),
-    eq(notes.proposed, false),
-    isNull(notes.deletedAt),
-  );
-  const places = await db
-    .select({ noteId: notes.id, episodeId: anchors.episodeId })
-    .from(notes)
-    .innerJoin(anchors, eq(anchors.id, notes.anchorId))
-    .where(shown);
-  const episodeOf = new Map(places.map(({ noteId, episodeId }) => [noteId, episodeId]));
+  const views = await findShownViews(db, episodeIds);
   const byEpisode = new Map<string, Note[]>();
-  for (const note of await loadNotes(db, shown)) {
-    const episodeId = episodeOf.get(note.id) ?? '';
-    byEpisode.set(episodeId, [...(byEpisode.get(episodeId) ?? []), note]);
+  for (const [episodeId, view] of views) {
+    const shown = and(
+      shownToViewers(view),
+      isNull(notes.deletedAt),
+      eq(notes.workshopId, workshopId),
+      eq(notes.audience, 'viewers'),
+      eq(notes.proposed, false),
+    );
+    byEpisode.set(episodeId, await loadNotes(db, view, shown));
   }
   return byEpisode;
 }

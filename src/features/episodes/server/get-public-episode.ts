@@ -5,6 +5,7 @@ import { type WorkshopContext } from '../../../server/context.ts';
 import { NotFound } from '../../../server/errors.ts';
 import { read } from '../../../server/verb.ts';
 import { loadBuild } from '../../builds/server/load-build.ts';
+import { findShownView } from '../../notes/server/episode-view.ts';
 import { loadChapters } from './load-chapters.ts';
 import { findShownEdition } from './load-editions.ts';
 
@@ -47,7 +48,7 @@ async function loadPublicEpisode(context: WorkshopContext, ref: Ref) {
     build,
     episode,
     edition: shown,
-    chapters: await loadChapters(db, episode.id),
+    chapters: await loadChapters(db, await findShownView(db, episode.id)),
     previous: published[here - 1] ?? null,
     next: published[here + 1] ?? null,
     /** How many episodes the series has or plans, whichever is more. */

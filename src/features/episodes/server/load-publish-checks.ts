@@ -10,6 +10,7 @@ import { type Position } from '../../../domain/positions.ts';
 import { frameToMilliseconds } from '../../../domain/time/frames.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
 import { type Build } from '../../builds/build.ts';
+import { findDraftView } from '../../notes/server/episode-view.ts';
 import { loadNotes, ofEpisode } from '../../notes/server/load-notes.ts';
 import { type Video } from '../episode.ts';
 import { loadChapters } from './load-chapters.ts';
@@ -27,8 +28,9 @@ export async function loadPublishChecks(
   const captions = await findDraftCaptions(db, episode.id);
   const rate = video?.rate ?? MILLISECONDS;
   const place = (position: Position) => convertPlace(position, rate);
-  const notes = await loadNotes(db, ofEpisode(episode.id));
-  const chapters = await loadChapters(db, episode.id);
+  const view = await findDraftView(db, episode.id);
+  const notes = await loadNotes(db, view, ofEpisode(view));
+  const chapters = await loadChapters(db, view);
   const partsOfBuild = await db
     .select({ id: parts.id, number: parts.number, name: parts.name, inPlans: parts.inPlans })
     .from(parts)

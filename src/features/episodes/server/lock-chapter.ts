@@ -2,6 +2,7 @@ import { and, eq } from 'drizzle-orm';
 import { chapters } from '../../../db/schema/notes.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
 import { Conflict, NotFound } from '../../../server/errors.ts';
+import { findDraftView } from '../../notes/server/episode-view.ts';
 import { loadChaptersWhere } from './load-chapters.ts';
 import { type EpisodeRef, loadEpisode } from './load-episode.ts';
 
@@ -15,8 +16,9 @@ export async function lockChapter(context: WorkshopContext, ref: ChapterRef) {
     .from(chapters)
     .where(and(eq(chapters.id, ref.chapter), eq(chapters.episodeId, episode.id)))
     .for('update');
-  const [shown] = await loadChaptersWhere(context.db, eq(chapters.id, ref.chapter));
+  const view = await findDraftView(context.db, episode.id);
+  const [shown] = await loadChaptersWhere(context.db, view, eq(chapters.id, ref.chapter));
   if (!row || !shown) throw new NotFound('This chapter');
   if (row.version !== ref.version) throw new Conflict({ ...shown, deleted: row.deletedAt !== null });
-  return { episode, row, shown };
+  return { episode, row, shown, view };
 }

@@ -5,8 +5,10 @@ import { verb } from '../../../server/verb.ts';
 import { type Note, type NoteFields } from '../note.ts';
 import { announceNotes, isProposal } from './guard-published.ts';
 import { type EpisodeRef, loadEpisodeOfNotes } from './load-episode.ts';
+import { findDraftView } from './episode-view.ts';
 import { loadNotes } from './load-notes.ts';
-import { makeAnchor, requireKnown, writeParts } from './write-note.ts';
+import { makeAnchor } from './write-anchor.ts';
+import { requireKnown, writeParts } from './write-note.ts';
 
 /**
  * Adds a note at a moment or a stretch of an episode. On a published episode an editor's number is a proposal.
@@ -21,7 +23,8 @@ export const addNote = verb(
     await requireKnown(context, episode, input);
     const { id, kind, text, audience, askedId, standing, topic } = input;
     const writer = actor.kind === 'account' ? actor.id : null;
-    const [kept] = writer === null ? [] : await loadNotes(db, sentBefore(id, episode.id, writer));
+    const view = await findDraftView(db, episode.id);
+    const [kept] = writer === null ? [] : await loadNotes(db, view, sentBefore(id, episode.id, writer));
     if (kept) return kept;
     const anchorId = await makeAnchor(context, episode, input.position);
     await onUniqueViolation(
@@ -44,7 +47,7 @@ export const addNote = verb(
     );
     await writeParts(context, id, input.partIds);
     await announceNotes(context, episode);
-    const [note] = await loadNotes(db, eq(notes.id, id));
+    const [note] = await loadNotes(db, view, eq(notes.id, id));
     if (!note) throw new Error('The note was not kept.');
     return note;
   },

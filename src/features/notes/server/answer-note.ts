@@ -9,7 +9,7 @@ type Answer = EpisodeRef & { readonly note: string; readonly version: number; re
 /** Answers a note that asks one person; it stops waiting in that person's Today. Only they answer, or the owner. */
 export const answerNote = verb({ may: 'workshop.see-bench' }, async (context, input: Answer) => {
   const episode = await loadEpisodeOfNotes(context, input);
-  const { row, shown } = await loadStandingNoteAt(context, episode, input);
+  const { row, shown, view } = await loadStandingNoteAt(context, episode, input);
   const { actor, role, now } = context;
   const asked = actor.kind === 'account' && row.askedId === actor.id;
   if (row.audience !== 'person' || !(asked || role === 'owner')) {
@@ -17,5 +17,5 @@ export const answerNote = verb({ may: 'workshop.see-bench' }, async (context, in
   }
   if (input.answer === '') throw new Invalid({ answer: 'Write the answer.' });
   await keepVersion(context, shown);
-  return setNote(context, row, { answer: input.answer, answeredAt: now });
+  return setNote(context, view, row, { answer: input.answer, answeredAt: now });
 });

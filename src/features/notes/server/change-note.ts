@@ -1,12 +1,13 @@
 import { eq } from 'drizzle-orm';
-import { anchors, notes } from '../../../db/schema/notes.ts';
+import { notes } from '../../../db/schema/notes.ts';
 import { verb } from '../../../server/verb.ts';
-import { type Note, type NoteFields } from '../note.ts';
+import { isInEdit, type Note, type NoteFields } from '../note.ts';
 import { announceNotes, requireMayChange } from './guard-published.ts';
 import { type EpisodeRef, loadEpisodeOfNotes } from './load-episode.ts';
 import { keepVersion, loadStandingNoteAt } from './load-note.ts';
 import { loadNotes } from './load-notes.ts';
-import { anchorAt, requireKnown, writeParts } from './write-note.ts';
+import { moveAnchor } from './write-anchor.ts';
+import { requireKnown, writeParts } from './write-note.ts';
 
 type Change = NoteFields & EpisodeRef & { readonly note: string; readonly version: number };
 
@@ -19,7 +20,7 @@ export const changeNote = verb(
   async (context, input: Change): Promise<Note> => {
     const { db, now } = context;
     const episode = await loadEpisodeOfNotes(context, input);
-    const { row, shown } = await loadStandingNoteAt(context, episode, input);
+    const { row, shown, view } = await loadStandingNoteAt(context, episode, input);
     if (!row.proposed) requireMayChange(context, episode, [row.kind, input.kind]);
     await requireKnown(context, episode, input);
     await keepVersion(context, shown);
@@ -40,10 +41,11 @@ export const changeNote = verb(
         updatedAt: now,
       })
       .where(eq(notes.id, row.id));
-    await db.update(anchors).set(anchorAt(input.position)).where(eq(anchors.id, row.anchorId));
+    const stands = isInEdit(shown) ? shown.position : null;
+    await moveAnchor(context, episode, row.anchorId, input.position, stands);
     await writeParts(context, row.id, input.partIds);
-    await announceNotes(context, episode);
-    const [note] = await loadNotes(db, eq(notes.id, row.id));
+    await announceNotes(context, episode, row.anchorId);
+    const [note] = await loadNotes(db, view, eq(notes.id, row.id));
     return note ?? shown;
   },
 );

@@ -12,9 +12,9 @@ export const deleteNote: Ruled<Target, Note> = verb(
   { may: 'draft-note.change' },
   async (context, input: Target) => {
     const episode = await loadEpisodeOfNotes(context, input);
-    const { row } = await loadStandingNoteAt(context, episode, input);
+    const { row, view } = await loadStandingNoteAt(context, episode, input);
     if (!row.proposed) requireMayChange(context, episode, [row.kind]);
-    await announceNotes(context, episode);
-    return setNote(context, row, { deletedAt: context.now });
+    await announceNotes(context, episode, row.anchorId);
+    return setNote(context, view, row, { deletedAt: context.now });
   },
 );

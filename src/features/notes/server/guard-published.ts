@@ -1,3 +1,6 @@
+import { and, eq, isNull } from 'drizzle-orm';
+import { editions } from '../../../db/schema/episodes.ts';
+import { places } from '../../../db/schema/places.ts';
 import { GUARDED_KINDS, type NoteKind } from '../../../domain/note-kinds.ts';
 import { may } from '../../../domain/permissions.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
@@ -25,7 +28,30 @@ export function requireMayChange(
   }
 }
 
-/** Tells the public page of an episode that what it shows has changed. */
-export async function announceNotes({ db }: WorkshopContext, episode: EpisodeOfNotes): Promise<void> {
-  if (episode.state === 'published') await announcePageChanges(db, [`episode:${episode.id}`]);
+/**
+ * Tells the public pages that show something of an episode's desk that it has changed.
+ * @param anchorId of what others episodes may show too; left out where placing it has told them
+ */
+export async function announceNotes(
+  { db }: WorkshopContext,
+  episode: EpisodeOfNotes,
+  anchorId?: string,
+): Promise<void> {
+  const showing =
+    anchorId === undefined
+      ? []
+      : await db
+          .selectDistinct({ id: editions.episodeId })
+          .from(places)
+          .innerJoin(editions, eq(editions.editId, places.editId))
+          .where(
+            and(eq(places.anchorId, anchorId), isNull(editions.replacedAt), isNull(editions.withdrawnAt)),
+          );
+  const own = episode.state === 'published' ? [episode.id] : [];
+  const ids = new Set([...own, ...showing.map(({ id }) => id)]);
+  if (ids.size > 0)
+    await announcePageChanges(
+      db,
+      [...ids].map((id) => `episode:${id}`),
+    );
 }

@@ -1,9 +1,11 @@
 import { and, eq } from 'drizzle-orm';
 import { anchors, notes, noteVersions } from '../../../db/schema/notes.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
+import { places } from '../../../db/schema/places.ts';
 import { Conflict, NotFound } from '../../../server/errors.ts';
 import { type Note } from '../note.ts';
 import { type EpisodeOfNotes } from './load-episode.ts';
+import { findDraftView, mainPlace, writtenAt } from './episode-view.ts';
 import { loadNotes } from './load-notes.ts';
 
 /**
@@ -17,17 +19,19 @@ export async function loadNoteAt(
   { note: id, version }: { readonly note: string; readonly version: number },
 ) {
   const { db, workshop } = context;
+  const view = await findDraftView(db, episode.id);
   const [row] = await db
     .select({ note: notes })
     .from(notes)
     .innerJoin(anchors, eq(anchors.id, notes.anchorId))
-    .where(and(eq(notes.id, id), eq(notes.workshopId, workshop.id), eq(anchors.episodeId, episode.id)))
+    .leftJoin(places, mainPlace(view))
+    .where(and(eq(notes.id, id), eq(notes.workshopId, workshop.id), writtenAt(view)))
     .for('update', { of: notes });
   if (!row || !maySee(context, row.note)) throw new NotFound('This note');
-  const [shown] = await loadNotes(db, eq(notes.id, id));
+  const [shown] = await loadNotes(db, view, eq(notes.id, id));
   if (!shown) throw new NotFound('This note');
   if (row.note.version !== version) throw new Conflict({ ...shown, deleted: row.note.deletedAt !== null });
-  return { row: row.note, shown };
+  return { row: row.note, shown, view };
 }
 
 /**
@@ -48,7 +52,7 @@ function maySee({ actor, role }: WorkshopContext, note: typeof notes.$inferSelec
 
 /** Keeps what a note said, before it is changed. */
 export async function keepVersion({ db, workshop, actor, now }: WorkshopContext, note: Note): Promise<void> {
-  const { id, version, ...fields } = note;
+  const { id, version, place: _place, ...fields } = note;
   await db.insert(noteVersions).values({
     workshopId: workshop.id,
     noteId: id,

@@ -3,28 +3,40 @@ import { alias } from 'drizzle-orm/pg-core';
 import { type Database } from '../../../db/client.ts';
 import { accounts } from '../../../db/schema/accounts.ts';
 import { anchors, noteParts, notes } from '../../../db/schema/notes.ts';
-import { type Note, positionOf } from '../note.ts';
+import { places } from '../../../db/schema/places.ts';
+import { type Note } from '../note.ts';
+import {
+  type EpisodeView,
+  inEpisodeOrder,
+  mainPlace,
+  sayPlaces,
+  shownIn,
+  standsAt,
+  toldIn,
+} from './episode-view.ts';
 
 const writers = alias(accounts, 'writers');
 
 /**
  * Notes with their parts, in the order of the episode.
+ * @param view whose places they are shown at
  * @param where which notes; deleted ones only when it says so itself
  */
-export async function loadNotes(db: Database, where: SQL | undefined): Promise<Note[]> {
+export async function loadNotes(db: Database, view: EpisodeView, where: SQL | undefined): Promise<Note[]> {
   const rows = await db
-    .select({ note: notes, anchor: anchors, asked: accounts.name, writtenBy: writers.name })
+    .select({ note: notes, anchor: anchors, place: places, asked: accounts.name, writtenBy: writers.name })
     .from(notes)
     .innerJoin(anchors, eq(anchors.id, notes.anchorId))
+    .leftJoin(places, mainPlace(view))
     .leftJoin(accounts, eq(accounts.id, notes.askedId))
     .leftJoin(writers, eq(writers.id, notes.writtenBy))
-    .where(where)
-    .orderBy(asc(anchors.frame), asc(notes.id));
+    .where(where);
   const partsOf = await loadPartIds(
     db,
     rows.map(({ note }) => note.id),
   );
-  return rows.map(({ note, anchor, asked, writtenBy }) => ({
+  const placeOf = await sayPlaces(db, view, rows);
+  const loaded = rows.map(({ note, anchor, place, asked, writtenBy }) => ({
     id: note.id,
     version: note.version,
     kind: note.kind,
@@ -36,14 +48,21 @@ export async function loadNotes(db: Database, where: SQL | undefined): Promise<N
     topic: note.topic,
     proposed: note.proposed,
     partIds: partsOf.get(note.id) ?? [],
-    position: positionOf(anchor),
+    position: standsAt(view, anchor, place),
+    place: placeOf(anchor.id),
     writtenBy,
   }));
+  return inEpisodeOrder(loaded);
 }
 
-/** The notes of an episode that are not deleted. */
-export function ofEpisode(episodeId: string): SQL | undefined {
-  return and(eq(anchors.episodeId, episodeId), isNull(notes.deletedAt));
+/** The notes that a view of an episode shows and that are not deleted. */
+export function ofEpisode(view: EpisodeView): SQL | undefined {
+  return and(shownIn(view), isNull(notes.deletedAt));
+}
+
+/** The same with those that are not in its edit. */
+export function ofDesk(view: EpisodeView): SQL | undefined {
+  return and(toldIn(view), isNull(notes.deletedAt));
 }
 
 async function loadPartIds(db: Database, noteIds: readonly string[]): Promise<Map<string, string[]>> {

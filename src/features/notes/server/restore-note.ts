@@ -9,8 +9,8 @@ type Target = EpisodeRef & { readonly note: string; readonly version: number };
 /** Brings a deleted note back. @throws Conflict as for a change */
 export const restoreNote = verb({ may: 'draft-note.change' }, async (context, input: Target) => {
   const episode = await loadEpisodeOfNotes(context, input);
-  const { row } = await loadNoteAt(context, episode, input);
+  const { row, view } = await loadNoteAt(context, episode, input);
   if (!row.proposed) requireMayChange(context, episode, [row.kind]);
-  await announceNotes(context, episode);
-  return setNote(context, row, { deletedAt: null });
+  await announceNotes(context, episode, row.anchorId);
+  return setNote(context, view, row, { deletedAt: null });
 });

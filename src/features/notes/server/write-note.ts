@@ -1,37 +1,11 @@
 import { and, count, eq, inArray, isNull } from 'drizzle-orm';
-import { anchors, noteParts } from '../../../db/schema/notes.ts';
+import { noteParts } from '../../../db/schema/notes.ts';
 import { parts } from '../../../db/schema/parts.ts';
 import { memberships } from '../../../db/schema/workshops.ts';
-import { type Position } from '../../../domain/positions.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
 import { Invalid } from '../../../server/errors.ts';
 import { type NoteFields } from '../note.ts';
 import { type EpisodeOfNotes } from './load-episode.ts';
-
-/** The columns of an anchor at a position. */
-export function anchorAt({ frame, endFrame, rate }: Position) {
-  return { frame, endFrame, rateNum: rate.num, rateDen: rate.den };
-}
-
-/** Makes an anchor in an episode. */
-export async function makeAnchor(
-  { db, workshop }: WorkshopContext,
-  episode: EpisodeOfNotes,
-  position: Position,
-): Promise<string> {
-  const [anchor] = await db
-    .insert(anchors)
-    .values({
-      workshopId: workshop.id,
-      buildId: episode.buildId,
-      clock: 'episode',
-      episodeId: episode.id,
-      ...anchorAt(position),
-    })
-    .returning({ id: anchors.id });
-  if (!anchor) throw new Error('The anchor was not kept.');
-  return anchor.id;
-}
 
 /** @throws Invalid when a part is not of this build, or the person asked is not of the team */
 export async function requireKnown(

@@ -3,11 +3,13 @@ import { alias } from 'drizzle-orm/pg-core';
 import { type Database } from '../../../db/client.ts';
 import { accounts } from '../../../db/schema/accounts.ts';
 import { builds, buildSlugs } from '../../../db/schema/builds.ts';
-import { episodes } from '../../../db/schema/episodes.ts';
+import { editions, edits, episodes } from '../../../db/schema/episodes.ts';
 import { anchors, notes } from '../../../db/schema/notes.ts';
 import { parts } from '../../../db/schema/parts.ts';
 import { answers, questionParts, questions } from '../../../db/schema/questions.ts';
+import { places } from '../../../db/schema/places.ts';
 import { frameToMilliseconds } from '../../../domain/time/frames.ts';
+import { type EpisodeView, standsAt } from '../../notes/server/episode-view.ts';
 import { type AskedMoment, type AskedPart } from '../question.ts';
 
 const writers = alias(accounts, 'answer_writers');
@@ -28,6 +30,8 @@ export async function loadQuestions(db: Database, where: SQL | undefined, order:
       question: questions,
       build: { id: builds.id, slug: buildSlugs.slug, name: builds.name },
       anchor: anchors,
+      edit: { id: edits.id, num: edits.rateNum, den: edits.rateDen },
+      place: places,
       episode: { id: episodes.id, number: episodes.number, title: episodes.title },
       note: notes,
       answer: answers,
@@ -45,6 +49,15 @@ export async function loadQuestions(db: Database, where: SQL | undefined, order:
       and(eq(episodes.id, anchors.episodeId), eq(episodes.state, 'published'), isNull(episodes.deletedAt)),
     )
     .leftJoin(
+      editions,
+      and(eq(editions.episodeId, episodes.id), isNull(editions.replacedAt), isNull(editions.withdrawnAt)),
+    )
+    .leftJoin(edits, eq(edits.id, editions.editId))
+    .leftJoin(
+      places,
+      and(eq(places.anchorId, anchors.id), eq(places.editId, edits.id), eq(places.position, 0)),
+    )
+    .leftJoin(
       notes,
       and(eq(notes.id, questions.noteId), eq(notes.audience, 'viewers'), isNull(notes.deletedAt)),
     )
@@ -59,9 +72,9 @@ export async function loadQuestions(db: Database, where: SQL | undefined, order:
     db,
     rows.map(({ question }) => question.id),
   );
-  return rows.map(({ anchor, episode, note, ...row }) => ({
+  return rows.map(({ anchor, edit, place, episode, note, ...row }) => ({
     ...row,
-    moment: momentOf(anchor, episode),
+    moment: momentOf(anchor, episode, edit, place),
     note: note && { id: note.id, text: note.text },
     parts: partsOf.get(row.question.id) ?? [],
   }));
@@ -69,14 +82,21 @@ export async function loadQuestions(db: Database, where: SQL | undefined, order:
 
 export type QuestionRow = Awaited<ReturnType<typeof loadQuestions>>[number];
 
+/** Where a question stands in the edition on show: nowhere when its moment is not in that edition's edit. */
 function momentOf(
   anchor: typeof anchors.$inferSelect | null,
   episode: { readonly id: string; readonly number: number; readonly title: string } | null,
+  shown: { readonly id: string; readonly num: number; readonly den: number } | null,
+  place: typeof places.$inferSelect | null,
 ): AskedMoment | null {
-  if (episode === null || anchor === null) return null;
-  const { frame, rateNum, rateDen } = anchor;
-  if (frame === null || rateNum === null || rateDen === null) return null;
-  const at = frameToMilliseconds(frame, { num: rateNum, den: rateDen }) / 1000;
+  const edit: EpisodeView['edit'] = shown && {
+    id: shown.id,
+    rate: { num: shown.num, den: shown.den },
+  };
+  if (episode === null || anchor === null || (edit !== null && place?.frame == null)) return null;
+  if (edit === null && anchor.clock !== 'episode' && anchor.typedFrame === null) return null;
+  const { frame, rate } = standsAt({ episodeId: episode.id, edit }, anchor, place);
+  const at = frameToMilliseconds(frame, rate) / 1000;
   return { episodeId: episode.id, number: episode.number, title: episode.title, at };
 }
 

@@ -1,9 +1,10 @@
-import { and, eq, inArray, isNull } from 'drizzle-orm';
+import { and, eq, inArray, isNotNull, isNull, sql } from 'drizzle-orm';
 import { newId } from '../../../db/columns.ts';
-import { episodes } from '../../../db/schema/episodes.ts';
+import { editions, episodes } from '../../../db/schema/episodes.ts';
 import { anchors, notes } from '../../../db/schema/notes.ts';
 import { parts } from '../../../db/schema/parts.ts';
 import { questionParts, questions } from '../../../db/schema/questions.ts';
+import { places } from '../../../db/schema/places.ts';
 import { type CautionTopic, isCautionTopic } from '../../../domain/cautions/topics.ts';
 import { findRisks } from '../../../domain/questions/risks.ts';
 import { formatClock } from '../../../domain/time/format-clock.ts';
@@ -13,6 +14,10 @@ import { Invalid } from '../../../server/errors.ts';
 import { loadBuild } from '../../builds/server/load-build.ts';
 import { getPublicBuild } from '../../builds/server/get-public-build.ts';
 import { getPublicEpisode } from '../../episodes/server/get-public-episode.ts';
+import { findShownView } from '../../notes/server/episode-view.ts';
+import { findEditById, findFirstEdit } from '../../notes/server/load-edits.ts';
+import { placeAgain } from '../../notes/server/place-edit.ts';
+import { columnsAt } from '../../notes/server/write-anchor.ts';
 import { type Ask } from '../question.ts';
 import { findLike } from './find-like.ts';
 
@@ -76,7 +81,7 @@ export async function writeQuestion(
   return id;
 }
 
-type Moment = Pick<typeof anchors.$inferSelect, 'episodeId' | 'frame' | 'rateNum' | 'rateDen'>;
+type Moment = Omit<typeof anchors.$inferInsert, 'id' | 'workshopId' | 'buildId'>;
 
 async function findMoment(context: WorkshopContext, input: AskedAbout): Promise<Moment | null> {
   if (input.episode === null || input.t === null) return null;
@@ -85,8 +90,11 @@ async function findMoment(context: WorkshopContext, input: AskedAbout): Promise<
   if (seconds !== null && input.t >= seconds) {
     throw new Invalid({ t: `The episode ends at ${formatClock(seconds)}. Choose a moment before that.` });
   }
-  const frame = secondsToFrame(input.t, rate);
-  return { episodeId: episode.id, frame, rateNum: rate.num, rateDen: rate.den };
+  const position = { frame: secondsToFrame(input.t, rate), endFrame: null, rate };
+  const { edit } = await findShownView(context.db, episode.id);
+  const through =
+    edit === null ? await findFirstEdit(context.db, episode.id) : await findEditById(context.db, edit.id);
+  return columnsAt(context.db, episode, position, through);
 }
 
 async function makeAnchor(
@@ -95,7 +103,8 @@ async function makeAnchor(
   moment: Moment,
 ): Promise<string> {
   const id = newId();
-  await db.insert(anchors).values({ id, workshopId: workshop.id, buildId, clock: 'episode', ...moment });
+  await db.insert(anchors).values({ id, workshopId: workshop.id, buildId, ...moment });
+  await placeAgain(db, buildId, [id]);
   return id;
 }
 
@@ -105,12 +114,23 @@ async function findNote(
   buildId: string,
   noteId: string,
 ): Promise<{ anchor: Moment; topics: CautionTopic[] }> {
-  const { episodeId, frame, rateNum, rateDen } = anchors;
   const [note] = await db
-    .select({ topic: notes.topic, anchor: { episodeId, frame, rateNum, rateDen } })
+    .select({ topic: notes.topic, anchor: anchors, episodeId: episodes.id })
     .from(notes)
-    .innerJoin(anchors, and(eq(anchors.id, notes.anchorId), eq(anchors.clock, 'episode')))
-    .innerJoin(episodes, and(eq(episodes.id, anchors.episodeId), eq(episodes.state, 'published')))
+    .innerJoin(anchors, eq(anchors.id, notes.anchorId))
+    .leftJoin(places, and(eq(places.anchorId, anchors.id), eq(places.position, 0), isNotNull(places.frame)))
+    .leftJoin(
+      editions,
+      and(eq(editions.editId, places.editId), isNull(editions.replacedAt), isNull(editions.withdrawnAt)),
+    )
+    // A note made on a clip belongs to the episodes that show it.
+    .innerJoin(
+      episodes,
+      and(
+        eq(episodes.id, sql`coalesce(${anchors.episodeId}, ${editions.episodeId})`),
+        eq(episodes.state, 'published'),
+      ),
+    )
     .where(
       and(
         eq(notes.id, noteId),
@@ -123,7 +143,9 @@ async function findNote(
       ),
     );
   if (!note) throw new Invalid({ note: 'That note is not there any more. Ask about the moment instead.' });
-  return { anchor: note.anchor, topics: isCautionTopic(note.topic) ? [note.topic] : [] };
+  const { id: _id, workshopId: _workshop, buildId: _build, createdAt: _at, ...moment } = note.anchor;
+  const anchor = { ...moment, shopUntil: null, endClipId: null, endFrame: null, episodeId: note.episodeId };
+  return { anchor, topics: isCautionTopic(note.topic) ? [note.topic] : [] };
 }
 
 async function requireParts(

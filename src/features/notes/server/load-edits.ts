@@ -1,4 +1,4 @@
-import { desc, eq, type SQL } from 'drizzle-orm';
+import { and, desc, eq, lt, type SQL } from 'drizzle-orm';
 import { type Database } from '../../../db/client.ts';
 import { editClips, edits } from '../../../db/schema/episodes.ts';
 import { type Edit } from '../../../domain/edit/edit.ts';
@@ -28,7 +28,20 @@ export function findEditById(db: Database, id: string): Promise<StoredEdit | nul
   return findEdit(db, eq(edits.id, id));
 }
 
-async function findEdit(db: Database, where: SQL): Promise<StoredEdit | null> {
+/** The edit that an episode had before one of its edits. */
+export function findEditBefore(
+  db: Database,
+  { episodeId, number }: Pick<StoredEdit, 'episodeId' | 'number'>,
+): Promise<StoredEdit | null> {
+  return findEdit(db, and(eq(edits.episodeId, episodeId), lt(edits.number, number)));
+}
+
+/** The edit whose timeline an episode had before it had any edit. */
+export function findFirstEdit(db: Database, episodeId: string): Promise<StoredEdit | null> {
+  return findEdit(db, and(eq(edits.episodeId, episodeId), eq(edits.number, 1)));
+}
+
+async function findEdit(db: Database, where: SQL | undefined): Promise<StoredEdit | null> {
   const [row] = await db.select().from(edits).where(where).orderBy(desc(edits.number)).limit(1);
   if (!row) return null;
   const matches = await db

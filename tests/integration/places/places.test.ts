@@ -1,0 +1,272 @@
+import { eq } from 'drizzle-orm';
+import { beforeEach, describe, expect, test } from 'vitest';
+import { newId } from '../../../src/db/columns.ts';
+import { editions } from '../../../src/db/schema/episodes.ts';
+import { clips } from '../../../src/db/schema/footage.ts';
+import { addChapter } from '../../../src/features/episodes/server/add-chapter.ts';
+import { getCompanion } from '../../../src/features/episodes/server/get-companion.ts';
+import { getDesk } from '../../../src/features/episodes/server/get-desk.ts';
+import { lookAtDesk } from '../../../src/features/episodes/server/look-at-desk.ts';
+import { makeEpisode } from '../../../src/features/episodes/server/make-episode.ts';
+import { placeFootage } from '../../../src/features/episodes/server/place-footage.ts';
+import { isInEdit, type Note } from '../../../src/features/notes/note.ts';
+import { changeNote } from '../../../src/features/notes/server/change-note.ts';
+import { deleteNote } from '../../../src/features/notes/server/delete-note.ts';
+import { restoreNote } from '../../../src/features/notes/server/restore-note.ts';
+import { setAppearance } from '../../../src/features/notes/server/set-appearance.ts';
+import { getBuild } from '../../../src/features/builds/server/get-build.ts';
+import { aShownBuild, aShownEpisode, BUILD, noteAt, RATE } from '../../support/companion.ts';
+import { aClip, editOf, noteMade, takeEdit } from '../../support/placed.ts';
+import { aWorkshop, type TestWorkshop } from '../../support/people.ts';
+import { testServices } from '../../support/services.ts';
+
+const services = await testServices();
+let shed: TestWorkshop;
+let parts: Map<string, string>;
+let buildId: string;
+let episode: string;
+let A: string;
+let B: string;
+
+beforeEach(async () => {
+  shed = await aWorkshop(services);
+  parts = await aShownBuild(shed.owner);
+  buildId = (await getBuild(shed.owner, { build: BUILD })).id;
+  A = await aClip(shed.owner, buildId, 'C0043.MP4');
+  B = await aClip(shed.owner, buildId, 'C0044.MP4');
+  episode = (await makeEpisode(shed.owner, { build: BUILD, title: 'The shaft' })).id;
+});
+
+const NAMES = () => ({ A, B });
+/** Ten seconds of A from its second 20 on, then ten of B from its beginning. */
+const FIRST = editOf('1 A V C 500 750 0 250', '2 B V C 0 250 250 500');
+/** B comes first, and A a second earlier; its end is gone. */
+const SECOND = editOf('1 B V C 0 100 0 100', '2 A V C 475 640 100 265');
+
+const look = () => lookAtDesk(shed.owner, { build: BUILD, episode });
+const told = (notes: readonly Note[]) =>
+  notes.map((note) => [
+    note.text,
+    isInEdit(note) ? note.position.frame : (note.place?.dropped ?? 'not in this edit'),
+  ]);
+async function atDesk() {
+  return told((await look()).notes);
+}
+async function theNote(text: string): Promise<Note> {
+  const found = (await look()).notes.find((note) => note.text === text);
+  if (!found) throw new Error(`No note “${text}” at the desk.`);
+  return found;
+}
+
+describe('a note made on a clip', () => {
+  test('turns up at the desk of the episode that uses its moment, and follows the next edit', async () => {
+    await noteMade(shed.owner, buildId, 'Face it.', { clipId: A, frame: 520 });
+    await noteMade(shed.owner, buildId, 'Elsewhere.', { clipId: A, frame: 5000 });
+    expect(await atDesk()).toEqual([]);
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    expect(await atDesk()).toEqual([['Face it.', 20]]);
+    await takeEdit(shed.owner, episode, SECOND, NAMES());
+    expect(await atDesk()).toEqual([['Face it.', 145]]);
+  });
+
+  test('that the next edit drops is told at the desk with the segment, and comes back with a later one', async () => {
+    await noteMade(shed.owner, buildId, 'Face it.', { clipId: A, frame: 740 });
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    await takeEdit(shed.owner, episode, SECOND, NAMES());
+    await takeEdit(shed.owner, episode, editOf('1 B V C 0 250 0 250'), NAMES());
+    expect(await atDesk()).toEqual([['Face it.', 'C0043.MP4 from 0:20 to 0:30']]);
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    expect(await atDesk()).toEqual([['Face it.', 240]]);
+  });
+
+  test('added while there is an edit has its place at once', async () => {
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    await noteMade(shed.owner, buildId, 'Face it.', { clipId: B, frame: 50 });
+    expect(await atDesk()).toEqual([['Face it.', 300]]);
+  });
+
+  test('used twice has its main place in the longest use and says where else', async () => {
+    await noteMade(shed.owner, buildId, 'Face it.', { clipId: A, frame: 520 });
+    await takeEdit(shed.owner, episode, editOf('1 A V C 510 535 0 25', '2 A V C 500 750 25 275'), NAMES());
+    const note = await theNote('Face it.');
+    expect([note.position.frame, note.place?.also]).toEqual([45, [10 / 25]]);
+  });
+
+  test('just outside a used stretch is moved to the nearest and says so', async () => {
+    await noteMade(shed.owner, buildId, 'Face it.', { clipId: A, frame: 760 });
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    const note = await theNote('Face it.');
+    expect([note.position.frame, note.place?.status]).toEqual([249, 'snapped']);
+  });
+
+  test('about a sound that has no track in this edit is placed by the picture and says so', async () => {
+    await noteMade(shed.owner, buildId, 'Hear it.', { clipId: A, frame: 520, of: 'sound' });
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    const note = await theNote('Hear it.');
+    expect([note.position.frame, note.place?.byPicture]).toEqual([20, true]);
+  });
+
+  test('with a name that two cameras gave lies on the clip that the name was matched to', async () => {
+    const other = await aClip(shed.owner, buildId, 'C0043.MP4');
+    await noteMade(shed.owner, buildId, 'Not this.', { clipId: other, frame: 520 });
+    await noteMade(shed.owner, buildId, 'This.', { clipId: A, frame: 520 });
+    await takeEdit(shed.owner, episode, editOf('1 C0043 V C 500 750 0 250'), { C0043: A });
+    expect(await atDesk()).toEqual([['This.', 20]]);
+  });
+});
+
+describe('a note made in the shop', () => {
+  test('lands on the clip that ran, and moves when it becomes known when that was', async () => {
+    const T = new Date('2026-11-12T14:20:00Z');
+    await noteMade(shed.owner, buildId, 'Face it.', { shopAt: new Date(T.getTime() + 22_000) });
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    expect(await atDesk()).toEqual([]);
+    await shed.owner.db.update(clips).set({ startSetAt: T }).where(eq(clips.id, A));
+    await placeFootage(services, { build: buildId });
+    expect(await atDesk()).toEqual([['Face it.', 50]]);
+    await shed.owner.db
+      .update(clips)
+      .set({ startSetAt: new Date(T.getTime() + 1000) })
+      .where(eq(clips.id, A));
+    await placeFootage(services, { build: buildId });
+    expect(await atDesk()).toEqual([['Face it.', 25]]);
+  });
+});
+
+describe('what was typed at the desk', () => {
+  test('before there was an edit stays where it was typed when the first is taken, and moves with the next', async () => {
+    await noteAt(shed.owner, episode, 1, { text: 'Face it.' });
+    await noteAt(shed.owner, episode, 12, { text: 'Drill it.' });
+    await noteAt(shed.owner, episode, 9, { text: 'Cut.' });
+    await addChapter(shed.owner, {
+      id: newId(),
+      build: BUILD,
+      episode,
+      title: 'Housing',
+      position: { frame: 250, endFrame: null, rate: RATE },
+    });
+    await setAppearance(shed.owner, {
+      id: newId(),
+      build: BUILD,
+      episode,
+      partId: parts.get('117') ?? '',
+      position: { frame: 100, endFrame: 300, rate: RATE },
+    });
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    expect(await atDesk()).toEqual([
+      ['Face it.', 25],
+      ['Cut.', 225],
+      ['Drill it.', 300],
+    ]);
+    const desk = await look();
+    expect(desk.chapters[0]?.position).toMatchObject({ frame: 250 });
+    expect(desk.appearances[0]?.position).toMatchObject({ frame: 100, endFrame: 300 });
+    await takeEdit(shed.owner, episode, SECOND, NAMES());
+    expect(await atDesk()).toEqual([
+      ['Cut.', 'C0043.MP4 from 0:20 to 0:30'],
+      ['Drill it.', 50],
+      ['Face it.', 150],
+    ]);
+  });
+
+  test('while there is an edit is kept on the clip beneath it', async () => {
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    await noteAt(shed.owner, episode, 2, { text: 'Face it.' });
+    expect(await atDesk()).toEqual([['Face it.', 50]]);
+    await takeEdit(shed.owner, episode, SECOND, NAMES());
+    expect(await atDesk()).toEqual([['Face it.', 175]]);
+  });
+
+  test('in black stays an episode time', async () => {
+    await takeEdit(shed.owner, episode, editOf('1 A V C 500 750 0 250'), NAMES());
+    await noteAt(shed.owner, episode, 20, { text: 'The end.' });
+    await takeEdit(shed.owner, episode, SECOND, NAMES());
+    expect(await atDesk()).toEqual([['The end.', 500]]);
+  });
+
+  test('is moved, deleted and brought back as ever', async () => {
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    const id = await noteAt(shed.owner, episode, 2, { text: 'Face it.' });
+    const ref = { build: BUILD, episode, note: id };
+    const note = await theNote('Face it.');
+    const form = { ...note, askedId: null };
+    const moved = await changeNote(shed.owner, {
+      ...form,
+      ...ref,
+      position: { frame: 260, endFrame: 270, rate: RATE },
+    });
+    expect(moved.position).toEqual({ frame: 260, endFrame: 270, rate: RATE });
+    const back = await changeNote(shed.owner, {
+      ...form,
+      ...ref,
+      version: moved.version,
+      position: note.position,
+    });
+    expect(back.position).toEqual(note.position);
+    const gone = await deleteNote(shed.owner, { ...ref, version: back.version });
+    expect(await atDesk()).toEqual([]);
+    await restoreNote(shed.owner, { ...ref, version: gone.version });
+    expect(await atDesk()).toEqual([['Face it.', 50]]);
+  });
+
+  test('changed only in its words keeps the moment that it was made at', async () => {
+    await noteMade(shed.owner, buildId, 'Face it.', { clipId: A, frame: 760 });
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    const note = await theNote('Face it.');
+    await changeNote(shed.owner, {
+      ...note,
+      text: 'Face it off.',
+      askedId: null,
+      build: BUILD,
+      episode,
+      note: note.id,
+    });
+    await takeEdit(shed.owner, episode, editOf('1 A V C 500 800 0 300'), NAMES());
+    expect(await atDesk()).toEqual([['Face it off.', 260]]);
+  });
+});
+
+describe('a published page', () => {
+  const ref = { build: BUILD, number: 1 };
+  const shown = async () => {
+    const { notes, chapters, appearances } = await getCompanion(shed.viewer, { ...ref, number });
+    return JSON.stringify([notes, chapters, appearances]);
+  };
+  let number: number;
+
+  beforeEach(async () => {
+    const video = { address: 'https://video.example/1', length: '1:00' };
+    episode = await aShownEpisode(shed.owner, parts, video);
+    number = (await getDesk(shed.owner, { build: BUILD, episode })).episode.number;
+  });
+
+  test('shows the same after a first edit, a second one, and what is moved on the new timeline', async () => {
+    const before = await shown();
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    expect(await shown()).toBe(before);
+    await takeEdit(shed.owner, episode, SECOND, NAMES());
+    expect(await shown()).toBe(before);
+    const note = await theNote('Seats came out at 1-1/2 in.');
+    await changeNote(shed.owner, {
+      ...note,
+      askedId: null,
+      build: BUILD,
+      episode,
+      note: note.id,
+      position: { frame: 5, endFrame: null, rate: RATE },
+    });
+    expect(await shown()).toBe(before);
+  });
+
+  test('with an edit shows what that edit has, whatever later ones do', async () => {
+    const edit = await takeEdit(shed.owner, episode, FIRST, NAMES());
+    await shed.owner.db.update(editions).set({ editId: edit }).where(eq(editions.episodeId, episode));
+    const before = await shown();
+    await takeEdit(shed.owner, episode, SECOND, NAMES());
+    expect(await shown()).toBe(before);
+    await noteMade(shed.owner, buildId, 'From the shed.', { clipId: A, frame: 700 });
+    expect((await getCompanion(shed.viewer, { ...ref, number })).notes.map(({ text }) => text)).toContain(
+      'From the shed.',
+    );
+  });
+});
