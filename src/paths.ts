@@ -41,6 +41,9 @@ export const paths = {
   },
   media: (file: string, variant: string) => `/media/${part(file)}/${part(variant)}`,
 
+  worksheets: () => '/worksheets',
+  worksheet: (sheet: string) => `/worksheets/${part(sheet)}`,
+
   signUp: () => '/sign-up',
   checkMail: () => '/sign-up/check-mail',
   confirmAddress: (token: string) => `/confirm?token=${part(token)}`,

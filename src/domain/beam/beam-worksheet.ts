@@ -40,8 +40,16 @@ const inputs = {
   shs: optional(sizesField('Square hollow section', '50x3', 2)),
   rhs: optional(sizesField('Hollow section, standing height by width by wall', '100x50x4', 3)),
   pipe: optional(sizesField('Pipe or round tube', '48.3x3.2', 2)),
-  modulus: withDefault(quantityField('Modulus of elasticity', '210 GPa', 'stress'), STEEL.modulus),
-  yield: withDefault(quantityField('Yield of the material', '235 MPa', 'stress'), STEEL.yield),
+  modulus: withDefault(
+    quantityField('Modulus of elasticity', '210 GPa', 'stress'),
+    STEEL.modulus,
+    '210 GPa, steel',
+  ),
+  yield: withDefault(
+    quantityField('Yield of the material', '235 MPa', 'stress'),
+    STEEL.yield,
+    '235 MPa, plain steel',
+  ),
 };
 type Values = ValuesOf<typeof inputs>;
 

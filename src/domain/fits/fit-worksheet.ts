@@ -42,8 +42,12 @@ const inputs = {
   hole: optional(classField('Hole', 'H7', 'hole')),
   shaft: optional(classField('Shaft', 'k6', 'shaft')),
   measured: optional(lengthField('Measured', '25.31')),
-  instrument: withDefault(lengthField('Instrument, plus or minus', '0.01', { zero: true }), new Fraction(0)),
-  dial: withDefault(choiceField('The dial reads', ['diameter', 'radius']), 'diameter'),
+  instrument: withDefault(
+    lengthField('Instrument, plus or minus', '0.01', { zero: true }),
+    new Fraction(0),
+    'nothing',
+  ),
+  dial: withDefault(choiceField('The dial reads', ['diameter', 'radius']), 'diameter', 'diameter'),
 };
 type Values = ValuesOf<typeof inputs>;
 

@@ -65,11 +65,19 @@ const inputs = {
   pressure: quantityField('Relief setting', '165 bar', 'pressure'),
   pump: optional(pumpField),
   pressing: optional(lengthField('Stroke under load', '80', { zero: true })),
-  efficiency: withDefault(numberField('Efficiency of the pump', '0.85', 0.3, 1), new Fraction('0.85')),
+  efficiency: withDefault(
+    numberField('Efficiency of the pump', '0.85', 0.3, 1),
+    new Fraction('0.85'),
+    '0.85',
+  ),
   hose: optional(lengthField('Bore of the pressure hose', '1/2 in')),
   hoserating: optional(quantityField('Rating of the hose', '275 bar', 'pressure')),
   engine: optional(quantityField('Engine', '4 kW', 'power')),
-  rating: withDefault(choiceField('The engine’s power is', ['continuous', 'peak']), 'continuous'),
+  rating: withDefault(
+    choiceField('The engine’s power is', ['continuous', 'peak']),
+    'continuous',
+    'continuous',
+  ),
   extended: optional(lengthField('Length between the ends, extended', '1300')),
   mounting: optional(choiceField('Ends', ['pinned', 'fixed-pinned', 'fixed-fixed', 'fixed-free'])),
 };

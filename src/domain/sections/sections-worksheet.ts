@@ -31,9 +31,13 @@ const inputs = {
   angle: optional(angleSizes()),
   pipe: optional(sizesField('Pipe or round tube', '48.3x3.2', 2)),
   length: optional(lengthField('Length', '6000')),
-  quantity: withDefault(numberField('Pieces', '4', 1, 100_000), new Fraction(1)),
-  density: withDefault(quantityField('Density', '7850', 'density', 'kg/m3'), STEEL_DENSITY),
-  finish: withDefault(choiceField('Hollow sections made', ['cold', 'hot', 'sharp']), 'cold'),
+  quantity: withDefault(numberField('Pieces', '4', 1, 100_000), new Fraction(1), '1'),
+  density: withDefault(
+    quantityField('Density', '7850', 'density', 'kg/m3'),
+    STEEL_DENSITY,
+    '7850 kg/m³, steel',
+  ),
+  finish: withDefault(choiceField('Hollow sections made', ['cold', 'hot', 'sharp']), 'cold', 'cold'),
 };
 type Values = ValuesOf<typeof inputs>;
 

@@ -50,7 +50,11 @@ const electrodeField: Field<Electrode> = {
 };
 
 const inputs = {
-  process: withDefault(choiceField('Process', ['stick', 'mig', 'tig', 'flux-cored', 'gas']), 'stick'),
+  process: withDefault(
+    choiceField('Process', ['stick', 'mig', 'tig', 'flux-cored', 'gas']),
+    'stick',
+    'stick',
+  ),
   electrode: electrodeField,
   diameter: lengthField('Diameter', '3.2'),
   leg: lengthField('Leg', '5'),
@@ -58,8 +62,12 @@ const inputs = {
   thickness: lengthField('Thickness', '10'),
   other: lengthField('Thickness of the other part', '12'),
   cyclic: flagField('Load that comes and goes'),
-  efficiency: withDefault(numberField('Efficiency of deposition', '0.62', 0.2, 1), new Fraction('0.62')),
-  rod: withDefault(lengthField('Length of an electrode', '350'), new Fraction(350)),
+  efficiency: withDefault(
+    numberField('Efficiency of deposition', '0.62', 0.2, 1),
+    new Fraction('0.62'),
+    '0.62',
+  ),
+  rod: withDefault(lengthField('Length of an electrode', '350'), new Fraction(350), '350 mm'),
   volts: optional(quantityField('Arc voltage', '25 V', 'voltage', 'V')),
   amps: optional(quantityField('Current', '120 A', 'current', 'A')),
   speed: optional(lengthField('Travel in a minute', '150')),

@@ -1,10 +1,11 @@
 import Fraction from 'fraction.js';
 import { type Answer, right, wrong } from '../answer.ts';
-import { inMillimetres, type LengthUnit } from '../lengths/length.ts';
+import { inMillimetres, type Length, type LengthUnit } from '../lengths/length.ts';
 import { parseLength, parseLengths } from '../lengths/parse-length.ts';
 import { readNumber } from '../lengths/read-number.ts';
 import { parseQuantity } from '../quantities/parse-quantity.ts';
 import { type QuantityKind } from '../quantities/quantity.ts';
+import { sayLength, sayLengths, sayQuantity } from './read-back.ts';
 import { type Field } from './worksheet.ts';
 
 /** The longest length that a worksheet takes: a kilometre. */
@@ -28,22 +29,35 @@ interface LengthOptions {
   readonly zero?: boolean;
 }
 
-/** Millimetres, exactly, of a length above zero and at most a kilometre. */
-export function lengthField(
+/** A length as it was typed, above zero and at most a kilometre. */
+export function lengthTextField(
   label: string,
   example: string,
   { unit = 'mm', zero = false }: LengthOptions = {},
-): Field<Fraction> {
+): Field<Length> {
   return {
     label,
     example,
+    readBack: (text) => sayLength(text, unit),
     read: reader(example, (text) => {
       const read = parseLength(text, unit);
       if (!read.ok) return read;
       const mm = inMillimetres(read.value);
       if (mm.lte(0) && !(zero && mm.equals(0))) return wrong('It has to be above zero.');
-      return mm.gt(LONGEST_MM) ? wrong('It is longer than a kilometre.') : right(mm);
+      return mm.gt(LONGEST_MM) ? wrong('It is longer than a kilometre.') : read;
     }),
+  };
+}
+
+/** Millimetres, exactly, of a length above zero and at most a kilometre. */
+export function lengthField(label: string, example: string, options?: LengthOptions): Field<Fraction> {
+  const field = lengthTextField(label, example, options);
+  return {
+    ...field,
+    read: (given) => {
+      const read = field.read(given);
+      return read.ok ? right(inMillimetres(read.value)) : read;
+    },
   };
 }
 
@@ -52,6 +66,7 @@ export function sizesField(label: string, example: string, count: number): Field
   return {
     label,
     example,
+    readBack: sayLengths,
     read: reader(example, (text) => {
       const read = parseLengths(text, 'mm');
       if (!read.ok) return read;
@@ -74,6 +89,7 @@ export function quantityField(
   return {
     label,
     example,
+    readBack: (text) => sayQuantity(text, kind, defaultUnit),
     read: reader(example, (text) => {
       const read = parseQuantity(text, kind, defaultUnit);
       if (!read.ok) return read;
@@ -108,6 +124,7 @@ export function choiceField<const Choice extends string>(
   return {
     label,
     example: choices[0],
+    choices,
     read: (given) => {
       const found = choices.find((choice) => choice === given);
       return found === undefined ? wrong(`Choose one of ${known}.`) : right(found);
@@ -143,15 +160,18 @@ export function flagField(label: string): Field<boolean> {
 export function optional<Value>(field: Field<Value>): Field<Value | null> {
   return {
     ...field,
+    optional: true,
     read: (given) =>
       given === undefined || given === null || given === '' ? right(null) : field.read(given),
   };
 }
 
-/** A field that has a value when it is left out. */
-export function withDefault<Value>(field: Field<Value>, value: NoInfer<Value>): Field<Value> {
+/** A field that has a value when it is left out. @param said the value as a maker reads it */
+export function withDefault<Value>(field: Field<Value>, value: NoInfer<Value>, said: string): Field<Value> {
   return {
     ...field,
+    optional: true,
+    otherwise: said,
     read: (given) =>
       given === undefined || given === null || given === '' ? right(value) : field.read(given),
   };

@@ -44,6 +44,14 @@ export interface Field<Value> {
   readonly example: string;
   /** A yes or no, which is given by its name alone. */
   readonly flag?: true;
+  /** The words that may be chosen from. */
+  readonly choices?: readonly string[];
+  /** It may be left out. */
+  readonly optional?: true;
+  /** What it is taken as when it is left out, where that is something, as a maker reads it. */
+  readonly otherwise?: string;
+  /** How a text was read, in both systems; null for a text that cannot be read. */
+  readonly readBack?: (text: string) => string | null;
   readonly read: (given: unknown) => Answer<Value>;
 }
 

@@ -63,6 +63,28 @@ export const PAGES: readonly PageState[] = [
   { route: '404', at: () => '/nowhere-at-all' },
   { route: 'error', as: editor, at: bench('/settings') },
   { route: '500', at: () => '/500' },
+  { route: 'worksheets/index', at: () => '/worksheets' },
+  { route: 'worksheets/lengths', at: () => '/worksheets/lengths?text=38' },
+  { route: 'worksheets/holes', at: () => '/worksheets/holes?thread=M12' },
+  { route: 'worksheets/fits', at: () => '/worksheets/fits' },
+  { route: 'worksheets/fits', state: 'filled in', at: () => '/worksheets/fits?size=25&hole=H7&shaft=k6' },
+  {
+    route: 'worksheets/fits',
+    state: 'still to come off',
+    at: () => '/worksheets/fits?size=25&shaft=k6&measured=25.31&instrument=0.01',
+  },
+  { route: 'worksheets/fits', state: 'refused', at: () => '/worksheets/fits?size=25&hole=k6' },
+  {
+    route: 'worksheets/seats',
+    at: () => '/worksheets/seats?bore=25&outside=52&shaft=k6&housing=M7&turning=inner',
+  },
+  { route: 'worksheets/sections', at: () => '/worksheets/sections?shs=50x3&length=6000&quantity=4' },
+  { route: 'worksheets/ports', at: () => '/worksheets/ports?diameter=16.6&pitch=19+tpi' },
+  { route: 'worksheets/drive', at: () => '/worksheets/drive?rpm=1440&driver=80&driven=240&diameter=300' },
+  {
+    route: 'worksheets/square',
+    at: () => '/worksheets/square?width=800&height=1200&diagonal=1443&other=1441',
+  },
   { route: 'w/[workshop]', at: (world) => `/w/${world.owner.workshop}` },
   { route: 'w/[workshop]/[build]/index', at: (world) => `/w/${world.owner.workshop}/${world.build}` },
   {

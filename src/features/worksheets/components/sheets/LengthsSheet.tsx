@@ -1,0 +1,7 @@
+import { lengthsWorksheet } from '../../../../domain/lengths/lengths-worksheet.ts';
+import { Sheet, type SheetProps } from '../Sheet.tsx';
+
+/** A length in both systems. */
+export function LengthsSheet({ typed }: SheetProps) {
+  return <Sheet sheet={lengthsWorksheet} typed={typed} example={{ text: '1-1/2 in' }} />;
+}

@@ -1,0 +1,9 @@
+import { sectionsWorksheet } from '../../../../domain/sections/sections-worksheet.ts';
+import { Sheet, type SheetProps } from '../Sheet.tsx';
+
+/** What a section weighs. */
+export function SectionsSheet({ typed }: SheetProps) {
+  return (
+    <Sheet sheet={sectionsWorksheet} typed={typed} example={{ shs: '50x3', length: '6000', quantity: '4' }} />
+  );
+}
