@@ -25,6 +25,8 @@ export const paths = {
     `/w/${part(workshop)}/${part(build)}/episodes/${String(number)}/captions/${part(captions)}.vtt`,
   part: (workshop: string, build: string, partId: string) =>
     `/w/${part(workshop)}/${part(build)}/parts/${part(partId)}`,
+  keptWorksheet: (workshop: string, build: string, worksheet: string) =>
+    `/w/${part(workshop)}/${part(build)}/worksheets/${part(worksheet)}`,
   /** @param build when only one build is asked for */
   subscribe: (workshop: string, build?: string) =>
     `/w/${part(workshop)}/${build === undefined ? '' : `${part(build)}/`}subscribe`,
@@ -87,6 +89,9 @@ export const paths = {
     onBench(workshop, build, `parts/${part(partId)}`),
   importParts: (workshop: string, build: string) => onBench(workshop, build, 'parts/import'),
   footage: (workshop: string, build: string) => onBench(workshop, build, 'footage'),
+  benchWorksheets: (workshop: string, build: string) => onBench(workshop, build, 'worksheets'),
+  benchWorksheet: (workshop: string, build: string, worksheet: string) =>
+    onBench(workshop, build, `worksheets/${part(worksheet)}`),
   buildSettings: (workshop: string, build: string) => onBench(workshop, build, 'settings'),
   episodes: (workshop: string, build: string) => onBench(workshop, build, 'episodes'),
   episodesOutAlready: (workshop: string, build: string) => onBench(workshop, build, 'episodes/out-already'),

@@ -52,6 +52,7 @@ export function benchGroups(
               item('Stages', paths.stages(workshop.slug, build.slug)),
               item('Parts', paths.parts(workshop.slug, build.slug)),
               item('Footage', paths.footage(workshop.slug, build.slug)),
+              item('Worksheets', paths.benchWorksheets(workshop.slug, build.slug)),
               item('Episodes', paths.episodes(workshop.slug, build.slug)),
               item('This build', paths.buildSettings(workshop.slug, build.slug)),
             ],

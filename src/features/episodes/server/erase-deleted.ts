@@ -8,6 +8,7 @@ import { files } from '../../../db/schema/files.ts';
 import { anchors, appearances, chapters, noteParts, notes } from '../../../db/schema/notes.ts';
 import { parts } from '../../../db/schema/parts.ts';
 import { questionParts, questions } from '../../../db/schema/questions.ts';
+import { worksheets } from '../../../db/schema/worksheets.ts';
 import { type Services } from '../../../server/services.ts';
 import { KEPT_DAYS } from '../../builds/build.ts';
 import { eraseDeletedFiles } from '../../files/server/erase-deleted-files.ts';
@@ -23,6 +24,7 @@ export async function eraseDeleted(services: Services, now: Date): Promise<void>
   const { db } = services;
   const before = new Date(now.getTime() - KEPT_DAYS * DAY_MS);
   await eraseMarked(db, before);
+  await eraseWorksheets(db, before);
   await db.delete(diaryEntries).where(lt(diaryEntries.deletedAt, before));
   await eraseStages(db, before);
   await eraseParts(db, before);
@@ -52,6 +54,21 @@ async function eraseMarked(db: Database, before: Date): Promise<void> {
   }
 }
 
+/** A worksheet outlives what it belongs to, and then is the build's. */
+async function eraseWorksheets(db: Database, before: Date): Promise<void> {
+  await db.delete(worksheets).where(lt(worksheets.deletedAt, before));
+  const owners = [
+    { table: stages, column: worksheets.stageId, none: { stageId: null } },
+    { table: parts, column: worksheets.partId, none: { partId: null } },
+    { table: diaryEntries, column: worksheets.entryId, none: { entryId: null } },
+    { table: episodes, column: worksheets.episodeId, none: { episodeId: null } },
+  ] as const;
+  for (const { table, column, none } of owners) {
+    const old = db.select({ id: table.id }).from(table).where(lt(table.deletedAt, before));
+    await db.update(worksheets).set(none).where(inArray(column, old));
+  }
+}
+
 /** Entries that stayed in the diary when their stage was deleted stay now too, and point at it no more. */
 async function eraseStages(db: Database, before: Date): Promise<void> {
   const old = db.select({ id: stages.id }).from(stages).where(lt(stages.deletedAt, before));
@@ -75,6 +92,7 @@ async function eraseEpisodes(db: Database, which: SQL): Promise<void> {
 
 /** Leaves nothing of a build but its files, which are marked to be erased with their objects. */
 async function emptyBuild(db: Database, id: string, before: Date): Promise<void> {
+  await db.delete(worksheets).where(eq(worksheets.buildId, id));
   await eraseEpisodes(db, eq(episodes.buildId, id));
   for (const table of [questions, anchors, diaryEntries, stages, parts] as const)
     await db.delete(table as PgTable).where(eq(table.buildId, id));

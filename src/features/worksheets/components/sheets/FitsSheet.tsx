@@ -46,11 +46,12 @@ function Picture({ result: { hole, shaft, fit, takeOff } }: { readonly result: F
 }
 
 /** Limits and fits. */
-export function FitsSheet({ typed }: SheetProps) {
+export function FitsSheet(props: SheetProps) {
   return (
     <Sheet
+      {...props}
       sheet={fitWorksheet}
-      typed={typed}
+
       example={{ size: '25', hole: 'H7', shaft: 'k6' }}
       picture={({ result }) => <Picture result={result} />}
     />

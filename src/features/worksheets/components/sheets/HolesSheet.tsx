@@ -37,11 +37,12 @@ const COLUMNS = [
 ];
 
 /** Holes to be tapped, cleared or pinned. */
-export function HolesSheet({ typed }: SheetProps) {
+export function HolesSheet(props: SheetProps) {
   return (
     <Sheet
+      {...props}
       sheet={holesWorksheet}
-      typed={typed}
+
       example={{ thread: 'M12' }}
       picture={({ result }) => <Table caption="Holes" hideCaption columns={COLUMNS} rows={rowsOf(result)} />}
     />

@@ -2,6 +2,6 @@ import { lengthsWorksheet } from '../../../../domain/lengths/lengths-worksheet.t
 import { Sheet, type SheetProps } from '../Sheet.tsx';
 
 /** A length in both systems. */
-export function LengthsSheet({ typed }: SheetProps) {
-  return <Sheet sheet={lengthsWorksheet} typed={typed} example={{ text: '1-1/2 in' }} />;
+export function LengthsSheet(props: SheetProps) {
+  return <Sheet {...props} sheet={lengthsWorksheet} example={{ text: '1-1/2 in' }} />;
 }

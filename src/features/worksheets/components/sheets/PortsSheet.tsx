@@ -40,11 +40,12 @@ function Candidate(candidate: PortCandidate) {
 }
 
 /** Which thread a port has. */
-export function PortsSheet({ typed }: SheetProps) {
+export function PortsSheet(props: SheetProps) {
   return (
     <Sheet
+      {...props}
       sheet={portsWorksheet}
-      typed={typed}
+
       example={{ diameter: '16.6', pitch: '19 tpi', side: 'external' }}
       picture={({ result: { candidates } }) =>
         candidates.length > 0 && (

@@ -3,11 +3,12 @@ import { Sheet, type SheetProps } from '../Sheet.tsx';
 import { FitPicture } from './FitPicture.tsx';
 
 /** The seats of a bearing. */
-export function SeatsSheet({ typed }: SheetProps) {
+export function SeatsSheet(props: SheetProps) {
   return (
     <Sheet
+      {...props}
       sheet={seatsWorksheet}
-      typed={typed}
+
       example={{ bore: '25', outside: '52', shaft: 'k6', housing: 'H7', turning: 'inner' }}
       picture={({ result: { inner, outer, usualShaft, usualHousing } }) => (
         <>

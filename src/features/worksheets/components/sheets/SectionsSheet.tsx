@@ -2,8 +2,8 @@ import { sectionsWorksheet } from '../../../../domain/sections/sections-workshee
 import { Sheet, type SheetProps } from '../Sheet.tsx';
 
 /** What a section weighs. */
-export function SectionsSheet({ typed }: SheetProps) {
+export function SectionsSheet(props: SheetProps) {
   return (
-    <Sheet sheet={sectionsWorksheet} typed={typed} example={{ shs: '50x3', length: '6000', quantity: '4' }} />
+    <Sheet {...props} sheet={sectionsWorksheet} example={{ shs: '50x3', length: '6000', quantity: '4' }} />
   );
 }
