@@ -1,5 +1,5 @@
 import { beforeAll, describe, expect, test } from 'vitest';
-import { makeStage } from '../../../src/features/builds/server/make-stage.ts';
+import { addStage } from '../../../src/features/builds/server/add-stage.ts';
 import { changeBuild } from '../../../src/features/builds/server/change-build.ts';
 import { makeBuild } from '../../../src/features/builds/server/make-build.ts';
 import { addWorksheet } from '../../../src/features/worksheets/server/add-worksheet.ts';
@@ -51,7 +51,7 @@ describe('a worksheet', () => {
 
   test('belongs to a stage, and is named after it', async () => {
     await aBuild();
-    const { id: stage } = await makeStage(shed.owner, { build, name: 'Drum', about: '' });
+    const { id: stage } = await addStage(shed.owner, { build, name: 'Drum', about: '' });
     const { items } = await listOwners(shed.owner, { build });
     expect(items).toEqual([{ value: `stage:${stage}`, label: 'Stage: Drum' }]);
     await addWorksheet(shed.owner, { ...FIT, of: { kind: 'stage', id: stage }, build });
@@ -68,7 +68,9 @@ describe('a worksheet', () => {
     const first = { ...FIT, inputs: { size: '30', hole: 'H7' }, build, worksheet: id, version: 1 };
     await changeWorksheet(shed.editor, first);
     await expect(changeWorksheet(shed.owner, { ...first, title: 'Mine' })).rejects.toThrow(Conflict);
-    expect(await kept()).toMatchObject([{ title: FIT.title, inputs: { size: '30', hole: 'H7' }, version: 2 }]);
+    expect(await kept()).toMatchObject([
+      { title: FIT.title, inputs: { size: '30', hole: 'H7' }, version: 2 },
+    ]);
   });
 
   test('is deleted and brought back', async () => {
@@ -124,11 +126,11 @@ describe('keeping, changing, deleting and bringing back a worksheet', () => {
       restoreWorksheet(context, { build, worksheet, version: 1 }),
   };
 
-  test.each(Object.entries(verbs))('%s refuses a moderator and a viewer', async (_name, run) => {
+  test.each(Object.entries(verbs))('%s refuses a moderator, and is not there for a viewer', async (_name, run) => {
     await aBuild();
     const { id } = await addWorksheet(shed.owner, { ...FIT, build });
     await expect(run(shed.moderator, id)).rejects.toThrow(Forbidden);
-    await expect(run(shed.viewer, id)).rejects.toThrow(Forbidden);
+    await expect(run(shed.viewer, id)).rejects.toThrow(NotFound);
   });
 
   test.each(Object.entries(verbs))('%s does not find another workshop’s', async (_name, run) => {

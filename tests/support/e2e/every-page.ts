@@ -213,6 +213,16 @@ export const PAGES: readonly PageState[] = [
   { route: 'bench/[workshop]/[build]/parts/index', as: owner, at: inBuild(() => '/parts') },
   { route: 'bench/[workshop]/[build]/parts/[part]', as: owner, at: inBuild(({ part }) => `/parts/${part}`) },
   { route: 'bench/[workshop]/[build]/parts/import', as: owner, at: inBuild(() => '/parts/import') },
+  { route: 'bench/[workshop]/[build]/worksheets/index', as: editor, at: inBuild(() => '/worksheets') },
+  {
+    route: 'bench/[workshop]/[build]/worksheets/[worksheet]',
+    as: editor,
+    at: inBuild(({ worksheet }) => `/worksheets/${worksheet}`),
+  },
+  {
+    route: 'w/[workshop]/[build]/worksheets/[worksheet]',
+    at: (world) => `/w/${world.owner.workshop}/${world.build}/worksheets/${world.worksheet}`,
+  },
   { route: 'bench/[workshop]/[build]/diary', as: editor, at: inBuild(() => '/diary') },
   {
     route: 'bench/[workshop]/[build]/episodes/[episode]/index',

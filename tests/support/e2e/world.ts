@@ -10,6 +10,7 @@ import { addPart } from '../../../src/features/parts/server/add-part.ts';
 import { addSubscribers, tokensOf } from '../audience.ts';
 import { inWorkshop, type TestPerson } from '../people.ts';
 import { ask } from '../questions.ts';
+import { addWorksheet } from '../../../src/features/worksheets/server/add-worksheet.ts';
 import { type Owner, type Product } from './product.ts';
 
 /** What the pages have to show: a workshop with its team, an invitation that waits, and a build on show with an episode. */
@@ -31,6 +32,8 @@ export interface World {
   /** One that is risky and answered by the owner, and one that waits. */
   readonly question: string;
   readonly waiting: string;
+  /** One for everyone. */
+  readonly worksheet: string;
 }
 
 const PART = {
@@ -89,6 +92,21 @@ export async function makeWorld(product: Product): Promise<World> {
   const text = '**No.** It is drawn for 8, and I did the sums for 8 only.';
   await answerQuestion(context, { question, text, send: 'answer', version: 0 });
   const waiting = await ask(asking, { ...asked, text: 'Which glue holds the slats?' });
+  const { id: worksheet } = await addWorksheet(context, {
+    build,
+    sheet: 'ram',
+    title: 'What the press gives',
+    inputs: {
+      bore: '100',
+      rod: '45',
+      stroke: '600',
+      pressure: '2500 psi',
+      pump: '11 gpm@650 psi, 3 gpm@2500 psi',
+      pressing: '80',
+    },
+    of: { kind: 'part', id: part },
+    visibility: 'public',
+  });
   return {
     owner,
     published,
@@ -102,5 +120,6 @@ export async function makeWorld(product: Product): Promise<World> {
     episode,
     question,
     waiting,
+    worksheet,
   };
 }

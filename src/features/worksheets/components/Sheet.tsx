@@ -119,7 +119,7 @@ export function Sheet<Inputs extends Fields, Result>({
           <>
             {picture?.(worked.value, typed)}
             <SheetWorking working={worked.value.working} />
-            {action === undefined && (
+            {action === undefined && !reading && (
               <p className="flex flex-wrap items-center gap-2 text-sm">
                 <a href={query === '' ? '?' : query} className="link">
                   A link that carries these inputs

@@ -9,18 +9,24 @@ const COLUMNS = [
   { key: 'value', label: 'Result', numeric: true },
 ];
 
-function sayForce({ kN, lbf, shortTons, longTons, tonnesForce }: RamResult['extendForce']): string {
-  const show = (value: number) => formatNumber(value, 4);
-  return `${show(kN)} kN · ${show(lbf)} lbf · ${show(tonnesForce)} tonnes · ${show(shortTons)} short tons · ${show(longTons)} long tons`;
+const show = (value: number) => formatNumber(value, 4);
+
+function forceRows(way: string, { kN, lbf, shortTons, longTons, tonnesForce }: RamResult['extendForce']) {
+  return [
+    { what: `Force ${way}`, value: `${show(kN)} kN` },
+    { what: `Force ${way}, in pounds`, value: `${show(lbf)} lbf` },
+    { what: `Force ${way}, in tonnes of 1000 kg`, value: show(tonnesForce) },
+    { what: `Force ${way}, in short tons of 2000 lb`, value: show(shortTons) },
+    { what: `Force ${way}, in long tons of 2240 lb`, value: show(longTons) },
+  ];
 }
 
 function rowsOf(result: RamResult) {
   const { extendForce, retractForce, extendS, retractS, cycleS, hoseMPerS, tankLitres, engineKW } = result;
-  const show = (value: number) => formatNumber(value, 4);
   const timed = (value: number | null, unit: string) => (value === null ? null : `${show(value)} ${unit}`);
   return [
-    { what: 'Force out', value: sayForce(extendForce) },
-    { what: 'Force in', value: sayForce(retractForce) },
+    ...forceRows('out', extendForce),
+    ...forceRows('in', retractForce),
     { what: 'Oil for a stroke', value: `${show(result.oilLitres)} L` },
     { what: 'Time out', value: timed(extendS, 's') },
     { what: 'Time back', value: timed(retractS, 's') },
@@ -29,10 +35,8 @@ function rowsOf(result: RamResult) {
     { what: 'Oil coming back', value: timed(result.returnLitresPerMinute, 'L/min') },
     { what: 'Tank, three minutes of the pump', value: timed(tankLitres, 'L') },
     { what: 'Power at the pump’s shaft, at most', value: timed(engineKW, 'kW') },
-    { what: 'Buckling load over greatest force', value: timed(result.bucklingFactor, '') },
-  ].flatMap(({ what, value }) =>
-    value === null ? [] : [{ id: what, cells: { what, value: value.trim() } }],
-  );
+    { what: 'Buckling load over greatest force', value: timed(result.bucklingFactor, 'times') },
+  ].flatMap(({ what, value }) => (value === null ? [] : [{ id: what, cells: { what, value } }]));
 }
 
 /** A hydraulic ram with its pump. */
