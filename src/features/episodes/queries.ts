@@ -2,7 +2,14 @@ import { queryOptions } from '@tanstack/react-query';
 import { callApi } from '../../client/call-api.ts';
 import { callTagged, type Tagged } from '../../client/call-tagged.ts';
 import { paths } from '../../paths.ts';
-import { AppearanceAnswer, NoteAnswer, type Note, RemovedAnswer } from '../notes/note.ts';
+import {
+  AppearanceAnswer,
+  NoteAnswer,
+  type Note,
+  type PlacedAnchor,
+  PlaceNoteAnswer,
+  RemovedAnswer,
+} from '../notes/note.ts';
 import { DeskAnswer, type DeskLists } from './desk.ts';
 import { ChapterAnswer } from './episode.ts';
 
@@ -76,6 +83,15 @@ export function answerNoteMutation(of: DeskOf) {
       version: number;
       answer: string;
     }): Promise<Note> => NoteAnswer.parse(await callApi(api(of, `notes/${id}/answer`), { version, answer })),
+  };
+}
+
+/** Says by hand where a note was made. */
+export function placeNoteMutation(of: DeskOf) {
+  return {
+    mutationKey: ['place note', of.episode],
+    mutationFn: async ({ id, ...input }: { id: string; version: number; anchor: PlacedAnchor }) =>
+      PlaceNoteAnswer.parse(await callApi(api(of, `notes/${id}/place`), input)),
   };
 }
 

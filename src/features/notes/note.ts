@@ -53,6 +53,14 @@ export type NoteFields = Omit<z.output<typeof ChangeNoteInput>, 'version'>;
 
 export const VersionInput = z.object({ version });
 export const AnswerNoteInput = z.object({ version, answer: runningText(NOTE_TEXT_LENGTH) });
+/** Where a person says that a note was made: on an episode's time, on a clip, or in the shop. */
+export const PlacedAnchor = z.discriminatedUnion('clock', [
+  z.object({ clock: z.literal('episode'), episode: id, position: PositionInput }),
+  z.object({ clock: z.literal('clip'), clip: id, position: PositionInput }),
+  z.object({ clock: z.literal('shop'), shopAt: z.iso.datetime(), shopUntil: z.iso.datetime().nullable() }),
+]);
+export type PlacedAnchor = z.output<typeof PlacedAnchor>;
+export const PlaceNoteInput = z.object({ version, anchor: PlacedAnchor });
 export const AppearanceInput = z.object({ id, partId: id, position: PositionInput });
 
 const position = z.object({
@@ -71,7 +79,7 @@ export const PlaceAnswer = z.object({
   /** Of what is not in this edit: the segment that the edit before used it in. */
   dropped: z.string().nullable(),
   /** The clip it lies on, with seconds since that clip's first frame. */
-  on: z.object({ clip: z.string(), at: z.number() }).nullable(),
+  on: z.object({ id, clip: z.string(), at: z.number() }).nullable(),
 });
 export type Place = z.output<typeof PlaceAnswer>;
 
@@ -99,6 +107,9 @@ export const NoteAnswer = z.object({
   writtenBy: z.string().nullable(),
 });
 export type Note = z.output<typeof NoteAnswer>;
+
+/** A note that was placed by hand, and what brings it back to where it was; null where nothing does. */
+export const PlaceNoteAnswer = z.object({ note: NoteAnswer, before: PlacedAnchor.nullable() });
 
 export const NotesAnswer = z.object({ items: z.array(NoteAnswer), nextCursor: z.null() });
 

@@ -9,13 +9,15 @@ import { getDesk } from '../../../src/features/episodes/server/get-desk.ts';
 import { lookAtDesk } from '../../../src/features/episodes/server/look-at-desk.ts';
 import { makeEpisode } from '../../../src/features/episodes/server/make-episode.ts';
 import { placeFootage } from '../../../src/features/episodes/server/place-footage.ts';
-import { isInEdit, type Note } from '../../../src/features/notes/note.ts';
+import { isInEdit, type Note, type PlacedAnchor } from '../../../src/features/notes/note.ts';
 import { changeNote } from '../../../src/features/notes/server/change-note.ts';
 import { deleteNote } from '../../../src/features/notes/server/delete-note.ts';
+import { placeNote } from '../../../src/features/notes/server/place-note.ts';
 import { restoreNote } from '../../../src/features/notes/server/restore-note.ts';
 import { setAppearance } from '../../../src/features/notes/server/set-appearance.ts';
 import { getBuild } from '../../../src/features/builds/server/get-build.ts';
 import { aShownBuild, aShownEpisode, BUILD, noteAt, RATE } from '../../support/companion.ts';
+import { Forbidden, NotFound } from '../../../src/server/errors.ts';
 import { aClip, editOf, noteMade, takeEdit } from '../../support/placed.ts';
 import { aWorkshop, type TestWorkshop } from '../../support/people.ts';
 import { testServices } from '../../support/services.ts';
@@ -130,6 +132,69 @@ describe('a note made in the shop', () => {
       .where(eq(clips.id, A));
     await placeFootage(services, { build: buildId });
     expect(await atDesk()).toEqual([['Face it.', 25]]);
+  });
+
+  test('within five minutes of a clip of the edit is offered that clip at the desk', async () => {
+    const T = new Date('2026-11-12T14:20:00Z');
+    await shed.owner.db.update(clips).set({ startSetAt: T }).where(eq(clips.id, A));
+    await noteMade(shed.owner, buildId, 'Near.', { shopAt: new Date(T.getTime() - 60_000) });
+    await noteMade(shed.owner, buildId, 'Far.', { shopAt: new Date(T.getTime() - 600_000) });
+    await noteMade(shed.owner, buildId, 'Just before.', { shopAt: new Date(T.getTime() - 5000) });
+    await takeEdit(shed.owner, episode, editOf('1 A V C 0 250 0 250'), NAMES());
+    expect(await atDesk()).toEqual([
+      ['Near.', 'not in this edit'],
+      ['Just before.', 0],
+    ]);
+    expect((await theNote('Near.')).place).toMatchObject({
+      status: 'no-footage',
+      on: { id: A, clip: 'C0043.MP4', at: 0 },
+    });
+    expect((await theNote('Just before.')).place?.toEdge).toBe(true);
+  });
+});
+
+describe('a note that is not in this edit', () => {
+  const place = async (text: string, anchor: PlacedAnchor) => {
+    const { id, version } = await theNote(text);
+    return placeNote(shed.editor, { build: BUILD, episode, note: id, version, anchor });
+  };
+
+  test('is placed by hand on this edit, a clip or another episode, and put back', async () => {
+    await noteMade(shed.owner, buildId, 'Face it.', { clipId: A, frame: 520 });
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    await takeEdit(shed.owner, episode, editOf('1 B V C 0 250 0 250'), NAMES());
+    const isLost = ['Face it.', 'C0043.MP4 from 0:20 to 0:30'];
+    expect(await atDesk()).toEqual([isLost]);
+    const position = { frame: 30, endFrame: null, rate: RATE };
+    const here = await place('Face it.', { clock: 'episode', episode, position });
+    expect(await atDesk()).toEqual([['Face it.', 30]]);
+    await place('Face it.', here.before!);
+    expect(await atDesk()).toEqual([isLost]);
+    await place('Face it.', { clock: 'clip', clip: B, position });
+    expect(await atDesk()).toEqual([['Face it.', 30]]);
+    const other = await makeEpisode(shed.owner, { build: BUILD, title: 'The next one' });
+    await place('Face it.', { clock: 'episode', episode: other.id, position });
+    expect(await atDesk()).toEqual([]);
+    const there = await lookAtDesk(shed.owner, { build: BUILD, episode: other.id });
+    expect(told(there.notes)).toEqual([['Face it.', 30]]);
+  });
+
+  test('is not placed by a moderator, nor on another workshop’s clip or episode', async () => {
+    const other = await aWorkshop(services);
+    await aShownBuild(other.owner);
+    const theirs = await getBuild(other.owner, { build: BUILD });
+    const clip = await aClip(other.owner, theirs.id, 'C0001.MP4');
+    const away = await makeEpisode(other.owner, { build: BUILD, title: 'Elsewhere' });
+    const id = await noteAt(shed.owner, episode, 1, { text: 'Face it.' });
+    const position = { frame: 30, endFrame: null, rate: RATE };
+    await expect(place('Face it.', { clock: 'clip', clip, position })).rejects.toThrow(NotFound);
+    await expect(place('Face it.', { clock: 'episode', episode: away.id, position })).rejects.toThrow(
+      NotFound,
+    );
+    const input = { build: BUILD, episode, note: id, version: 1 };
+    const anchor = { clock: 'episode' as const, episode, position };
+    await expect(placeNote(shed.moderator, { ...input, anchor })).rejects.toThrow(Forbidden);
+    await expect(placeNote(other.owner, { ...input, anchor })).rejects.toThrow(NotFound);
   });
 });
 

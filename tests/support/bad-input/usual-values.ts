@@ -4,6 +4,7 @@ const POSITION = { frame: 25, endFrame: null, rate: { num: 25, den: 1 } };
 
 /** Something usual for a field, by its name: in a request of these one at a time is made bad. */
 const USUAL: Readonly<Record<string, unknown>> = {
+  anchor: { clock: 'episode', episode: newId(), position: POSITION },
   about: 'A frame press.',
   bytes: 4096,
   changes: [{ do: 'delete', id: newId(), version: 1 }],

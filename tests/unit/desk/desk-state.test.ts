@@ -6,6 +6,7 @@ import {
   editRow,
   endRun,
   findRow,
+  lost,
   redo,
   shown,
   startDesk,
@@ -194,5 +195,46 @@ describe('over a reload', () => {
     expect(texts(again)).toEqual(['Mine']);
     expect(pendingOps(again)).toMatchObject([{ do: 'change', version: 1 }]);
     expect(texts(takeIn(again, lists()))).toEqual(['Mine']);
+  });
+});
+
+describe('a row and the edit', () => {
+  const stands = (position: Note['position'], place: Note['place'] = null) => aNote({ position, place });
+  const NOWHERE: Note['place'] = {
+    status: 'lost',
+    also: [],
+    byPicture: false,
+    toEdge: false,
+    dropped: null,
+    on: null,
+  };
+  const at = (frame: number, num = 25): Note['position'] => ({
+    frame,
+    endFrame: null,
+    rate: { num, den: 1 },
+  });
+
+  test('stands where the server has placed it once it is saved, and is not sent again', () => {
+    const moved = editRow(startDesk(lists(stands(at(100)))), ID, { position: at(4050, 1000) }, 'Move a note');
+    const [op] = pendingOps(moved);
+    const saved = noteSaved(moved, op!, { ...stands(at(101)), version: 2 });
+    expect(findRow(saved, ID)?.form.position).toEqual(at(101));
+    expect(pendingOps(saved)).toEqual([]);
+  });
+
+  test('is not moved back when it was moved on while it was saved', () => {
+    const moved = editRow(startDesk(lists(stands(at(100)))), ID, { position: at(101) }, 'Move a note');
+    const [op] = pendingOps(moved);
+    const on = editRow(moved, ID, { position: at(200) }, 'Move a note');
+    const saved = noteSaved(on, op!, { ...stands(at(101)), version: 2 });
+    expect(findRow(saved, ID)?.form.position).toEqual(at(200));
+    expect(pendingOps(saved)).toHaveLength(1);
+  });
+
+  test('that is not in it stands apart until it is given a place', () => {
+    const state = startDesk(lists(stands(at(0), NOWHERE)));
+    expect([shown(state, 'note').length, lost(state).length]).toEqual([0, 1]);
+    const placed = editRow(state, ID, { position: at(40) }, 'Place by hand');
+    expect([shown(placed, 'note').length, lost(placed).length]).toEqual([1, 0]);
   });
 });

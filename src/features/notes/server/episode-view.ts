@@ -112,6 +112,16 @@ export function inEpisodeOrder<One extends { readonly id: string; readonly posit
   return [...items].sort((a, b) => at(a) - at(b) || (a.id < b.id ? -1 : 1));
 }
 
+/** Of what has nothing to do with the episode any more. */
+const NOT_HERE: Place = {
+  status: 'lost',
+  also: [],
+  byPicture: false,
+  toEdge: false,
+  dropped: null,
+  on: null,
+};
+
 /** What a desk says of the places of anchors: null without an edit. */
 export async function sayPlaces(
   db: Database,
@@ -140,7 +150,7 @@ export async function sayPlaces(
   const clipOf = new Map(named.map((clip) => [clip.id, clip]));
   return (anchorId) => {
     const place = told.get(anchorId) ?? null;
-    if (place === null) return null;
+    if (place === null) return NOT_HERE;
     const clip = clipOf.get(place.clipId ?? '');
     const at = clip && place.clipFrame !== null ? (place.clipFrame * clip.den) / clip.num : null;
     const { status, byPicture, toEdge, dropped } = place;
@@ -150,7 +160,7 @@ export async function sayPlaces(
       byPicture,
       toEdge,
       dropped,
-      on: clip === undefined || at === null ? null : { clip: clip.name, at },
+      on: clip === undefined || at === null ? null : { id: clip.id, clip: clip.name, at },
     };
   };
 }

@@ -9,6 +9,7 @@ import { type AnchorPlaces, placeAnchors } from '../../../domain/place/place-anc
 import { type StoredPlaceStatus } from '../../../domain/place/place-statuses.ts';
 import { formatClock } from '../../../domain/time/format-clock.ts';
 import { convertEndFrame, convertFrame } from '../../../domain/time/frames.ts';
+import { type Rate } from '../../../domain/time/rate.ts';
 import { announcePageChanges } from '../../../server/http/page-changes.ts';
 import { anchorOf, type AnchorRow, editByIds, type Footage, loadFootage } from './footage-of-edits.ts';
 import { findEditBefore, findEditById, type StoredEdit } from './load-edits.ts';
@@ -170,7 +171,7 @@ const STATUSES: Readonly<Record<AnchorPlaces['status'], StoredPlaceStatus>> = {
 
 /**
  * The places of anchors in an edit, as they are stored: of those that are not in it only the ones that the desk of
- * its episode tells of, which were typed there or were in the edit before.
+ * its episode tells of, which were typed there, were in the edit before, or were noted near one of its clips.
  */
 export async function placeIn(
   db: Database,
@@ -184,14 +185,16 @@ export async function placeIn(
     footage.clips,
     rows.map((row) => anchorOf(row, footage, edit.rate)),
   );
-  const stored = rows.map((row, index) => rowsOf(row, placed[index], footage, edit.rate));
+  const used = new Set([...of.clipIds.values()].filter((id) => id !== null));
+  const stored = rows.map((row, index) => rowsOf(row, placed[index], footage, { rate: edit.rate, used }));
   const absent = rows.filter((_row, index) => stored[index]?.[0]?.frame === null);
   const dropped = await findDropped(db, of, footage, absent);
   return stored.flatMap((own, index): PlaceRow[] => {
     const row = rows[index];
     if (row === undefined || own[0]?.frame !== null) return own;
     const segment = dropped.get(row.id);
-    if (segment === undefined && row.episodeId !== of.episodeId) return [];
+    const isNear = own[0].status === 'no-footage' && own[0].clipId !== null;
+    if (segment === undefined && row.episodeId !== of.episodeId && !isNear) return [];
     return own.map((one) => ({ ...one, dropped: segment ?? null }));
   });
 }
@@ -200,7 +203,7 @@ function rowsOf(
   row: AnchorRow,
   found: AnchorPlaces | undefined,
   footage: Footage,
-  rate: { readonly num: number; readonly den: number },
+  { rate, used }: { readonly rate: Rate; readonly used: ReadonlySet<string> },
 ): PlaceRow[] {
   if (found === undefined) return [];
   const { status, places: at, end, toEdge, byPicture } = found;
@@ -221,7 +224,8 @@ function rowsOf(
     return { clipId: clip.id, clipFrame: Number(moment.at.mul(rateOf(clip.rate)).floor().valueOf()) };
   };
   if (at.length === 0) {
-    return [{ ...base, frame: null, ...on(status === 'lost' ? found.clips[0]?.id : undefined) }];
+    const offered = found.clips.find(({ id }) => status === 'lost' || used.has(id));
+    return [{ ...base, frame: null, ...on(offered?.id) }];
   }
   return at.map((place, position) => {
     const frame = Number(place.at.floor().valueOf());
@@ -236,7 +240,7 @@ function rowsOf(
   });
 }
 
-function fixedAt(row: AnchorRow, to: { readonly num: number; readonly den: number }) {
+function fixedAt(row: AnchorRow, to: Rate) {
   const { frame, endFrame, rateNum, rateDen } = row;
   const from = { num: rateNum ?? 1, den: rateDen ?? 1 };
   return {

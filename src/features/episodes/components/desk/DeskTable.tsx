@@ -12,6 +12,7 @@ import { redo, undo } from './desk-state.ts';
 import { DeskRule } from './DeskRule.tsx';
 import { KeysPanel } from './KeysPanel.tsx';
 import { NoteList } from './NoteList.tsx';
+import { NotInEdit } from './NotInEdit.tsx';
 import { runCommand } from './run-command.ts';
 import { Transport } from './Transport.tsx';
 import { type Desk, DeskProvider } from './use-desk.ts';
@@ -104,6 +105,7 @@ export function DeskTable({ data, video }: DeskTableProps) {
           </div>
           <div className="grid gap-4">
             <NoteList />
+            <NotInEdit />
             <ChapterPanel onAdd={addChapter} />
             <BenchPanel />
           </div>

@@ -9,7 +9,7 @@ import { type Row } from './desk-rows.ts';
 import { placeAt } from './moment.ts';
 import { NoteAnswer, NoteProposal } from './NoteAsk.tsx';
 import { NoteEditor } from './NoteEditor.tsx';
-import { mayChangeNote, sayUnder } from './note-words.ts';
+import { mayChangeNote, sayInEdit, sayUnder } from './note-words.ts';
 import { SavedMark } from './SavedMark.tsx';
 import { useDesk } from './use-desk.ts';
 import { withKind } from './composer-draft.ts';
@@ -69,6 +69,9 @@ export function NoteRow({ row, current, inView }: NoteRowProps) {
           <p className="text-sm text-ink-soft">
             {sayUnder(form, note, data)} <SavedMark row={row} sending={sending} stalled={stalled} />
           </p>
+          {sayInEdit(stored?.place ?? null) !== '' && (
+            <p className="text-sm text-brass-text">{sayInEdit(stored?.place ?? null)}</p>
+          )}
           {note !== null && note.answer !== null && (
             <p className="border-s-4 border-verdigris ps-3">
               {note.asked?.name ?? 'They'} answered: {note.answer}

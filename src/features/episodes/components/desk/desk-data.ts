@@ -25,6 +25,9 @@ export interface DeskData extends DeskLists {
   /** Frames of the video, when that is known. */
   readonly length: number | null;
   readonly parts: readonly DeskPart[];
+  /** What a note can be placed on by hand: the build's clips, and its other episodes. */
+  readonly clips: readonly { readonly id: string; readonly name: string; readonly rate: Rate }[];
+  readonly otherEpisodes: readonly { readonly id: string; readonly title: string; readonly rate: Rate }[];
   readonly team: readonly { readonly id: string; readonly name: string }[];
 }
 

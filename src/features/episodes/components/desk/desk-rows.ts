@@ -5,6 +5,8 @@ import {
   AppearanceInput,
   type Note,
   type NoteFields,
+  isInEdit,
+  type Place,
 } from '../../../notes/note.ts';
 import { AddChapterInput, type Chapter } from '../../episode.ts';
 
@@ -22,6 +24,8 @@ export interface StoredRow<K extends RowKind = RowKind> {
   readonly version: number;
   readonly form: Forms[K];
   readonly gone: boolean;
+  /** Where it comes in the edit; null where there is none. */
+  readonly place: Place | null;
   /** Of a note: what others decide about it. */
   readonly note: Note | null;
 }
@@ -54,23 +58,37 @@ export function noteForm(note: Note): NoteFields {
 }
 
 export function storedNote(note: Note, gone = false): StoredRow<'note'> {
-  return { version: note.version, form: noteForm(note), gone, note };
+  return { version: note.version, form: noteForm(note), gone, place: note.place, note };
 }
 
-export function storedChapter({ version, title, position }: Chapter, gone = false): StoredRow<'chapter'> {
-  return { version, form: { title, position }, gone, note: null };
+export function storedChapter(
+  { version, title, position, place }: Chapter,
+  gone = false,
+): StoredRow<'chapter'> {
+  return { version, form: { title, position }, gone, place, note: null };
 }
 
 export function storedAppearance(
-  { version, partId, position }: Appearance,
+  { version, partId, position, place }: Appearance,
   gone = false,
 ): StoredRow<'appearance'> {
-  return { version, form: { partId, position }, gone, note: null };
+  return { version, form: { partId, position }, gone, place, note: null };
 }
 
 /** A row as the server has it, with nothing of its own. */
 export function rowOf<K extends RowKind>(what: K, id: string, stored: StoredRow<K>): AnyRow {
   return { what, id, form: stored.form, gone: stored.gone, stored, refused: null, conflict: null } as AnyRow;
+}
+
+/** Whether a row is not in the edit, and has not been given a place here yet. */
+export function isLost({ form, stored }: AnyRow): boolean {
+  return stored !== null && !isInEdit(stored) && samePosition(form.position, stored.form.position);
+}
+
+function samePosition(a: Position, b: Position): boolean {
+  return (
+    a.frame === b.frame && a.endFrame === b.endFrame && a.rate.num * b.rate.den === b.rate.num * a.rate.den
+  );
 }
 
 /** Whether two forms say the same. Their keys stand in one order, because every form is made by one of ours. */

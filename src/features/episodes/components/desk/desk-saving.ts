@@ -57,8 +57,13 @@ export function markOf(row: AnyRow): RowMark {
 /** Takes in what the server kept. @param answer the row as it answered; of a removed appearance nothing but its id */
 export function noteSaved(state: DeskState, op: Op, answer: unknown): DeskState {
   const stored = storedFrom(op.what, answer, op);
-  // The form stays as it was typed: the server trims, and whoever paused after a word would lose the space.
-  return replaceRow(state, op.id, (row) => ({ ...row, stored, refused: null }) as AnyRow);
+  // The form stays as it was typed: the server trims, and whoever paused after a word would lose the space. But it
+  // stands where the edit has that moment, unless it has been moved on meanwhile.
+  return replaceRow(state, op.id, (row) => {
+    const stays = JSON.stringify(row.form.position) === JSON.stringify(op.form.position);
+    const form = stays && !row.gone ? { ...row.form, position: stored.form.position } : row.form;
+    return { ...row, form, stored, refused: null } as AnyRow;
+  });
 }
 
 /** Takes in that someone else stored the row meanwhile. */
@@ -130,7 +135,7 @@ function storedFrom(what: RowKind, answer: unknown, op: Op): StoredRow {
   const gone = op.do === 'delete';
   if (what === 'note') return storedNote(answer as Parameters<typeof storedNote>[0], gone);
   if (what === 'chapter') return storedChapter(answer as Parameters<typeof storedChapter>[0], gone);
-  if (gone) return { version: op.version ?? 1, form: op.form, gone, note: null };
+  if (gone) return { version: op.version ?? 1, form: op.form, gone, place: null, note: null };
   return storedAppearance(answer as Parameters<typeof storedAppearance>[0]);
 }
 

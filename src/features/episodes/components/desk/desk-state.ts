@@ -2,6 +2,7 @@ import { type DeskLists } from '../../desk.ts';
 import {
   type AnyRow,
   type Forms,
+  isLost,
   type Row,
   type RowKind,
   rowOf,
@@ -46,12 +47,17 @@ export function rowsOf({ notes, chapters, appearances }: DeskLists): AnyRow[] {
   ];
 }
 
-/** The rows of one kind that are there, in the order of the episode. */
+/** The rows of one kind that are in the episode, in its order. */
 export function shown<K extends RowKind>(state: DeskState, what: K): Row<K>[] {
   const at = ({ form: { position } }: AnyRow) => (position.frame * position.rate.den) / position.rate.num;
   return state.rows
-    .filter((row) => row.what === what && !row.gone)
+    .filter((row) => row.what === what && !row.gone && !isLost(row))
     .sort((a, b) => at(a) - at(b) || (a.id < b.id ? -1 : 1)) as unknown as Row<K>[];
+}
+
+/** The rows that are not in this edit. */
+export function lost(state: DeskState): AnyRow[] {
+  return state.rows.filter((row) => !row.gone && isLost(row));
 }
 
 export function findRow(state: DeskState, id: string): AnyRow | undefined {

@@ -32,7 +32,7 @@ export function putBack(state: DeskState, kept: readonly KeptRow[]): DeskState {
     if (!row) {
       // It never arrived, or was deleted meanwhile: the server says which when it is asked to keep what was typed.
       if (gone) return next;
-      const stored = seen && { ...seen, gone: false, note: null };
+      const stored = seen && { ...seen, gone: false, place: null, note: null };
       const added = { what, id, form, gone, stored, refused: null, conflict: null } as AnyRow;
       return { ...next, rows: [...next.rows, added] };
     }
