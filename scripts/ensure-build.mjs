@@ -23,6 +23,8 @@ const BUNDLES = [
   { from: 'src/worker.ts', to: 'dist/worker.mjs' },
   // Plans are rewritten in a process of their own.
   { from: 'src/server/media/rewrite-pdf-child.ts', to: 'dist/rewrite-pdf-child.mjs' },
+  // So are long edit lists read.
+  { from: 'src/server/edits/read-edit-child.ts', to: 'dist/read-edit-child.mjs' },
 ];
 
 /**

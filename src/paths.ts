@@ -97,6 +97,9 @@ export const paths = {
   episodesOutAlready: (workshop: string, build: string) => onBench(workshop, build, 'episodes/out-already'),
   desk: (workshop: string, build: string, episode: string) =>
     onBench(workshop, build, `episodes/${part(episode)}`),
+  /** @param number of the version to show; the newest when left out */
+  edit: (workshop: string, build: string, episode: string, number?: number) =>
+    `${onBench(workshop, build, `episodes/${part(episode)}/edit`)}${number === undefined ? '' : `?version=${String(number)}`}`,
   publish: (workshop: string, build: string, episode: string) =>
     onBench(workshop, build, `episodes/${part(episode)}/publish`),
   announcement: (workshop: string, build: string, episode: string) =>
@@ -135,7 +138,9 @@ export const paths = {
 
 /** Whether a path takes whole lists, which are larger than other requests. */
 export function takesLists(pathname: string): boolean {
-  return /^\/api\/workshops\/[^/]+\/builds\/[^/]+\/(parts\/import|episodes\/[^/]+\/captions)$/.test(pathname);
+  return /^\/api\/workshops\/[^/]+\/builds\/[^/]+\/(parts\/import|episodes\/[^/]+\/(captions|edits|edits\/preview))$/.test(
+    pathname,
+  );
 }
 
 /** The page that asks a question knows who is signed in, and what is asked about. */

@@ -1,3 +1,5 @@
+import { type Edit } from './edit.ts';
+
 /** Endings of the files that cameras and recorders write; a list may leave them out. */
 const MEDIA_ENDING = /\.(?:mp4|mov|mts|m2ts|mkv|webm|avi|mxf|wav|mp3|m4a|jpe?g|png|webp|heic)$/;
 
@@ -22,4 +24,9 @@ export function findByClipName<Value>(
   }
   const keys = new Map([...values].map(([name, value]) => [clipNameKey(name), value]));
   return names.map((name) => keys.get(clipNameKey(name))).find((value) => value !== undefined);
+}
+
+/** The names of all clips that an edit shows or sounds, each once, pictures first, in the order of the episode. */
+export function clipNames(edit: Pick<Edit, 'picture' | 'sound' | 'dissolved'>): string[] {
+  return [...new Set([...edit.picture, ...edit.dissolved, ...edit.sound].map(({ clip }) => clip))];
 }

@@ -15,12 +15,23 @@ function check(
 }
 
 /** The title, the video and the captions: there, or what is missing. */
-export function checkBasics({ title, video, captionCount }: PublishFacts): PublishCheck[] {
+export function checkBasics({ title, video, edit, captionCount }: PublishFacts): PublishCheck[] {
   const titled = title.trim() !== '';
   const captioned = captionCount !== null && captionCount > 0;
   return [
     check('title', 'must', 'details', titled, titled ? 'It has a title.' : 'Give the episode a title.'),
     check('video', 'must', 'video', video?.state === 'ready', sayVideo(video)),
+    ...(edit === null
+      ? []
+      : [
+          check(
+            'edit',
+            'should',
+            'edit',
+            edit.lengthsApart === null,
+            edit.lengthsApart ?? 'The edit is as long as the video.',
+          ),
+        ]),
     check(
       'captions',
       'should',

@@ -1,5 +1,5 @@
 /** Where on the desk a check is put right. */
-export type CheckSection = 'details' | 'video' | 'chapters' | 'captions' | 'notes' | 'parts';
+export type CheckSection = 'details' | 'video' | 'edit' | 'chapters' | 'captions' | 'notes' | 'parts';
 
 /**
  * One line of “Before it goes out”. must: it holds before the episode is asked for or goes out; should: the

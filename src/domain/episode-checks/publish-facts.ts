@@ -33,6 +33,8 @@ export interface PublishFacts {
     readonly lengthFrames: number | null;
   } | null;
   readonly rate: Rate;
+  /** Null while there is none; how its length and the video’s differ, as a sentence. */
+  readonly edit: { readonly lengthsApart: string | null } | null;
   readonly chapters: readonly Chapter[];
   /** How many captions; null without a captions file. */
   readonly captionCount: number | null;

@@ -10,6 +10,11 @@ const DROPPED: readonly { readonly rate: Rate; readonly labels: number }[] = [
 /** Timecode labels a clock of one day and then begins again (SMPTE ST 12-1). */
 const HOURS = 24;
 
+/** Whether frames at this rate have labels at all: 12.5 and 1000 have none. */
+export function hasTimecode(rate: Rate): boolean {
+  return countingOf(rate, false) !== null;
+}
+
 /** How many frames a day of labels has. @throws RangeError for a rate without such labels */
 export function framesADay(rate: Rate, drop = false): number {
   const counting = countingOf(rate, drop);

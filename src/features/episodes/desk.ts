@@ -8,7 +8,7 @@ const CheckAnswer = z.object({
   holds: z.boolean(),
   sentence: z.string(),
   place: z.object({
-    section: z.enum(['details', 'video', 'chapters', 'captions', 'notes', 'parts']),
+    section: z.enum(['details', 'video', 'edit', 'chapters', 'captions', 'notes', 'parts']),
     ids: z.array(z.string()),
   }),
 });

@@ -114,6 +114,7 @@ test.each(PRESS_EPISODES.map((episode) => [episode.number, episode] as const))(
       video: { state: 'ready', lengthFrames: Math.floor(lengthOf(episode) * 1000) },
       rate,
       chapters: episode.chapters.map(([at, title]) => ({ start: at * 1000, title })),
+      edit: null,
       captionCount: 'captions' in episode.video ? cuesOf(episode).length : 1,
       notes: episode.notes.map((note, index) => ({
         id: String(index),

@@ -5,6 +5,8 @@ import { parts } from '../../../db/schema/parts.ts';
 import { type PublishCheck } from '../../../domain/episode-checks/publish-check.ts';
 import { publishChecks } from '../../../domain/episode-checks/publish-checks.ts';
 import { type PublishFacts } from '../../../domain/episode-checks/publish-facts.ts';
+import { type Edit } from '../../../domain/edit/edit.ts';
+import { sayLengthsApart } from '../../../domain/edit/compare-lengths.ts';
 import { convertPlace } from '../../../domain/notes/convert-place.ts';
 import { type Position } from '../../../domain/positions.ts';
 import { frameToMilliseconds } from '../../../domain/time/frames.ts';
@@ -14,6 +16,7 @@ import { findDraftView } from '../../notes/server/episode-view.ts';
 import { loadNotes, ofEpisode } from '../../notes/server/load-notes.ts';
 import { type Video } from '../episode.ts';
 import { loadChapters } from './load-chapters.ts';
+import { findDraftEdit } from './load-edits.ts';
 import { findDraftCaptions, findDraftVideo } from './load-episode.ts';
 
 const MILLISECONDS = { num: 1000, den: 1 };
@@ -26,6 +29,7 @@ export async function loadPublishChecks(
 ): Promise<PublishCheck[]> {
   const video = await findDraftVideo(db, episode.id);
   const captions = await findDraftCaptions(db, episode.id);
+  const edit = await findDraftEdit(db, episode.id);
   const rate = video?.rate ?? MILLISECONDS;
   const place = (position: Position) => convertPlace(position, rate);
   const view = await findDraftView(db, episode.id);
@@ -39,6 +43,7 @@ export async function loadPublishChecks(
     title: episode.title,
     video: video && { state: await stateOf(db, video), lengthFrames: lengthOf(video) },
     rate,
+    edit: edit && { lengthsApart: video === null ? null : lengthsApart(edit.edit, video) },
     chapters: chapters.map(({ title, position }) => ({
       start: frameToMilliseconds(position.frame, position.rate),
       title,
@@ -57,6 +62,10 @@ export async function loadPublishChecks(
     parts: partsOfBuild,
     revision: null,
   });
+}
+
+function lengthsApart(edit: Edit, { seconds, rate, fileId }: Video): string | null {
+  return seconds === null ? null : sayLengthsApart(edit, { seconds, rate, typed: fileId === null });
 }
 
 function lengthOf({ seconds, rate }: Video): number | null {

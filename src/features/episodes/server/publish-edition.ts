@@ -6,6 +6,7 @@ import { Invalid } from '../../../server/errors.ts';
 import { dayIn } from '../../../domain/time/day-in.ts';
 import { verb } from '../../../server/verb.ts';
 import { announceEpisode } from './announce-episode.ts';
+import { findDraftEdit } from './load-edits.ts';
 import { findDraftCaptions, findDraftVideo, type EpisodeRef, lockEpisode } from './load-episode.ts';
 import { loadPublishChecks } from './load-publish-checks.ts';
 
@@ -28,6 +29,7 @@ export const publishEdition = verb({ may: 'episode.publish' }, async (context, i
   const video = await findDraftVideo(db, episode.id);
   if (!video) throw new Invalid({ '': 'There is no video yet.' });
   const captions = await findDraftCaptions(db, episode.id);
+  const edit = await findDraftEdit(db, episode.id);
   await replaceShown(context, episode.id);
   const [last] = await db
     .select({ number: max(editions.number) })
@@ -40,6 +42,7 @@ export const publishEdition = verb({ may: 'episode.publish' }, async (context, i
     number,
     videoId: video.id,
     captionsId: captions?.id ?? null,
+    editId: edit?.id ?? null,
     publishedAt: now,
     publishedBy: actor.kind === 'account' ? actor.id : null,
   });

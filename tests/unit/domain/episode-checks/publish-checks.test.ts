@@ -25,6 +25,7 @@ const READY: PublishFacts = {
   video: { state: 'ready', lengthFrames: 848 * 25 },
   rate,
   chapters: [0, 185, 370].map((start) => ({ start: start * 1000, title: `From ${String(start)}` })),
+  edit: null,
   captionCount: 212,
   notes: [note('n1', 58, { partIds: ['p117'] })],
   parts: [
