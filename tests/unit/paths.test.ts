@@ -74,6 +74,7 @@ test('every address of the product', () => {
       "episodes: /bench/w%201/b%2F2/episodes",
       "episodesOutAlready: /bench/w%201/b%2F2/episodes/out-already",
       "desk: /bench/w%201/b%2F2/episodes/3",
+      "edit: /bench/w%201/b%2F2/episodes/3/edit?version=4",
       "publish: /bench/w%201/b%2F2/episodes/3/publish",
       "announcement: /bench/w%201/b%2F2/episodes/3/announcement",
       "preview: /bench/w%201/b%2F2/episodes/3/preview",

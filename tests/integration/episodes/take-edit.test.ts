@@ -6,7 +6,7 @@ import { clips } from '../../../src/db/schema/footage.ts';
 import { getBuild } from '../../../src/features/builds/server/get-build.ts';
 import { MATCHES } from '../../../src/features/episodes/edit.ts';
 import { listPublishChecks } from '../../../src/features/episodes/server/list-publish-checks.ts';
-import { findDraftEdit } from '../../../src/features/episodes/server/load-edits.ts';
+import { findDraftEdit } from '../../../src/features/notes/server/load-edits.ts';
 import { previewEdit } from '../../../src/features/episodes/server/preview-edit.ts';
 import { POST as previewRoute } from '../../../src/pages/api/workshops/[workshop]/builds/[build]/episodes/[episode]/edits/preview.ts';
 import { POST as takeRoute } from '../../../src/pages/api/workshops/[workshop]/builds/[build]/episodes/[episode]/edits/index.ts';

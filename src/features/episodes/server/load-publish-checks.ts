@@ -16,7 +16,7 @@ import { findDraftView } from '../../notes/server/episode-view.ts';
 import { loadNotes, ofEpisode } from '../../notes/server/load-notes.ts';
 import { type Video } from '../episode.ts';
 import { loadChapters } from './load-chapters.ts';
-import { findDraftEdit } from './load-edits.ts';
+import { findDraftEdit } from '../../notes/server/load-edits.ts';
 import { findDraftCaptions, findDraftVideo } from './load-episode.ts';
 
 const MILLISECONDS = { num: 1000, den: 1 };

@@ -10,7 +10,7 @@ import { Invalid } from '../../../server/errors.ts';
 import { type EditView, type ReadEdit } from '../edit.ts';
 import { type Video } from '../episode.ts';
 import { type BuildClip, loadBuildClips } from './load-clips.ts';
-import { findDraftEdit, type StoredEdit } from './load-edits.ts';
+import { findDraftEdit, type StoredEdit } from '../../notes/server/load-edits.ts';
 import { findDraftVideo } from './load-episode.ts';
 import { matchNames } from './match-names.ts';
 import { type EditText, editTextOf, packText, readEditText } from './read-edit-text.ts';

@@ -6,7 +6,7 @@ import { Invalid } from '../../../server/errors.ts';
 import { dayIn } from '../../../domain/time/day-in.ts';
 import { verb } from '../../../server/verb.ts';
 import { announceEpisode } from './announce-episode.ts';
-import { findDraftEdit } from './load-edits.ts';
+import { findDraftEdit } from '../../notes/server/load-edits.ts';
 import { findDraftCaptions, findDraftVideo, type EpisodeRef, lockEpisode } from './load-episode.ts';
 import { loadPublishChecks } from './load-publish-checks.ts';
 

@@ -5,6 +5,7 @@ import { type Edit } from '../../../domain/edit/edit.ts';
 import { toEditRecord } from '../../../domain/edit/edit-record.ts';
 import { type EditSource } from '../../../domain/edit/edit-sources.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
+import { placeTakenEdit } from './place-taken-edit.ts';
 
 /** How many rows one statement takes: PostgreSQL counts parameters in 16 bits. */
 const ROWS_AT_ONCE = 5000;
@@ -31,7 +32,7 @@ export async function lockEdits({ db }: WorkshopContext, episodeId: string): Pro
   return last?.number ?? 0;
 }
 
-/** Keeps an edit as the next version of its episode, which the caller has locked. */
+/** Keeps an edit as the next version of its episode, which the caller has locked, and gives everything its place in it. */
 export async function storeEdit(
   { db, workshop, actor }: WorkshopContext,
   episodeId: string,
@@ -56,5 +57,6 @@ export async function storeEdit(
   const rows = [...clipIds].map(([name, clipId]) => ({ workshopId: workshop.id, editId: id, name, clipId }));
   for (let from = 0; from < rows.length; from += ROWS_AT_ONCE)
     await db.insert(editClips).values(rows.slice(from, from + ROWS_AT_ONCE));
+  await placeTakenEdit(db, id);
   return { id, number };
 }
