@@ -9,6 +9,7 @@ import { getDesk } from '../../../src/features/episodes/server/get-desk.ts';
 import { lookAtDesk } from '../../../src/features/episodes/server/look-at-desk.ts';
 import { makeEpisode } from '../../../src/features/episodes/server/make-episode.ts';
 import { placeFootage } from '../../../src/features/episodes/server/place-footage.ts';
+import { reportEdit } from '../../../src/features/episodes/server/report-edit.ts';
 import { isInEdit, type Note, type PlacedAnchor } from '../../../src/features/notes/note.ts';
 import { changeNote } from '../../../src/features/notes/server/change-note.ts';
 import { deleteNote } from '../../../src/features/notes/server/delete-note.ts';
@@ -288,6 +289,33 @@ describe('what was typed at the desk', () => {
     });
     await takeEdit(shed.owner, episode, editOf('1 A V C 500 800 0 300'), NAMES());
     expect(await atDesk()).toEqual([['Face it off.', 260]]);
+  });
+});
+
+describe('the report before an edit is taken', () => {
+  const report = (edit: typeof FIRST) =>
+    reportEdit(shed.owner.db, { id: episode, buildId }, { edit, clipIds: new Map(Object.entries(NAMES())) });
+
+  test('says what stays, moves by how much, is lost with its segment, comes back and is brought in', async () => {
+    await noteAt(shed.owner, episode, 1, { text: 'Face it.' });
+    await noteAt(shed.owner, episode, 9.9, { text: 'Cut.' });
+    await noteAt(shed.owner, episode, 12, { text: 'Drill it.' });
+    await noteMade(shed.owner, buildId, 'From the shed.', { clipId: B, frame: 10 });
+    expect(await report(FIRST)).toEqual({ stays: 3, moves: null, lost: [], back: [], brought: 1 });
+    await takeEdit(shed.owner, episode, FIRST, NAMES());
+    expect(await report(FIRST)).toEqual({ stays: 4, moves: null, lost: [], back: [], brought: 0 });
+    const cut = { what: 'note', text: 'Cut.', at: null };
+    // A frame of A at 1 s is at 6 s now; of B at 10.4 and 12 s at 0.4 and 2 s.
+    expect(await report(SECOND)).toEqual({
+      stays: 0,
+      moves: { count: 3, least: 5, most: 10 },
+      lost: [{ ...cut, dropped: 'C0043.MP4 from 0:20 to 0:30' }],
+      back: [],
+      brought: 0,
+    });
+    await takeEdit(shed.owner, episode, SECOND, NAMES());
+    expect(await report(FIRST)).toMatchObject({ lost: [], back: [{ ...cut, dropped: null, at: 9.92 }] });
+    expect(await atDesk()).toHaveLength(4);
   });
 });
 

@@ -128,7 +128,7 @@ export async function listReadEdits(db: Database, buildId: string, rows?: readon
 /** The anchors that an edit may hold, and those that the edit before it held. */
 export function loadHeld(
   db: Database,
-  { id, episodeId, number, clipIds }: Pick<StoredEdit, 'id' | 'episodeId' | 'number' | 'clipIds'>,
+  { episodeId, number, clipIds }: Pick<StoredEdit, 'episodeId' | 'number' | 'clipIds'>,
   buildId: string,
 ): Promise<AnchorRow[]> {
   const clips = [...new Set([...clipIds.values()].filter((clip) => clip !== null))];
@@ -139,10 +139,7 @@ export function loadHeld(
     .where(
       and(
         eq(edits.episodeId, episodeId),
-        or(
-          eq(edits.id, id),
-          sql`${edits.number} = (select max(b.number) from edits b where b.episode_id = ${episodeId} and b.number < ${number})`,
-        ),
+        sql`${edits.number} = (select max(b.number) from edits b where b.episode_id = ${episodeId} and b.number < ${number})`,
       ),
     );
   return db
