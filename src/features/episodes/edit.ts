@@ -4,6 +4,7 @@ import { type ComparedSegment } from '../../domain/edit/compare-edits.ts';
 import { type Edit } from '../../domain/edit/edit.ts';
 import { EDIT_SOURCES, type EditSource } from '../../domain/edit/edit-sources.ts';
 import { type Rate } from '../../domain/time/rate.ts';
+import { type EditReport } from './edit-report.ts';
 import { episodeParams } from './episode.ts';
 
 /** What the text of an edit may have. */
@@ -99,6 +100,8 @@ export interface EditView {
   readonly seen: number;
   /** What it does to the newest edit; null before the first. */
   readonly compared: readonly ComparedSegment[] | null;
+  /** What it does to everything that is anchored; null while it cannot be read. */
+  readonly report: EditReport | null;
 }
 
 const segments = z.object({ picture: z.number(), sound: z.number() });

@@ -17,7 +17,7 @@ import { type EditText, editTextOf, packText, readEditText } from './read-edit-t
 
 /** An edit on its way in: what its page shows, its text, and the footage that its names were held against. */
 export interface LookedAt {
-  readonly view: Omit<EditView, 'compared'>;
+  readonly view: Omit<EditView, 'compared' | 'report'>;
   /** The newest edit so far. */
   readonly before: StoredEdit | null;
   readonly text: EditText;
