@@ -88,10 +88,21 @@ export const paths = {
   benchPart: (workshop: string, build: string, partId: string) =>
     onBench(workshop, build, `parts/${part(partId)}`),
   importParts: (workshop: string, build: string) => onBench(workshop, build, 'parts/import'),
-  footage: (workshop: string, build: string) => onBench(workshop, build, 'footage'),
   benchWorksheets: (workshop: string, build: string) => onBench(workshop, build, 'worksheets'),
   benchWorksheet: (workshop: string, build: string, worksheet: string) =>
     onBench(workshop, build, `worksheets/${part(worksheet)}`),
+  /** @param asked which day, camera and stage are shown */
+  footage: (workshop: string, build: string, asked: Readonly<Record<string, string>> = {}) => {
+    const query = new URLSearchParams(asked);
+    return `${onBench(workshop, build, 'footage')}${query.size === 0 ? '' : `?${query.toString()}`}`;
+  },
+  addFootage: (workshop: string, build: string) => onBench(workshop, build, 'footage/add'),
+  cameras: (workshop: string, build: string) => onBench(workshop, build, 'footage/cameras'),
+  files: (workshop: string, build: string) => onBench(workshop, build, 'footage/files'),
+  clip: (workshop: string, build: string, clip: string) =>
+    onBench(workshop, build, `footage/clips/${part(clip)}`),
+  /** The page for a phone that is filmed. @param timeZone an IANA name */
+  slate: (timeZone: string) => `/slate?zone=${part(timeZone)}`,
   buildSettings: (workshop: string, build: string) => onBench(workshop, build, 'settings'),
   episodes: (workshop: string, build: string) => onBench(workshop, build, 'episodes'),
   episodesOutAlready: (workshop: string, build: string) => onBench(workshop, build, 'episodes/out-already'),
@@ -138,7 +149,7 @@ export const paths = {
 
 /** Whether a path takes whole lists, which are larger than other requests. */
 export function takesLists(pathname: string): boolean {
-  return /^\/api\/workshops\/[^/]+\/builds\/[^/]+\/(parts\/import|episodes\/[^/]+\/(captions|edits|edits\/preview))$/.test(
+  return /^\/api\/workshops\/[^/]+\/builds\/[^/]+\/(parts\/import|footage\/clips(\/import)?|episodes\/[^/]+\/(captions|edits|edits\/preview))$/.test(
     pathname,
   );
 }

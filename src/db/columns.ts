@@ -1,5 +1,5 @@
 import { sql } from 'drizzle-orm';
-import { integer, timestamp, uuid } from 'drizzle-orm/pg-core';
+import { customType, integer, timestamp, uuid } from 'drizzle-orm/pg-core';
 import { v7 as uuidv7 } from 'uuid';
 
 /** A primary key made by the app, so that rows sort by when they were made. */
@@ -33,3 +33,9 @@ export function timestamps() {
 export function versionColumn() {
   return integer('version').notNull().default(1);
 }
+
+/** A few kilobytes kept in the row itself; anything larger belongs into the storage. */
+export const bytes = customType<{ data: Uint8Array; driverData: Buffer }>({
+  dataType: () => 'bytea',
+  toDriver: (value) => Buffer.from(value),
+});

@@ -5,11 +5,14 @@ import { usualValue } from '../support/bad-input/usual-values.ts';
 import { exportedFunctions, isRoute, paramsOf, sourceFiles } from '../support/authorisation/find-ruled.ts';
 import { callRoute, fieldsOf, type RouteAnswer, type RouteCall } from '../support/call-route.ts';
 import { aShownBuild, aShownEpisode, BUILD, noteAt } from '../support/companion.ts';
+import { aCamera, aClip } from '../support/footage.ts';
 import { aWorkshop, PASSWORD } from '../support/people.ts';
 import { ask } from '../support/questions.ts';
 import { storageServices } from '../support/storage.ts';
 import { type RuledRoute } from '../../src/server/http/api-route.ts';
 import { addStage } from '../../src/features/builds/server/add-stage.ts';
+import { addSlate } from '../../src/features/footage/server/add-slate.ts';
+import { startStretch } from '../../src/features/footage/server/start-stretch.ts';
 import { makeEpisode } from '../../src/features/episodes/server/make-episode.ts';
 
 /** What nobody should be shown: words of programs instead of a sentence. */
@@ -32,12 +35,18 @@ const video = { address: 'https://video.example/watch/1', length: '1:00' };
 await aShownEpisode(owner, parts, video);
 const { id: episode } = await makeEpisode(owner, { build: BUILD, title: 'A draft' });
 const { id: stage } = await addStage(owner, { build: BUILD, name: 'Frame', about: '' });
+const clip = await aClip(owner, BUILD);
+const read = { frame: 0, at: '', shows: '', shopMs: 1, readBy: 'hand' } as const;
 /** What is there, by its name in paths; anything else is an id of nothing. */
 const THERE: Readonly<Record<string, string>> = {
   workshop: slug,
   build: BUILD,
   episode,
   stage,
+  clip,
+  camera: await aCamera(owner, BUILD),
+  slate: (await addSlate(owner, { build: BUILD, clip, ...read })).id,
+  stretch: (await startStretch(owner, { build: BUILD, sign: 'timer', stage: null, text: '' })).id,
   question: await ask(owner, { text: 'Which grease is on it?' }),
   part: parts.get('117') ?? '',
   note: await noteAt(owner, episode, 1, { text: 'The shaft.', audience: 'team' }),

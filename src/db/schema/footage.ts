@@ -17,7 +17,7 @@ import {
   uuid,
 } from 'drizzle-orm/pg-core';
 import { CREATION_MEANS, OFF_CAMERA_SIGNS, SLATE_READERS } from '../../domain/footage/clip-facts.ts';
-import { idColumn, instant, timestamps, versionColumn } from '../columns.ts';
+import { bytes, idColumn, instant, timestamps, versionColumn } from '../columns.ts';
 import { accounts } from './accounts.ts';
 import { builds, stages } from './builds.ts';
 import { files } from './files.ts';
@@ -86,6 +86,8 @@ export const clips = pgTable(
     paceDen: integer('pace_den').notNull().default(1),
     /** Where frames do not come at a constant rate: when each begins, in milliseconds since the first. */
     frameTimes: jsonb('frame_times').$type<readonly number[]>(),
+    /** The clip that this one goes on from without a gap: a camera splits what it films into several files. */
+    continuesId: uuid('continues_id'),
     stageId: uuid('stage_id'),
     addedBy: uuid('added_by').references(() => accounts.id),
     version: versionColumn(),
@@ -114,11 +116,34 @@ export const clips = pgTable(
       columns: [table.workshopId, table.stageId],
       foreignColumns: [stages.workshopId, stages.id],
     }),
+    foreignKey({
+      name: 'clips_continues_fk',
+      columns: [table.workshopId, table.continuesId],
+      foreignColumns: [table.workshopId, table.id],
+    }),
     check('clips_pace_forward', sql`${table.paceNum} > 0 and ${table.paceDen} > 0`),
     index('clips_build_index').on(table.buildId),
     uniqueIndex('clips_file_unique')
       .on(table.fileId)
       .where(sql`${table.deletedAt} is null`),
+  ],
+);
+
+/** A small picture of a clip that stays at home, made in the browser. */
+export const clipThumbnails = pgTable(
+  'clip_thumbnails',
+  {
+    workshopId: uuid('workshop_id').notNull(),
+    clipId: uuid('clip_id').notNull(),
+    jpeg: bytes('jpeg').notNull(),
+  },
+  (table) => [
+    primaryKey({ name: 'clip_thumbnails_pkey', columns: [table.clipId] }),
+    foreignKey({
+      name: 'clip_thumbnails_clip_fk',
+      columns: [table.workshopId, table.clipId],
+      foreignColumns: [clips.workshopId, clips.id],
+    }).onDelete('cascade'),
   ],
 );
 

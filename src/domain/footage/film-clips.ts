@@ -1,4 +1,5 @@
 import Fraction from 'fraction.js';
+import { type Answer, right } from '../answer.ts';
 import { type Rate } from '../time/rate.ts';
 import { instantOfWall, wallAsUtc } from '../time/wall-time.ts';
 import { type CameraClock, cameraClock, type SlateReading } from './camera-clock.ts';
@@ -20,6 +21,8 @@ export interface ClipFacts {
   readonly startSetAt: number | null;
   /** When frames begin, in milliseconds since the first, where they do not come at a constant rate. */
   readonly frameTimes: readonly number[] | null;
+  /** The clip that this one goes on from without a gap, where the camera split what it filmed. */
+  readonly continuesId: string | null;
 }
 
 /** What the files of a camera mean by their times. */
@@ -45,7 +48,7 @@ export interface ClipTiming {
   readonly start: Fraction | null;
   readonly clock: CameraClock;
   /** What says when it began. */
-  readonly by: 'hand' | 'camera' | 'slate' | 'nothing';
+  readonly by: 'hand' | 'camera' | 'slate' | 'before' | 'nothing';
   /** Why the file's own time is no use; null where it is. */
   readonly problem: string | null;
 }
@@ -83,9 +86,35 @@ function cameraStart(clip: ClipFacts, camera: CameraFacts | null, timeZone: stri
   return clipStart(createdAt(clip, camera, timeZone), camera?.creationMeans ?? 'start', ran, now);
 }
 
+/** Clips in an order in which each comes after the one it goes on from; where they go in a circle, in any. */
+function inChains(clips: readonly ClipFacts[]): ClipFacts[] {
+  const byId = new Map(clips.map((clip) => [clip.id, clip]));
+  const ordered = new Set<ClipFacts>();
+  for (const clip of clips) {
+    const chain = new Set<ClipFacts>();
+    let next: ClipFacts | undefined = clip;
+    while (next !== undefined && !ordered.has(next) && !chain.has(next)) {
+      chain.add(next);
+      next = next.continuesId === null ? undefined : byId.get(next.continuesId);
+    }
+    for (const one of [...chain].reverse()) ordered.add(one);
+  }
+  return [...ordered];
+}
+
+/** How long a clip ran, in milliseconds of the shop; null until its length is known. */
+function ranFor(clip: ClipFacts): Fraction | null {
+  return clipLength(clip)?.mul(clip.pace).mul(1000) ?? null;
+}
+
+/** Milliseconds of the shop from a clip's first frame to another. */
+function shopTimeOfFrame(clip: ClipFacts, frame: number): Fraction {
+  return clipTimeOfFrame(clip, frame).mul(clip.pace).mul(1000);
+}
+
 /**
- * When each clip began: as set by hand; else by its camera's clock, which the slates of all its clips set right; else
- * by a slate of its own.
+ * When each clip began: as set by hand; else where the clip before it ended, which it goes on from; else by its
+ * camera's clock, which the slates of all its clips set right; else by a slate of its own.
  * @param options.timeZone the workshop's, an IANA name
  * @param options.now milliseconds since 1970
  */
@@ -95,41 +124,68 @@ export function timeClips(
   slates: readonly SlateFacts[],
   { timeZone, now }: { readonly timeZone: string; readonly now: number },
 ): Map<string, ClipTiming> {
+  const byId = new Map(clips.map((clip) => [clip.id, clip]));
   const cameraOf = new Map(cameras.map((camera) => [camera.id, camera]));
   const slatesOf = new Map<string, SlateFacts[]>();
   for (const slate of slates) slatesOf.set(slate.clipId, [...(slatesOf.get(slate.clipId) ?? []), slate]);
-  const starts = new Map(
-    clips.map((clip) => {
-      const camera = clip.cameraId === null ? null : (cameraOf.get(clip.cameraId) ?? null);
-      return [clip.id, cameraStart(clip, camera, timeZone, now)];
-    }),
-  );
+  const ordered = inChains(clips);
+
+  const starts = new Map<string, Answer<Fraction>>();
   const readings = new Map<string, SlateReading[]>();
-  for (const clip of clips) {
-    const start = starts.get(clip.id);
-    if (start?.ok !== true) continue;
+  for (const clip of ordered) {
+    const camera = clip.cameraId === null ? null : (cameraOf.get(clip.cameraId) ?? null);
+    const start = startAfter(clip, byId, starts) ?? cameraStart(clip, camera, timeZone, now);
+    starts.set(clip.id, start);
+    if (!start.ok) continue;
     const own = (slatesOf.get(clip.id) ?? []).map(({ frame, shopAt }) => ({
-      camera: start.value.add(clipTimeOfFrame(clip, frame).mul(clip.pace).mul(1000)),
+      camera: start.value.add(shopTimeOfFrame(clip, frame)),
       shop: new Fraction(shopAt),
     }));
     const key = clip.cameraId ?? clip.id;
     readings.set(key, [...(readings.get(key) ?? []), ...own]);
   }
   const clocks = new Map([...readings].map(([key, list]) => [key, cameraClock(list)]));
-  return new Map(
-    clips.map((clip): [string, ClipTiming] => {
-      const start = starts.get(clip.id);
-      const problem = start?.ok === false ? start.error : null;
-      if (clip.startSetAt !== null)
-        return [clip.id, { start: new Fraction(clip.startSetAt), clock: [], by: 'hand', problem }];
-      if (start?.ok === true) {
-        const clock = clocks.get(clip.cameraId ?? clip.id) ?? [];
-        return [clip.id, { start: start.value, clock, by: 'camera', problem }];
-      }
-      const [slate] = slatesOf.get(clip.id) ?? [];
-      if (slate === undefined) return [clip.id, { start: null, clock: [], by: 'nothing', problem }];
-      const before = clipTimeOfFrame(clip, slate.frame).mul(clip.pace).mul(1000);
-      return [clip.id, { start: new Fraction(slate.shopAt).sub(before), clock: [], by: 'slate', problem }];
-    }),
-  );
+
+  const timings = new Map<string, ClipTiming>();
+  for (const clip of ordered) {
+    const start = starts.get(clip.id);
+    const problem = start?.ok === false ? start.error : null;
+    const before = clip.continuesId === null ? undefined : byId.get(clip.continuesId);
+    const endOfBefore = before === undefined ? null : ranFor(before);
+    const timeOfBefore = timings.get(before?.id ?? '');
+    const [slate] = slatesOf.get(clip.id) ?? [];
+    if (clip.startSetAt !== null)
+      timings.set(clip.id, { start: new Fraction(clip.startSetAt), clock: [], by: 'hand', problem });
+    else if (endOfBefore !== null && timeOfBefore?.start != null)
+      timings.set(clip.id, {
+        start: timeOfBefore.start.add(endOfBefore),
+        clock: timeOfBefore.clock,
+        by: 'before',
+        problem,
+      });
+    else if (start?.ok === true)
+      timings.set(clip.id, {
+        start: start.value,
+        clock: clocks.get(clip.cameraId ?? clip.id) ?? [],
+        by: 'camera',
+        problem,
+      });
+    else if (slate !== undefined) {
+      const at = new Fraction(slate.shopAt).sub(shopTimeOfFrame(clip, slate.frame));
+      timings.set(clip.id, { start: at, clock: [], by: 'slate', problem });
+    } else timings.set(clip.id, { start: null, clock: [], by: 'nothing', problem });
+  }
+  return timings;
+}
+
+/** By the camera's clock, the end of the clip that this one goes on from; null where that is not known. */
+function startAfter(
+  clip: ClipFacts,
+  byId: ReadonlyMap<string, ClipFacts>,
+  starts: ReadonlyMap<string, Answer<Fraction>>,
+): Answer<Fraction> | null {
+  const before = clip.continuesId === null ? undefined : byId.get(clip.continuesId);
+  const start = starts.get(before?.id ?? '');
+  const ran = before === undefined ? null : ranFor(before);
+  return start?.ok === true && ran !== null ? right(start.value.add(ran)) : null;
 }

@@ -13,6 +13,8 @@ const USUAL: Readonly<Record<string, unknown>> = {
   email: 'guest@example.com',
   entries: 'none',
   fingerprint: 'a'.repeat(64),
+  from: '14:20',
+  jpeg: 'AAAA',
   kind: 'step',
   language: 'en',
   length: '1:00',
@@ -29,6 +31,7 @@ const USUAL: Readonly<Record<string, unknown>> = {
   timeZone: 'Europe/London',
   title: 'The drum and its shaft',
   to: 'up',
+  until: '15:05',
   version: 1,
   visibility: 'private',
 };

@@ -5,12 +5,14 @@ import { builds, stages } from '../../../db/schema/builds.ts';
 import { diaryEntries } from '../../../db/schema/diary.ts';
 import { editions, episodes } from '../../../db/schema/episodes.ts';
 import { files } from '../../../db/schema/files.ts';
+import { clipParts, clips, workStretches } from '../../../db/schema/footage.ts';
 import { anchors, appearances, chapters, noteParts, notes } from '../../../db/schema/notes.ts';
 import { parts } from '../../../db/schema/parts.ts';
 import { questionParts, questions } from '../../../db/schema/questions.ts';
 import { worksheets } from '../../../db/schema/worksheets.ts';
 import { type Services } from '../../../server/services.ts';
 import { KEPT_DAYS } from '../../builds/build.ts';
+import { eraseFootage } from '../../footage/server/erase-footage.ts';
 import { eraseDeletedFiles } from '../../files/server/erase-deleted-files.ts';
 
 const DAY_MS = 24 * 3_600_000;
@@ -24,6 +26,7 @@ export async function eraseDeleted(services: Services, now: Date): Promise<void>
   const { db } = services;
   const before = new Date(now.getTime() - KEPT_DAYS * DAY_MS);
   await eraseMarked(db, before);
+  await eraseFootage(db, before);
   await eraseWorksheets(db, before);
   await db.delete(diaryEntries).where(lt(diaryEntries.deletedAt, before));
   await eraseStages(db, before);
@@ -69,15 +72,16 @@ async function eraseWorksheets(db: Database, before: Date): Promise<void> {
   }
 }
 
-/** Entries that stayed in the diary when their stage was deleted stay now too, and point at it no more. */
+/** Diary entries, clips and hours that stayed when their stage was deleted stay now too, and point at it no more. */
 async function eraseStages(db: Database, before: Date): Promise<void> {
   const old = db.select({ id: stages.id }).from(stages).where(lt(stages.deletedAt, before));
-  await db.update(diaryEntries).set({ stageId: null }).where(inArray(diaryEntries.stageId, old));
+  for (const table of [diaryEntries, clips, workStretches])
+    await db.update(table).set({ stageId: null }).where(inArray(table.stageId, old));
   await db.delete(stages).where(lt(stages.deletedAt, before));
 }
 
 async function eraseParts(db: Database, before: Date): Promise<void> {
-  const uses = [noteParts, appearances, questionParts].map((table) =>
+  const uses = [noteParts, appearances, questionParts, clipParts].map((table) =>
     notExists(db.select({ partId: table.partId }).from(table).where(eq(table.partId, parts.id))),
   );
   await db.delete(parts).where(and(lt(parts.deletedAt, before), ...uses));
@@ -94,7 +98,7 @@ async function eraseEpisodes(db: Database, which: SQL): Promise<void> {
 async function emptyBuild(db: Database, id: string, before: Date): Promise<void> {
   await db.delete(worksheets).where(eq(worksheets.buildId, id));
   await eraseEpisodes(db, eq(episodes.buildId, id));
-  for (const table of [questions, anchors, diaryEntries, stages, parts] as const)
+  for (const table of [questions, anchors, clips, workStretches, diaryEntries, stages, parts] as const)
     await db.delete(table as PgTable).where(eq(table.buildId, id));
   await db
     .update(files)

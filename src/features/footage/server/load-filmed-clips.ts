@@ -26,6 +26,7 @@ export interface LoadedClip extends ClipTiming {
   readonly drop: boolean;
   /** When frames begin, in milliseconds since the first; null where they come at a constant rate. */
   readonly frameTimes: readonly number[] | null;
+  readonly continuesId: string | null;
   readonly stageId: string | null;
 }
 
@@ -62,6 +63,7 @@ export async function loadFilmedClips(
       startLabel: row.startLabel,
       drop: row.drop,
       frameTimes: row.frameTimes,
+      continuesId: row.continuesId,
       stageId: row.stageId,
     };
   });
@@ -101,6 +103,7 @@ async function timeRows(db: Database, rows: readonly ClipRow[], now: Date): Prom
       createdOffset: row.createdOffset,
       startSetAt: row.startSetAt?.getTime() ?? null,
       frameTimes: row.frameTimes,
+      continuesId: row.continuesId,
     })),
     cameraRows,
     slateRows.map(({ slate }) => ({

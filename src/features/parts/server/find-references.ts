@@ -1,17 +1,18 @@
 import { count, inArray } from 'drizzle-orm';
 import { type Database } from '../../../db/client.ts';
+import { clipParts } from '../../../db/schema/footage.ts';
 import { appearances, noteParts } from '../../../db/schema/notes.ts';
 import { questionParts } from '../../../db/schema/questions.ts';
 
 /**
- * How often notes, appearances and questions refer to parts, those that were deleted and can come back included.
+ * How often notes, appearances, questions and clips refer to parts, those that were deleted and can come back included.
  * @returns by part; a part that nothing refers to is not in it
  */
 export async function findReferences(db: Database, ids: readonly string[]): Promise<Map<string, number>> {
   const found = new Map<string, number>();
   if (ids.length === 0) return found;
   const sources = await Promise.all(
-    [noteParts, appearances, questionParts].map((table) =>
+    [noteParts, appearances, questionParts, clipParts].map((table) =>
       db
         .select({ partId: table.partId, times: count() })
         .from(table)

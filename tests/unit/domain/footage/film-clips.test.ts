@@ -23,6 +23,7 @@ function clip(given: Partial<ClipFacts> = {}): ClipFacts {
     createdOffset: 0,
     startSetAt: null,
     frameTimes: null,
+    continuesId: null,
     ...given,
   };
 }
@@ -105,4 +106,27 @@ test('slates of one clip set every clip of the camera right, and no other camera
 test('a slate counts from the timestamp of its frame where frames come unevenly', () => {
   const given = { createdWall: null, frameTimes: [0, 33, 90, 120] };
   expect(startOf(given, {}, [{ clipId: 'c1', frame: 2, shopAt: 1000 }]).start?.valueOf()).toBe(910);
+});
+
+describe('a clip that goes on from another', () => {
+  const first = clip({ id: 'c1' });
+  const second = clip({ id: 'c2', continuesId: 'c1', createdWall: '1904-01-01T00:00:00' });
+  const at = (timed: ReturnType<typeof timeClips>, id: string) =>
+    new Date(timed.get(id)?.start?.valueOf() ?? 0).toISOString();
+
+  test('begins where that one ended, whatever its own file says', () => {
+    const timed = timeClips([second, first], [CAMERA], [], PLACE);
+    expect(at(timed, 'c2')).toBe('2026-07-02T14:23:07.000Z');
+    expect(timed.get('c2')?.by).toBe('before');
+  });
+
+  test('moves with it when that is set by hand', () => {
+    const set = { ...first, startSetAt: Date.UTC(2026, 6, 2, 8) };
+    expect(at(timeClips([set, second], [CAMERA], [], PLACE), 'c2')).toBe('2026-07-02T08:01:00.000Z');
+  });
+
+  test('in a circle is timed by its own file', () => {
+    const timed = timeClips([{ ...first, continuesId: 'c2' }, second], [CAMERA], [], PLACE);
+    expect(timed.size).toBe(2);
+  });
 });
