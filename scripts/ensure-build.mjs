@@ -21,10 +21,10 @@ const STAMP = 'dist/built-from';
 const BUNDLES = [
   { from: 'src/web.ts', to: 'dist/web.mjs' },
   { from: 'src/worker.ts', to: 'dist/worker.mjs' },
-  // Plans are rewritten in a process of their own.
+  // PDFs are rewritten, long edit lists read, and cutting plans made in processes of their own.
   { from: 'src/server/media/rewrite-pdf-child.ts', to: 'dist/rewrite-pdf-child.mjs' },
-  // So are long edit lists read.
   { from: 'src/server/edits/read-edit-child.ts', to: 'dist/read-edit-child.mjs' },
+  { from: 'src/server/solver/plan-cuts-child.ts', to: 'dist/plan-cuts-child.mjs' },
 ];
 
 /**

@@ -44,6 +44,8 @@ export interface Field<Value> {
   readonly example: string;
   /** A yes or no, which is given by its name alone. */
   readonly flag?: true;
+  /** It takes several lines. */
+  readonly lines?: true;
   /** The words that may be chosen from. */
   readonly choices?: readonly string[];
   /** It may be left out. */

@@ -14,6 +14,10 @@ export const OPEN_SHEETS = {
     about: 'Shaft and hole by ISO 286, the clearance, and what is still to come off.',
   },
   seats: { title: 'Bearing seats', about: 'The seats of a bearing, by which ring turns under the load.' },
+  stock: {
+    title: 'Cutting plan',
+    about: 'The fewest bars for a list of pieces, offcuts first, with marks for the tape.',
+  },
   sections: { title: 'Section mass', about: 'What a bar, tube or angle weighs by the metre.' },
   ports: {
     title: 'Ports',
@@ -36,7 +40,10 @@ export const TEAM_SHEETS = {
   beam: { title: 'Simple beam', about: 'Stress and deflection, where the method holds.' },
 } as const;
 
-export const SHEETS = { ...OPEN_SHEETS, ...TEAM_SHEETS } as const;
+const { stock: _cuttingPlan, ...KEEPABLE } = OPEN_SHEETS;
+
+/** Those that are kept with a build. */
+export const SHEETS = { ...KEEPABLE, ...TEAM_SHEETS } as const;
 export type SheetId = keyof typeof SHEETS;
 const SHEET_IDS = Object.keys(SHEETS) as [SheetId, ...SheetId[]];
 

@@ -1,10 +1,8 @@
-import { createRequire } from 'node:module';
-import { fileURLToPath } from 'node:url';
 import { type Answer, right, wrong } from '../../domain/answer.ts';
 import { type Edit, type ReadEditOptions } from '../../domain/edit/edit.ts';
 import { type EditRecord, fromEditRecord } from '../../domain/edit/edit-record.ts';
 import { readEdit } from '../../domain/edit/read-edit.ts';
-import { runProgram } from '../media/run-program.ts';
+import { runNode } from '../run-node.ts';
 import { type EditRequest } from './edit-request.ts';
 
 /** Texts up to this length are read at once: some hundred events, a few milliseconds. Our own choice. */
@@ -23,21 +21,13 @@ export async function readEditApart(
 ): Promise<Answer<Edit>> {
   if (text.length <= SHORT) return readEdit(text, { rate, clipRates });
   const request: EditRequest = { text, rate, clipRates: [...clipRates] };
-  const { status, stdout } = await runProgram({
-    program: process.execPath,
-    args: ['--max-old-space-size=1024', ...childProgram()],
+  const { status, stdout } = await runNode({
+    source: new URL('./read-edit-child.ts', import.meta.url),
+    heapMebibytes: 1024,
     seconds: SECONDS_AT_MOST,
     stdin: Buffer.from(JSON.stringify(request)),
   });
   if (status !== 0) return wrong('The edit is too much to read at once. Nothing was taken.');
   const answer = JSON.parse(stdout.toString()) as Answer<EditRecord>;
   return answer.ok ? right(fromEditRecord(answer.value)) : answer;
-}
-
-/** In the build's folder; from the sources as it stands. */
-function childProgram(): string[] {
-  const here = import.meta.url;
-  if (!here.endsWith('.ts')) return [fileURLToPath(here.replace(/\/dist\/.*$/, '/dist/read-edit-child.mjs'))];
-  const loader = createRequire(here).resolve('tsx');
-  return ['--import', loader, fileURLToPath(new URL('./read-edit-child.ts', here))];
 }

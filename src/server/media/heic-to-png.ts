@@ -1,6 +1,6 @@
 import { access, constants } from 'node:fs/promises';
 import { RefusedFile } from './refused-file.ts';
-import { runProgram } from './run-program.ts';
+import { runProgram } from '../run-program.ts';
 
 // The older and the newer name of the program in Debian's libheif.
 const PROGRAMS = ['/usr/bin/heif-dec', '/usr/bin/heif-convert'];

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { type Rate } from '../../domain/time/rate.ts';
 import { RefusedFile } from './refused-file.ts';
 import { READ_ONLY_LOCAL, inputArgs, type MediaFormat } from './media-input.ts';
-import { runProgram } from './run-program.ts';
+import { runProgram } from '../run-program.ts';
 
 /** What a film or sound holds, as far as is decided by it. */
 export interface MediaFacts {

@@ -1,6 +1,6 @@
 import { inputArgs, type MediaFormat, READ_ONLY_LOCAL } from './media-input.ts';
 import { RefusedFile } from './refused-file.ts';
-import { runProgram } from './run-program.ts';
+import { runProgram } from '../run-program.ts';
 
 export interface FfmpegCall {
   readonly path: string;

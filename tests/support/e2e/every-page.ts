@@ -66,17 +66,14 @@ export const PAGES: readonly PageState[] = [
   { route: 'worksheets/index', at: () => '/worksheets' },
   { route: 'worksheets/lengths', at: () => '/worksheets/lengths?text=38' },
   { route: 'worksheets/holes', at: () => '/worksheets/holes?thread=M12' },
-  { route: 'worksheets/fits', at: () => '/worksheets/fits' },
-  { route: 'worksheets/fits', state: 'filled in', at: () => '/worksheets/fits?size=25&hole=H7&shaft=k6' },
-  {
-    route: 'worksheets/fits',
-    state: 'still to come off',
-    at: () => '/worksheets/fits?size=25&shaft=k6&measured=25.31&instrument=0.01',
-  },
-  { route: 'worksheets/fits', state: 'refused', at: () => '/worksheets/fits?size=25&hole=k6' },
+  { route: 'worksheets/fits', at: () => '/worksheets/fits?size=25&hole=H7&shaft=k6' },
   {
     route: 'worksheets/seats',
     at: () => '/worksheets/seats?bore=25&outside=52&shaft=k6&housing=M7&turning=inner',
+  },
+  {
+    route: 'worksheets/stock',
+    at: () => '/worksheets/stock?pieces=1200,4,rail%0A800,6&length=6000&offcuts=2400&kerf=2.5',
   },
   { route: 'worksheets/sections', at: () => '/worksheets/sections?shs=50x3&length=6000&quantity=4' },
   { route: 'worksheets/ports', at: () => '/worksheets/ports?diameter=16.6&pitch=19+tpi' },

@@ -13,7 +13,7 @@ import { canCopyStreams, renditionArgs, soundArgs } from '../../../server/media/
 import { type MediaFacts, probeMedia } from '../../../server/media/probe-media.ts';
 import { RefusedFile } from '../../../server/media/refused-file.ts';
 import { runFfmpeg } from '../../../server/media/run-ffmpeg.ts';
-import { oneAtATime } from '../../../server/media/run-program.ts';
+import { oneAtATime } from '../../../server/run-program.ts';
 import { SNIFF_BYTES, sniffFile } from '../../../server/media/sniff-file.ts';
 import { type Services } from '../../../server/services.ts';
 import { fetchToFile } from '../../../server/storage/local-copy.ts';

@@ -1,18 +1,20 @@
 import { FieldFrame, describeField, fieldId, INPUT_LOOK } from '../../../components/FieldFrame.tsx';
 import { Select } from '../../../components/Select.tsx';
 import { type Field } from '../../../domain/worksheets/worksheet.ts';
+import { INPUT_LENGTH, LINES_LENGTH } from './given.ts';
 
 type SheetFieldProps = {
   readonly name: string;
   readonly field: Field<unknown>;
   readonly text: string;
   readonly error: string | undefined;
-  readonly onChange: (text: string) => void;
+  /** Left out where the form is only sent. */
+  readonly onChange?: ((text: string) => void) | undefined;
 };
 
 /** One input of a worksheet, with how it was read under it. */
 export function SheetField({ name, field, text, error, onChange }: SheetFieldProps) {
-  const { label, example, choices, flag, optional = false, otherwise, readBack } = field;
+  const { label, example, choices, flag, lines, optional = false, otherwise, readBack } = field;
   const id = fieldId(name);
   if (flag === true) {
     return (
@@ -24,7 +26,7 @@ export function SheetField({ name, field, text, error, onChange }: SheetFieldPro
           checked={text === 'yes'}
           className="size-5 accent-dye"
           onChange={(event) => {
-            onChange(event.target.checked ? 'yes' : '');
+            onChange?.(event.target.checked ? 'yes' : '');
           }}
         />
         {label}
@@ -43,30 +45,33 @@ export function SheetField({ name, field, text, error, onChange }: SheetFieldPro
         error={error}
         required={!optional}
         onChange={(event) => {
-          onChange(event.target.value);
+          onChange?.(event.target.value);
         }}
       />
     );
   }
   const hint = [`Such as ${example}`, usual].filter((line) => line !== undefined).join('. ');
   const read = text.trim() === '' || error !== undefined ? undefined : readBack?.(text);
+  const input = {
+    ...describeField(id, hint, error),
+    id,
+    name,
+    autoComplete: 'off',
+    autoCapitalize: 'none',
+    spellCheck: false,
+    value: text,
+    className: `${INPUT_LOOK} font-mono`,
+    onChange: (event: { readonly target: { readonly value: string } }) => {
+      onChange?.(event.target.value);
+    },
+  };
   return (
     <FieldFrame id={id} label={label} hint={hint} error={error} required={!optional}>
-      <input
-        {...describeField(id, hint, error)}
-        id={id}
-        name={name}
-        type="text"
-        autoComplete="off"
-        autoCapitalize="none"
-        spellCheck={false}
-        maxLength={200}
-        value={text}
-        className={`${INPUT_LOOK} font-mono`}
-        onChange={(event) => {
-          onChange(event.target.value);
-        }}
-      />
+      {lines === true ? (
+        <textarea {...input} rows={8} maxLength={LINES_LENGTH} />
+      ) : (
+        <input {...input} type="text" maxLength={INPUT_LENGTH} />
+      )}
       {readBack !== undefined && (
         <output htmlFor={id} className="min-h-5 font-mono text-sm text-ink-soft">
           {read}

@@ -2,14 +2,18 @@ import { type Field } from '../../../domain/worksheets/worksheet.ts';
 
 type Fields = Readonly<Record<string, Field<unknown>>>;
 
+/** The longest text of one input, and of one that takes several lines. */
+export const INPUT_LENGTH = 200;
+export const LINES_LENGTH = 4000;
+
 /** What was typed or chosen, by the name of its input; nothing for what was not. */
 export type Typed = Readonly<Record<string, string>>;
 
 /** The inputs of a worksheet in the query of an address. */
 export function typedIn(query: URLSearchParams, inputs: Fields): Typed {
   return Object.fromEntries(
-    Object.keys(inputs).flatMap((name) => {
-      const text = query.get(name)?.slice(0, 200) ?? '';
+    Object.entries(inputs).flatMap(([name, { lines }]) => {
+      const text = query.get(name)?.slice(0, lines === true ? LINES_LENGTH : INPUT_LENGTH) ?? '';
       return text === '' ? [] : [[name, text]];
     }),
   );
