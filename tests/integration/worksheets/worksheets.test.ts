@@ -126,12 +126,15 @@ describe('keeping, changing, deleting and bringing back a worksheet', () => {
       restoreWorksheet(context, { build, worksheet, version: 1 }),
   };
 
-  test.each(Object.entries(verbs))('%s refuses a moderator, and is not there for a viewer', async (_name, run) => {
-    await aBuild();
-    const { id } = await addWorksheet(shed.owner, { ...FIT, build });
-    await expect(run(shed.moderator, id)).rejects.toThrow(Forbidden);
-    await expect(run(shed.viewer, id)).rejects.toThrow(NotFound);
-  });
+  test.each(Object.entries(verbs))(
+    '%s refuses a moderator, and is not there for a viewer',
+    async (_name, run) => {
+      await aBuild();
+      const { id } = await addWorksheet(shed.owner, { ...FIT, build });
+      await expect(run(shed.moderator, id)).rejects.toThrow(Forbidden);
+      await expect(run(shed.viewer, id)).rejects.toThrow(NotFound);
+    },
+  );
 
   test.each(Object.entries(verbs))('%s does not find another workshop’s', async (_name, run) => {
     await aBuild();
