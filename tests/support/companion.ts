@@ -52,7 +52,11 @@ export async function aShownBuild(context: WorkshopContext): Promise<Map<string,
 export async function aKeptVideo(
   { db, workshop, services }: WorkshopContext,
   buildId: string,
-  { seconds, bytes }: { readonly seconds: number; readonly bytes?: Uint8Array },
+  {
+    seconds,
+    bytes,
+    poster,
+  }: { readonly seconds: number; readonly bytes?: Uint8Array; readonly poster?: Uint8Array },
 ): Promise<string> {
   const id = newId();
   const [tenant, size] = [{ workshopId: workshop.id }, bytes?.length ?? 4321];
@@ -73,6 +77,11 @@ export async function aKeptVideo(
   const variant = { ...tenant, fileId: id, variant: 'video', contentType: 'video/mp4', bytes: size };
   await db.insert(fileVariants).values({ ...variant, width: 320, height: 180 });
   if (bytes) await services.storage.put(keyOf(workshop.id, id, 'video'), 'video/mp4', bytes);
+  if (poster) {
+    const still = { variant: 'poster', contentType: 'image/jpeg', bytes: poster.length };
+    await db.insert(fileVariants).values({ ...tenant, ...still, fileId: id, width: 320, height: 180 });
+    await services.storage.put(keyOf(workshop.id, id, 'poster'), 'image/jpeg', poster);
+  }
   return id;
 }
 
