@@ -104,6 +104,20 @@ export interface EditView {
   readonly report: EditReport | null;
 }
 
+/** A version of an episode's edit, as listed. */
+export interface EditVersion {
+  readonly id: string;
+  readonly number: number;
+  readonly source: EditSource;
+  readonly sourceName: string;
+  readonly takenBy: string | null;
+  readonly takenAt: Date;
+  readonly frames: number;
+  readonly rate: Rate;
+  /** Numbers of the editions that were published with it. */
+  readonly editions: readonly number[];
+}
+
 const segments = z.object({ picture: z.number(), sound: z.number() });
 export const EditViewAnswer = z.object({
   name: z.string(),
