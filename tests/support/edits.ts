@@ -44,10 +44,16 @@ export async function anUncutEpisode(context: WorkshopContext, seconds = 15): Pr
 }
 
 /** Takes an edit list at 25 frames a second. */
-export function takeList(context: WorkshopContext, episode: string, text = LIST, more: object = {}) {
+export function takeList(
+  context: WorkshopContext,
+  episode: string,
+  text = LIST,
+  more: object = {},
+  build = BUILD,
+) {
   return takeEdit(context, {
     ...readEditOf({ text, name: 'press-4.edl', rate: '25', ...more }),
-    build: BUILD,
+    build,
     episode,
   });
 }

@@ -6,7 +6,9 @@ import { clips } from '../../../src/db/schema/footage.ts';
 import { getBuild } from '../../../src/features/builds/server/get-build.ts';
 import { MATCHES } from '../../../src/features/episodes/edit.ts';
 import { listPublishChecks } from '../../../src/features/episodes/server/list-publish-checks.ts';
-import { findDraftEdit } from '../../../src/features/notes/server/load-edits.ts';
+import { getEdits } from '../../../src/features/episodes/server/get-edits.ts';
+import { takeEditAgain } from '../../../src/features/episodes/server/take-edit-again.ts';
+import { findDraftEdit, findEditById } from '../../../src/features/notes/server/load-edits.ts';
 import { previewEdit } from '../../../src/features/episodes/server/preview-edit.ts';
 import { POST as previewRoute } from '../../../src/pages/api/workshops/[workshop]/builds/[build]/episodes/[episode]/edits/preview.ts';
 import { POST as takeRoute } from '../../../src/pages/api/workshops/[workshop]/builds/[build]/episodes/[episode]/edits/index.ts';
@@ -196,6 +198,38 @@ describe('Taking an edit', () => {
       });
       expect(answer.status).toBe(404);
     }
+  });
+});
+
+describe('Going back', () => {
+  const again = (context: TestWorkshop['owner'], episode: string, edit: string) =>
+    takeEditAgain(context, { build: BUILD, episode, edit });
+
+  it('takes an old version as a new one, with its text and its matches', async () => {
+    const episode = await anUncutEpisode(workshop.owner);
+    const first = await takeList(workshop.editor, episode);
+    await takeList(workshop.editor, episode, NEXT_LIST);
+    const { number } = await again(workshop.owner, episode, first.id);
+    const { versions, shown } = await getEdits(workshop.moderator, { build: BUILD, episode });
+    expect(versions.map((one) => [one.number, one.sourceName, one.takenBy])).toEqual([
+      [number, 'press-4.edl', workshop.people.owner.name],
+      [2, 'press-4.edl', workshop.people.editor.name],
+      [1, 'press-4.edl', workshop.people.editor.name],
+    ]);
+    expect(shown?.edit.picture.map(({ clip }) => clip)).toEqual(['C0043.MP4', 'C0044.MP4']);
+    expect(shown?.clipIds).toEqual((await findEditById(services.db, first.id))?.clipIds);
+    expect(shown?.compared?.map(({ change }) => change)).toEqual(['trimmed', 'new', 'dropped']);
+    const old = await getEdits(workshop.owner, { build: BUILD, episode, version: 1 });
+    expect(old.shown).toMatchObject({ number: 1, compared: null });
+    await expect(getEdits(workshop.owner, { build: BUILD, episode, version: 9 })).rejects.toThrow(NotFound);
+  });
+
+  it('refuses a moderator, and finds no version of another episode or workshop', async () => {
+    const [episode, other] = [await anUncutEpisode(workshop.owner), await anUncutEpisode(workshop.owner)];
+    const { id } = await takeList(workshop.owner, episode);
+    await expect(again(workshop.moderator, episode, id)).rejects.toThrow(Forbidden);
+    await expect(again(workshop.owner, other, id)).rejects.toThrow(NotFound);
+    await expect(again(workshop.outsider, episode, id)).rejects.toThrow(NotFound);
   });
 });
 

@@ -2,6 +2,9 @@ import { type Page, type Response } from '@playwright/test';
 import { filesBelow } from '../architecture/import-graph.ts';
 import { paths } from '../../../src/paths.ts';
 import { PASSWORD, type TestPerson } from '../people.ts';
+import { readEdl } from '../../../src/domain/edit/read-edl.ts';
+import { writeOtio } from '../../../src/domain/edit/write-otio.ts';
+import { LIST } from '../edits.ts';
 import { enterPassword } from './steps.ts';
 import { type World } from './world.ts';
 import { newAddress } from './product.ts';
@@ -55,6 +58,15 @@ async function sendHalfAnAddress(page: Page): Promise<void> {
 async function askAgain(page: Page): Promise<void> {
   await page.getByLabel('Your question').fill('Is this frame strong enough for 12 tonnes?');
   await page.getByRole('button', { name: 'Send the question' }).click();
+}
+
+async function lookAtEdit(page: Page): Promise<void> {
+  const read = readEdl(LIST, { rate: { num: 25, den: 1 } });
+  const buffer = Buffer.from(read.ok ? writeOtio(read.value) : '');
+  await page
+    .getByLabel('Edit list or timeline')
+    .setInputFiles({ name: 'press-4.otio', mimeType: 'application/json', buffer });
+  await page.getByRole('button', { name: 'Look at it' }).click();
 }
 
 /** Every page, in every state that looks different. */
@@ -225,6 +237,24 @@ export const PAGES: readonly PageState[] = [
     route: 'bench/[workshop]/[build]/episodes/[episode]/index',
     as: editor,
     at: inBuild(({ episode }) => `/episodes/${episode}`),
+  },
+  {
+    route: 'bench/[workshop]/[build]/episodes/[episode]/edit',
+    state: 'none yet',
+    as: editor,
+    at: inBuild(({ episode }) => `/episodes/${episode}/edit`),
+  },
+  {
+    route: 'bench/[workshop]/[build]/episodes/[episode]/edit',
+    as: editor,
+    at: inBuild(({ published }) => `/episodes/${published}/edit`),
+  },
+  {
+    route: 'bench/[workshop]/[build]/episodes/[episode]/edit',
+    state: 'looked at',
+    as: editor,
+    at: inBuild(({ published }) => `/episodes/${published}/edit`),
+    then: lookAtEdit,
   },
   { route: 'bench/[workshop]/[build]/episodes/index', as: owner, at: inBuild(() => '/episodes') },
   {

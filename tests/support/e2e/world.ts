@@ -7,6 +7,7 @@ import { publishEdition } from '../../../src/features/episodes/server/publish-ed
 import { setVideo } from '../../../src/features/episodes/server/set-video.ts';
 import { answerQuestion } from '../../../src/features/questions/server/answer-question.ts';
 import { addPart } from '../../../src/features/parts/server/add-part.ts';
+import { LIST, NEXT_LIST, takeList } from '../edits.ts';
 import { addSubscribers, tokensOf } from '../audience.ts';
 import { inWorkshop, type TestPerson } from '../people.ts';
 import { ask } from '../questions.ts';
@@ -79,6 +80,8 @@ export async function makeWorld(product: Product): Promise<World> {
     length: '10:00',
   });
   await publishEdition(context, { ...ref, version: (await getDesk(context, ref)).episode.version });
+  await takeList(context, published, LIST, {}, build);
+  await takeList(context, published, NEXT_LIST, {}, build);
   const [subscriber = ''] = await addSubscribers(
     product.services,
     { workshopId: context.workshop.id },

@@ -33,9 +33,14 @@ export function saySpeed({ speed }: Pick<Segment, 'speed'>): string {
 
 function toRow(segment: Segment, rate: Rate, change: SegmentChange | null, was: Segment | null): SegmentRow {
   const { clip, clipRate, source, record, track } = segment;
-  const span = (stretch: typeof record, at: Rate) => `${sayFrames(stretch.in, at)} – ${sayFrames(stretch.out, at)}`;
+  const span = (stretch: typeof record, at: Rate) =>
+    `${sayFrames(stretch.in, at)} – ${sayFrames(stretch.out, at)}`;
   const before =
-    was === null ? null : change === 'moved' ? sayFrames(was.record.in, rate) : span(was.source, was.clipRate);
+    was === null
+      ? null
+      : change === 'moved'
+        ? sayFrames(was.record.in, rate)
+        : span(was.source, was.clipRate);
   return {
     clip,
     source: span(source, clipRate),
