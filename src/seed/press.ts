@@ -23,6 +23,8 @@ import {
   PRESS_DRAFT,
   PRESS_EPISODES,
 } from './press-episodes.ts';
+import { addWorksheet } from '../features/worksheets/server/add-worksheet.ts';
+import { PRESS_WORKSHEETS } from './press-worksheets.ts';
 import { NOT_IN_PLANS, PRESS_PARTS, PRESS_STAGES } from './press-parts.ts';
 import { readMedia, takeIn } from './take-in.ts';
 
@@ -52,6 +54,7 @@ export async function seedPress({ owner, editor }: { owner: Context; editor: Con
   const partIds = await seedParts(owner);
   const fileIds = await seedFiles(owner);
   await seedDiary(owner, stageIds, fileIds);
+  await seedWorksheets(owner, partIds);
   for (const episode of PRESS_EPISODES) {
     const ref = await seedEpisode(owner, episode, { partIds, fileIds });
     const { episode: draft } = await getDesk(owner, ref);
@@ -69,6 +72,17 @@ export async function seedPress({ owner, editor }: { owner: Context; editor: Con
     version,
     visibility: 'public',
   });
+}
+
+async function seedWorksheets(owner: Context, partIds: Ids): Promise<void> {
+  for (const { part, ...worksheet } of PRESS_WORKSHEETS) {
+    const id = partIds.get(part ?? '');
+    await addWorksheet(owner, {
+      build: BUILD,
+      ...worksheet,
+      of: id === undefined ? null : { kind: 'part', id },
+    });
+  }
 }
 
 async function seedStages(owner: Context): Promise<Ids> {
