@@ -1,6 +1,7 @@
 import { type Answer, right, wrong } from '../../domain/answer.ts';
 import { type Tool } from '../tool.ts';
 import { beamTool } from './beam.ts';
+import { captionsTool } from './captions.ts';
 import { chaptersTool } from './chapters.ts';
 import { driveTool } from './drive.ts';
 import { editTool } from './edit.ts';
@@ -20,6 +21,7 @@ import { weldTool } from './weld.ts';
 /** The tools by the name they are called by. */
 export const TOOLS: ReadonlyMap<string, Tool> = new Map([
   ['beam', beamTool],
+  ['captions', captionsTool],
   ['chapters', chaptersTool],
   ['drive', driveTool],
   ['edit', editTool],

@@ -6,6 +6,16 @@ export interface Cue {
   readonly lines: readonly string[];
   /** Who speaks, where the file says so. */
   readonly voice?: string;
+  /** When words begin, where the file says so, as the captions of video hosts do. */
+  readonly stamps?: readonly Stamp[];
+}
+
+/** The words from a character on are spoken from a moment on. */
+export interface Stamp {
+  /** Counted from 0 in the lines joined by line feeds. */
+  readonly character: number;
+  /** Milliseconds from the start of the video. */
+  readonly time: number;
 }
 
 /**

@@ -32,13 +32,19 @@ export function readCaptions(bytes: Uint8Array): Answer<Captions> {
 
 /** Reads the text of a captions file; what is said of readCaptions holds here too. */
 export function readCaptionsText(text: string): Answer<Captions> {
+  const read = readAllCues(text);
+  return read.ok ? keepGood(read.value.cues, read.value.format) : read;
+}
+
+/** Every caption of a file in its own order, of any number and length; some may have no words or end before they begin. */
+export function readAllCues(text: string): Answer<Pick<Captions, 'format' | 'cues'>> {
   const bare = text.startsWith('\uFEFF') ? text.slice(1) : text;
   if (bare.trim() === '') return wrong('This captions file is empty.');
   const format = sniffCaptions(bare);
   if (format === null)
     return wrong('This is not a captions file: it neither begins with WEBVTT nor has SubRip times in it.');
   const read = format === 'webvtt' ? readWebvtt(bare) : right(readSubrip(bare));
-  return read.ok ? keepGood(read.value, format) : read;
+  return read.ok ? right({ format, cues: read.value }) : read;
 }
 
 function keepGood(all: readonly Cue[], format: CaptionsFormat): Answer<Captions> {

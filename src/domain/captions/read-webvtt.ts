@@ -1,11 +1,13 @@
 import webvtt, { type Cue as ParsedCue, type Entity, type TreeNode } from 'webvtt-parser';
 import { type Answer, right, wrong } from '../answer.ts';
-import { type Cue } from './cue.ts';
+import { type Cue, type Stamp } from './cue.ts';
 
 /** Words with who says them; a caption with several voices has several. */
 interface Run {
   readonly text: string;
   readonly voice: string | undefined;
+  /** Milliseconds, for a moment that stands between the words. */
+  readonly time?: number;
 }
 
 /**
@@ -39,23 +41,58 @@ export function readWebvtt(text: string): Answer<Cue[]> {
 function toCue(parsed: ParsedCue): Cue {
   const runs = parsed.tree.children.flatMap((node) => runsOf(node, undefined));
   const voices = [...new Set(runs.flatMap(({ voice }) => voice ?? []))];
-  const lines = runs
-    .map(({ text }) => text)
-    .join('')
-    .split('\n')
-    .map((line) => line.trim())
-    .filter((line) => line !== '');
+  const text = runs.map((run) => run.text).join('');
+  const stamps = stampsOf(runs, text);
+  const lines = linesOf(text);
   return {
     start: Math.round(parsed.startTime * 1000),
     end: Math.round(parsed.endTime * 1000),
     lines,
     ...(voices.length === 1 ? { voice: voices[0] } : {}),
+    ...(stamps.length > 0 ? { stamps } : {}),
   };
+}
+
+function linesOf(text: string): string[] {
+  return text
+    .split('\n')
+    .map((line) => line.trim())
+    .filter((line) => line !== '');
+}
+
+/** Where the words behind each moment stand once lines are trimmed. */
+function stampsOf(runs: readonly Run[], text: string): Stamp[] {
+  let at = 0;
+  const written = runs.flatMap(({ text: words, time }) => {
+    const from = at;
+    at += words.length;
+    // A word is written with the space before it.
+    return time === undefined
+      ? []
+      : [{ from: from + (/^\s*/.exec(text.slice(from, from + 20))?.[0].length ?? 0), time }];
+  });
+  let begin = 0;
+  let kept = 0;
+  const lines = (written.length === 0 ? [] : text.split('\n')).map((line) => {
+    const trimmed = line.trim();
+    const first = begin + line.length - line.trimStart().length;
+    const placed = { first, end: begin + line.length, kept, length: trimmed.length };
+    begin += line.length + 1;
+    if (trimmed !== '') kept += trimmed.length + 1;
+    return placed;
+  });
+  let index = 0;
+  return written.map(({ from, time }) => {
+    while ((lines[index]?.end ?? from) < from) index++;
+    const line = lines[index];
+    const inside = line === undefined ? 0 : Math.min(Math.max(from - line.first, 0), line.length);
+    return { character: (line?.kept ?? kept) + inside, time };
+  });
 }
 
 function runsOf(node: TreeNode, voice: string | undefined): Run[] {
   if (node.type === 'text') return [{ text: node.value, voice }];
-  if (node.type === 'timestamp') return [];
+  if (node.type === 'timestamp') return [{ text: '', voice, time: Math.round(node.value * 1000) }];
   const speaker = node.name === 'v' ? unescape(node.value ?? '').trim() || voice : voice;
   return node.children.flatMap((child) => runsOf(child as TreeNode, speaker));
 }

@@ -68,13 +68,26 @@ describe('WebVTT', () => {
     expect(read(vtt(timed('60:00:01.000 --> 60:00:02.000'))).cues[0]?.start).toBe(216_001_000);
   });
 
-  it('gives plain words: tags and escapes are undone', () => {
+  it('gives plain words, and when they are spoken where the file says so', () => {
     const words = '<v Rosa><i>14&nbsp;or</i> 40 &amp; <00:00:00.500>a half &lt;3</v>';
     expect(read(vtt(timed('00:00.000 --> 00:01.000', words))).cues[0]).toEqual({
       start: 0,
       end: 1000,
       lines: ['14\u00a0or 40 & a half <3'],
       voice: 'Rosa',
+      stamps: [{ character: 11, time: 500 }],
+    });
+  });
+
+  it('places word times behind lines that are trimmed away', () => {
+    const words = ' \n so<00:00:00.400><c> the</c><00:00:00.800><c> drum</c> \nnext<00:00:01.200><c> is</c>';
+    expect(read(vtt(timed('00:00.000 --> 00:02.000', words))).cues[0]).toMatchObject({
+      lines: ['so the drum', 'next is'],
+      stamps: [
+        { character: 3, time: 400 },
+        { character: 7, time: 800 },
+        { character: 17, time: 1200 },
+      ],
     });
   });
 

@@ -1,0 +1,285 @@
+import type Fraction from 'fraction.js';
+import { type SettingName } from '../finding.ts';
+import { after, before, type Speech } from '../speech/speech.ts';
+import { type Claim, type Shop } from './claim.ts';
+import { firstWords, lastWords, valuesOf } from './classify.ts';
+import {
+  FREE_BEHIND,
+  GRITS,
+  HEATED,
+  PAPER_BEHIND,
+  SANDED,
+  STOCK_BEHIND,
+  TOOL_BEHIND,
+  WAY_BEHIND,
+} from './contexts.ts';
+import { type Measure } from './measures.ts';
+import { fractionWritten } from './threads.ts';
+
+/** What was last measured or set, for numbers that follow without a unit. */
+export interface Worked {
+  readonly claim: Claim | null;
+  readonly torque: string | null;
+  readonly pressure: string | null;
+}
+
+/** How far back, in words, a unit still counts as the one being worked in. Our own: about half a minute. */
+const NEAR = 60;
+/** Behind one of these stands a value, if anything. */
+const AT = String.raw`(?:(?:at|to|is|on|around|about|say|of|with|roughly|like|maybe|only|it's|exactly|nearly|just|over|under|for|a|be|near|says|said|as|runs|be) )`;
+const at = (list: string) => new RegExp(`\\b(?:${list})(?:'s)? (?:\\w+(?:'\\w+)? ){0,4}?${AT}+$`);
+const SPEED = at(
+  'speed|speeds|spindle|revs|rpm|router|drill press|spin|spinning|running|chuck|variable speed',
+);
+const FEED = at('feed|feeds|feedrate|feeding');
+const CURRENT = at('amps|amperage|current|welder|machine');
+const VOLTS = at('volts|voltage');
+const TORQUE = at('torque|torques|torqued|torquing|torque wrench|torque them|torque it');
+const PRESSURE = at('pressure|relief|regulator|psi|compressor|gauge|relief valve|unloader');
+const HEAT = at(
+  'oven|kiln|preheat|preheated|temper|tempered|tempering|temperature|temp|thermostat|bake|baked|heat gun|quench oil|annealed?',
+);
+/** Somebody changes what is set: "down to sixty". */
+const TURNED =
+  /\b(?:(?:down|up|back|drop(?:ped|ping)?(?: it| that| her)?|bump(?:ed)?(?: it| that)?|turn(?:ed)?(?: it| that| her)?|knock(?:ed)?(?: it| that)?|crank(?:ed)?(?: it| that)?|wound(?: it)?|backed(?: it)?)(?: back| up| down| off)? (?:to|at)|(?:try|tried|call it|make it|went with|going with|go with)) (?:about |around |maybe |a |like |more like )?$/;
+const MADE = String.raw`cut|cutting|trim|trimmed|sawn|sawed|ripped|ripping|plane|planed|turn|turned|turning|bore|bored|boring|mill|milled|milling|drill|drilled|drilling|reamed?|machined?|faced?|ground|filed|sanded|finished?|chopped|docked|shortened|stretched|rolled|bent|made|making|opened|opened up|brought|taken|take|took|spaced|skimmed|scribed|marked|mark|measured?|measures|measuring|reads?|reading|comes?|came|ends?|ended|finishes|works out|laid out|set out|cropped|hacked|sheared|squared|pitched|folded|routed|notched|dressed|thicknessed|jointed|resawn|drawn|forged|upset|poured|screeded|dug|stuck out|hangs|sits|sticking out|punched|knocked out|cored|holes?|slots?|bolt circle|pcd|centers|centres`;
+const SIZED = new RegExp(
+  `\\b(?:${MADE})(?: (?:it|them|that|those|these|this|everything|all|both|one|in|out|up|down|back|off|over|the \\w+|my \\w+)){0,3} (?:at|to|down to|out to|up to|in at|out at|up at|be|as|about|from|on)(?: (?:about|around|exactly|like|just|a|roughly|nearly|over|under|more like))* $`,
+);
+const READ =
+  /\b(?:measures?|measured|measuring|reads?|reading|come out|comes out|works out|should be|supposed to be|meant to be|needs to be|wants to be|has to be|ought to be)(?: (?:at|about|exactly|like|just|more like|closer to))* $/;
+const PLANNED =
+  /\b(?:drawing|drawings|plan|plans|print|prints|sheet|spec|list|book|sketch|cad|model|instructions?)(?:'s)? (?:(?:says?|said|calls? for|shows?|wants?|wanted|asks? for|asked for|has|had|got|gives?|reads|called for|it at|them at|it as|it|them|only|clearly) )+(?:about |a |at |as )*$/;
+const DIAMETER =
+  /\b(?:wall|bore|diameter|thickness|width|height|depth|length|radius|pitch|spacing|offset|gap|od|id|throat|leg|overhang|reveal|kerf|centers|centres)(?:'s| is| was| of| at| should be| comes out at| came out at)(?: (?:about|a|at|only|just))* $/;
+const DEGREES = new Set([15, 22.5, 30, 45, 60]);
+const ANGLED =
+  /\b(?:cut|cuts|miter|mitre|mitered|mitred|bevel|beveled|bevelled|chamfer|chamfered|angle|angled|angles|fold|folded|bend|bent|tilt|tilted|saw|blade|lean|leaning|slope|taper|corners?|ends?|edges?|brace|countersink|ground)\b/;
+/** Lumber by its nominal size in inches: ASTM/ALSC PS 20 sections that yards keep. */
+const NOMINAL = new Set(
+  '1x2 1x3 1x4 1x6 1x8 1x10 1x12 2x2 2x3 2x4 2x6 2x8 2x10 2x12 4x4 4x6 6x6 3x2 4x2 6x2 8x2 6x1 4x1 3x3 4x3 6x4 8x4 8x8 2x1 3x1 5x4 5x5 4x8 3x4 3x6'.split(
+    ' ',
+  ),
+);
+const COUNTED_TURNS =
+  /^(?:turn|turns|of the (?:way|time|people|batch)|way|way through|full|the|of my|of you|of us|of them|of it|an hour|a mile|a minute|a second|past|price|day|mile|dozen|million|decent|done|finished|moon|pipe|cup|asleep|dead|expect\w*|thought|hoping|a day|a dozen|a chance)\b/;
+
+/** A number without a unit as a finding, where what stands beside it says what it is. */
+export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worked: Worked): Claim | null {
+  const [first] = measure.terms;
+  if (first === undefined) return null;
+  const b = `${before(speech, measure.from, 10)} `;
+  const a = after(speech, measure.to, 8);
+  const value = first.value.valueOf();
+  const free = FREE_BEHIND.test(a);
+  const claim = (rule: string, unit: string, more: Partial<Claim> = {}): Claim => ({
+    from: measure.from,
+    to: measure.to,
+    kind: 'size',
+    values: valuesOf(speech, measure, unit),
+    dimension: 'length',
+    rule,
+    sure: 0.7,
+    ...more,
+  });
+  const set = (what: SettingName, unit: string, dimension: Claim['dimension']): Claim =>
+    claim(`bare ${what}`, unit, { kind: 'setting', what, dimension });
+
+  if (measure.joined === 'by') return bySection(speech, measure, b, a, shop, claim);
+  const wire = /^(?:(?:solid|mig|flux|core|cored|welding) )*(?:wire|flux core)\b/.test(a)
+    ? wireSize(first.value, speech.texts[first.from] ?? '')
+    : null;
+  if (wire !== null) return { ...set('wire', wire.unit, 'length'), values: [wire] };
+  if (first.form === 'fraction' || first.form === 'mixed') return inchFraction(measure, b, a, shop, claim);
+  const split = fractionWritten(speech.texts[first.from] ?? '');
+  if (
+    split !== null &&
+    split.d >= 16n &&
+    (shop.units === 'in' || WAY_BEHIND.test(a)) &&
+    (free || WAY_BEHIND.test(a) || STOCK_BEHIND.test(a))
+  )
+    return { ...claim('written fraction', 'in'), values: [{ value: split, unit: 'in' }] };
+  if (isForty(measure, b, a, speech)) return claim('bare angle', 'deg', { dimension: 'angle' });
+  if (!free && !WAY_BEHIND.test(a)) return null;
+  if (FEED.test(b) && value < 5) return set('feed', 'mm/rev', 'feed');
+  if (SPEED.test(b) && value >= 50) return set('speed', 'rpm', 'turning');
+  if (TORQUE.test(b)) return set('torque', worked.torque ?? (shop.units === 'in' ? 'ft-lb' : 'Nm'), 'torque');
+  if (CURRENT.test(b) && value >= 20 && value <= 400 && !/\bmachined?\b.*\bto $/.test(b))
+    return set('current', 'A', 'current');
+  if (VOLTS.test(b) && value < 60) return set('voltage', 'V', 'voltage');
+  if (PRESSURE.test(b) && value >= 2)
+    return set('pressure', worked.pressure ?? (shop.units === 'in' ? 'psi' : 'bar'), 'pressure');
+  const hot =
+    /\b(?:harden\w*|quench\w*|temper\w*|anneal\w*|critical|forging|orange|cherry|normali[sz]\w*)\b/.test(
+      `${b}${firstWords(a, 5)}`,
+    ) && /\b(?:to|at|around|about) $/.test(b);
+  if ((HEAT.test(b) && value >= 60) || (hot && value >= 150))
+    return set('temperature', shop.units === 'in' ? 'F' : 'C', 'heat');
+  const last = worked.claim;
+  if (last !== null && measure.from - last.to < NEAR && TURNED.test(b)) return followed(last, claim);
+  if (
+    shop.units === 'mm' &&
+    value >= 3 &&
+    SINGLE_STOCK.test(a) &&
+    /\b(?:a|the|solid|some|of|is|it's|in|from|off|old|this|that|that's|just|by) $/.test(b)
+  )
+    return claim('stock by its size', 'mm');
+  return isSize(b, a, measure) ? claim('bare size', unitNear(measure, shop, worked, PLANNED.test(b))) : null;
+}
+
+/** "Down to sixty": of the kind and the unit of what was told before. */
+function followed(
+  last: Claim,
+  claim: (rule: string, unit: string, more?: Partial<Claim>) => Claim,
+): Claim | null {
+  const unit = last.values[0]?.unit;
+  if (unit === undefined || unit === 'thread' || last.kind === 'rating' || last.text !== undefined)
+    return null;
+  const { kind, dimension } = last;
+  return claim('same unit as before', unit, {
+    kind,
+    dimension,
+    ...(last.what === undefined ? {} : { what: last.what }),
+  });
+}
+
+/** Bar, plate and section that is called by one number. */
+const SINGLE_STOCK =
+  /^(?:round|square|plate|bar|flat|box|angle|channel|tube|rod|ply|pipe|sheet|shs|rhs|hex|solid)(?= |$)/;
+/** How near, in words, a length stands whose unit a bare one shares. */
+const SHARED = 25;
+
+/** The unit that a bare length is in: that of a length close before, else the shop's. Thou are told as thou, but for a plan's figure. */
+function unitNear(measure: Measure, shop: Shop, worked: Worked, planned: boolean): string {
+  const last = worked.claim;
+  const unit = last?.values[0]?.unit;
+  if (last === null || unit === undefined || last.dimension !== 'length' || measure.from - last.to > SHARED)
+    return shop.units;
+  return unit === 'thread' || (unit === 'thou' && !planned) ? shop.units : unit;
+}
+
+function isSize(b: string, a: string, measure: Measure): boolean {
+  const [first] = measure.terms;
+  if (first === undefined) return false;
+  if (TOOL_BEHIND.test(a)) return false;
+  if (PLANNED.test(b) || READ.test(b) || DIAMETER.test(b)) return true;
+  // A year, or a count of something.
+  if (first.form === 'pair' && /\b(?:in|since|from|of|year) $/.test(b)) return false;
+  if (SIZED.test(b)) return true;
+  return (
+    first.value.compare(3) > 0 &&
+    WAY_BEHIND.test(a) &&
+    /^(?:long|wide|tall|high|deep|thick|across|apart|diameter|dia|square|centers|centres|on cent|wall|bore|overall|in diameter|radius|outside diameter|inside diameter)\b/.test(
+      a,
+    )
+  );
+}
+
+function bySection(
+  speech: Speech,
+  measure: Measure,
+  b: string,
+  a: string,
+  shop: Shop,
+  claim: (rule: string, unit: string, more?: Partial<Claim>) => Claim,
+): Claim | null {
+  const values = measure.terms.map(({ value }) => value.valueOf());
+  const key = values.join('x');
+  if (
+    /^(?:1x1|24x7|9x5)$/.test(key) ||
+    TOOL_BEHIND.test(a) ||
+    /\b(?:one by one|two by two)\b/.test(speech.texts.slice(measure.from, measure.to).join(' '))
+  )
+    return null;
+  if (NOMINAL.has(key) && !/\b(?:mil|mm)\b/.test(b + a)) return claim('nominal timber', 'in', { sure: 0.85 });
+  if (measure.terms.some(({ form }) => form === 'fraction' || form === 'mixed'))
+    return claim('section in inches', 'in');
+  // Nothing of a shop that thinks in inches is forty inches thick.
+  const metric =
+    shop.units === 'mm' ||
+    (values.filter((value) => value >= 20).length === values.length && values.length > 2);
+  return claim('section', metric ? 'mm' : 'in', { sure: 0.8 });
+}
+
+function inchFraction(
+  measure: Measure,
+  b: string,
+  a: string,
+  shop: Shop,
+  claim: (rule: string, unit: string, more?: Partial<Claim>) => Claim,
+): Claim | null {
+  const [first] = measure.terms;
+  if (first === undefined || TOOL_BEHIND.test(a) || COUNTED_TURNS.test(a)) return null;
+  const divisor = Number(first.value.d);
+  const fine = divisor >= 8 && (divisor & (divisor - 1)) === 0;
+  const stock = STOCK_BEHIND.test(a) || WAY_BEHIND.test(a);
+  const made = SIZED.test(b) || READ.test(b) || PLANNED.test(b) || DIAMETER.test(b) || TURNED.test(b);
+  if (divisor > 64 || (divisor & (divisor - 1)) !== 0) return null;
+  if (fine) return claim('fraction', 'in', { sure: 0.85 });
+  if (/^(?:and|of|on the|to go|past|so|i|on|or)\b/.test(a) && !made) return null;
+  if (first.form === 'mixed') {
+    if (!(stock || made)) return null;
+    return claim('mixed number', shop.units === 'in' || stock ? 'in' : 'mm');
+  }
+  return stock || (made && FREE_BEHIND.test(a)) ? claim('fraction', 'in', { sure: 0.8 }) : null;
+}
+
+/** "A forty five on the end", "at 45". */
+function isForty(measure: Measure, b: string, a: string, speech: Speech): boolean {
+  const [first] = measure.terms;
+  if (first === undefined || measure.terms.length > 1 || !DEGREES.has(first.value.valueOf())) return false;
+  if (!FREE_BEHIND.test(a) && !/^(?:angle|miter|mitre|cut|bevel|chamfer|corner|on|each|both|either)/.test(a))
+    return false;
+  const forty = first.value.equals(45);
+  if (forty && /\b(?:a|the|at a|those|two|some|with) $/.test(b) && !/\b(?:drill|gauge|calibre) $/.test(b))
+    return true;
+  void speech;
+  return (
+    /\b(?:at|to|at a|to a|at about|up to|over to) $/.test(b) &&
+    ANGLED.test(lastWords(b, 8)) &&
+    (forty || /\b(?:miter|mitre|bevel|tilt|angle|fold|bend|bent|folded|lean|slope|chamfer)/.test(b))
+  );
+}
+
+/** Sizes of solid wire as it is sold: millimetres, and thousandths of an inch that are spelled out. */
+function wireSize(value: Fraction, word: string): { value: Fraction; unit: string } | null {
+  const number = value.valueOf();
+  const thousandths = [23, 24, 25, 30, 35, 45, 52, 62];
+  if (thousandths.includes(number) && (/^(?:0|oh?$|zero)/.test(word) || word.startsWith('0')))
+    return { value: value.div(1000), unit: 'in' };
+  if (thousandths.includes(Math.round(number * 1000))) return { value, unit: 'in' };
+  return number >= 0.5 && number <= 2.4 ? { value, unit: 'mm' } : null;
+}
+
+/** The grits that begin at a word, where sanding is spoken of: eighty, then one twenty. */
+export function isGrit(speech: Speech, measure: Measure, chained: boolean): boolean {
+  const [first] = measure.terms;
+  if (
+    first === undefined ||
+    !measure.terms.every(
+      ({ value, unit }) => GRITS.has(value.valueOf()) && (unit === null || unit === 'grit'),
+    )
+  )
+    return false;
+  const b = `${before(speech, measure.from, 18)} `;
+  const a = after(speech, measure.to, 8);
+  if (measure.dimension === 'grit' || PAPER_BEHIND.test(a))
+    return measure.dimension === 'grit' || SANDED.test(`${b}${firstWords(a, 3)}`);
+  if (!FREE_BEHIND.test(a) && !/^(?:then|up|all|being)\b/.test(a)) return false;
+  if (chained)
+    return (
+      /\b(?:then|to|and|and then|at|with|by|than|finish|after|before|through|or|up|next|from) (?:a |the |with |at |up to |then )*$/.test(
+        b,
+      ) ||
+      /\b\d+ $/.test(b) ||
+      GRITS.has(Number(lastWords(b, 1)))
+    );
+  return (
+    SANDED.test(b) &&
+    (/\b(?:so|at|to|with|then|from|with a|of|start|just|about|in|it|by|up|through|sanding|grit|on) $/.test(
+      b,
+    ) ||
+      /^(?:to start|first|then|and then|to begin|up to)\b/.test(a)) &&
+    !HEATED.test(lastWords(b, 2))
+  );
+}
