@@ -13,7 +13,7 @@ import { placeEdit } from '../../src/features/notes/server/place-edit.ts';
 import { accountMails } from '../../src/process-mails.ts';
 import { type WorkshopContext } from '../../src/server/context.ts';
 import { readServiceSettings } from '../../src/server/env.ts';
-import { openServices } from '../../src/server/services.ts';
+import { openServices, type Services } from '../../src/server/services.ts';
 import { aShownBuild, BUILD, noteAt, RATE } from '../support/companion.ts';
 import { aWorkshop } from '../support/people.ts';
 import { aClip, editOf, takeEdit } from '../support/placed.ts';
@@ -65,17 +65,15 @@ async function makeNotes({ db, workshop }: WorkshopContext, buildId: string, cou
   for (let from = 0; from < count; from += AT_ONCE) {
     const some = rows.slice(from, from + AT_ONCE);
     await db.insert(anchors).values(some);
-    await db
-      .insert(notes)
-      .values(
-        some.map(({ id }) => ({
-          ...tenant,
-          id: newId(),
-          anchorId: id,
-          kind: 'step' as const,
-          text: 'Face it.',
-        })),
-      );
+    await db.insert(notes).values(
+      some.map(({ id }) => ({
+        ...tenant,
+        id: newId(),
+        anchorId: id,
+        kind: 'step' as const,
+        text: 'Face it.',
+      })),
+    );
   }
 }
 
@@ -86,6 +84,7 @@ async function timed(work: () => Promise<unknown>): Promise<number> {
 }
 
 async function measure(
+  services: Services,
   owner: WorkshopContext,
   buildId: string,
   [segments, count]: (typeof SIZES)[number],
@@ -96,7 +95,7 @@ async function measure(
   await makeNotes(owner, buildId, count, ids);
   const list = aList(segments);
   const edit = await takeEdit(owner, episode, editOf(...list), clipIds);
-  const place = await timed(() => owner.db.transaction((transaction) => placeEdit(transaction, edit)));
+  const place = await timed(() => services.db.transaction((transaction) => placeEdit(transaction, edit)));
   const next = { edit: editOf(...list.slice(segments / 20)), clipIds: new Map(Object.entries(clipIds)) };
   const report = await timed(() => reportEdit(owner.db, { id: episode, buildId }, next));
   const take = await timed(() => takeEdit(owner, episode, next.edit, clipIds));
@@ -143,9 +142,9 @@ export const bench: Bench = {
         for (let clip = 0; clip < CLIPS; clip += 1)
           ids.push(await aClip(owner, buildId, `C${String(clip)}.MP4`, { frames: CLIP_FRAMES }));
         // The first round warms up.
-        await measure(owner, buildId, SIZES[0], ids);
-        const measured = [];
-        for (const size of SIZES) measured.push(await measure(owner, buildId, size, ids));
+        await measure(services, owner, buildId, SIZES[0], ids);
+        const measured: Awaited<ReturnType<typeof measure>>[] = [];
+        for (const size of SIZES) measured.push(await measure(services, owner, buildId, size, ids));
         const rows = measured.map(({ segments, notes: count, ...times }) => [
           ...[segments, count],
           ...Object.values(times).map((time) => time.toFixed(0)),

@@ -38,7 +38,7 @@ export function LyingRule({
           >
             <path d="M0 2.5H5" className="stroke-steel-mark" strokeWidth="0.75" />
           </pattern>
-          {hatchings.map(({ from, to }) => (
+          {hatchings.map(({ from, to, label }) => (
             <rect
               key={from}
               x={percent(from)}
@@ -47,7 +47,9 @@ export function LyingRule({
               height="12"
               fill={`url(#${hatch})`}
               className="stroke-steel-hatch"
-            />
+            >
+              {label !== undefined && <title>{`Camera off: ${label}`}</title>}
+            </rect>
           ))}
           <RuleScale length={length} height={FACE} />
           <svg x="100%" overflow="visible">

@@ -6,9 +6,9 @@ import { type RuleData } from './rule-data.ts';
 export function RuleList({ balloons = [], pops = [], chapters = [], hatchings = [] }: RuleData) {
   const lines = [
     ...chapters.map(({ at, label }) => ({ at, text: `chapter: ${label}` })),
-    ...hatchings.map(({ from, to, label }) => ({
-      at: from,
-      text: `camera off until ${formatClock(to)}${label === undefined ? '' : `: ${label}`}`,
+    ...hatchings.map(({ from, to, at, label }) => ({
+      at: at ?? from,
+      text: `camera off${at === undefined ? ` until ${formatClock(to)}` : ' here'}${label === undefined ? '' : `: ${label}`}`,
     })),
     ...balloons.map(({ at, label, name }) => ({
       at,

@@ -28,6 +28,8 @@ export type RuleChapter = { readonly at: number; readonly label: string; readonl
 export type RuleHatching = {
   readonly from: number;
   readonly to: number;
+  /** The cut that it stands at, where it is not a stretch of the episode itself. */
+  readonly at?: number | undefined;
   readonly label?: string | undefined;
 };
 

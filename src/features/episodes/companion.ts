@@ -69,6 +69,15 @@ export interface SeriesItem {
   readonly title: string;
 }
 
+/** A cut at which work is missing that was done with the camera off. */
+export interface OffCameraCut {
+  /** Seconds from the start of the video. */
+  readonly at: number;
+  readonly minutes: number;
+  /** What was written of it; for the team. */
+  readonly texts: readonly string[];
+}
+
 /** Everything that the page of a published episode shows. */
 export interface Companion {
   readonly build: { readonly id: string; readonly slug: string; readonly name: string };
@@ -88,6 +97,7 @@ export interface Companion {
   /** Those that come into view or are named, in the order in which they first do. */
   readonly parts: readonly CompanionPart[];
   readonly cautions: readonly CompanionCaution[];
+  readonly offCamera: readonly OffCameraCut[];
   readonly series: readonly SeriesItem[];
   /** How many episodes the series has or plans. */
   readonly of: number;

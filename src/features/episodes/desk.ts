@@ -19,5 +19,6 @@ export const DeskAnswer = z.object({
   chapters: z.array(ChapterAnswer),
   appearances: z.array(AppearanceAnswer),
   checks: z.array(CheckAnswer),
+  offCamera: z.array(z.object({ at: z.number(), minutes: z.number(), texts: z.array(z.string()) })),
 });
 export type DeskLists = z.output<typeof DeskAnswer>;

@@ -2,7 +2,7 @@ import { eq } from 'drizzle-orm';
 import { beforeEach, describe, expect, test } from 'vitest';
 import { newId } from '../../../src/db/columns.ts';
 import { editions } from '../../../src/db/schema/episodes.ts';
-import { clips } from '../../../src/db/schema/footage.ts';
+import { clips, workStretches } from '../../../src/db/schema/footage.ts';
 import { addChapter } from '../../../src/features/episodes/server/add-chapter.ts';
 import { getCompanion } from '../../../src/features/episodes/server/get-companion.ts';
 import { getDesk } from '../../../src/features/episodes/server/get-desk.ts';
@@ -316,6 +316,33 @@ describe('the report before an edit is taken', () => {
     await takeEdit(shed.owner, episode, SECOND, NAMES());
     expect(await report(FIRST)).toMatchObject({ lost: [], back: [{ ...cut, dropped: null, at: 9.92 }] });
     expect(await atDesk()).toHaveLength(4);
+  });
+});
+
+describe('work with the camera off', () => {
+  test('is told at the cut where it is missing, to viewers without what was written of it', async () => {
+    const T = new Date('2026-11-12T14:00:00Z');
+    const at = (minutes: number) => new Date(T.getTime() + minutes * 60_000);
+    const { db, workshop } = shed.owner;
+    await db.update(clips).set({ startSetAt: T }).where(eq(clips.id, A));
+    await db
+      .update(clips)
+      .set({ startSetAt: at(90) })
+      .where(eq(clips.id, B));
+    const work = { workshopId: workshop.id, buildId, sign: 'timer' as const };
+    await db.insert(workStretches).values({ ...work, fromAt: at(0), untilAt: at(80), text: 'Welded it.' });
+    const video = { address: 'https://video.example/1', length: '1:00' };
+    const shownEpisode = await aShownEpisode(shed.owner, parts, video);
+    const { episode: row } = await getDesk(shed.owner, { build: BUILD, episode: shownEpisode });
+    const edit = await takeEdit(shed.owner, shownEpisode, FIRST, NAMES());
+    // A ran for 400 s, of which the work's first seven minutes are in the footage, used or not.
+    const cut = { at: 10, minutes: 73 };
+    const desk = await lookAtDesk(shed.owner, { build: BUILD, episode: shownEpisode });
+    expect(desk.offCamera).toEqual([{ ...cut, texts: ['Welded it.'] }]);
+    const page = () => getCompanion(shed.viewer, { build: BUILD, number: row.number });
+    expect((await page()).offCamera).toEqual([]);
+    await db.update(editions).set({ editId: edit }).where(eq(editions.episodeId, shownEpisode));
+    expect((await page()).offCamera).toEqual([{ ...cut, texts: [] }]);
   });
 });
 

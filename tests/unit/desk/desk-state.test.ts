@@ -48,7 +48,7 @@ function aNote(given: Partial<Note> = {}): Note {
   };
 }
 
-const lists = (...notes: Note[]) => ({ notes, chapters: [], appearances: [], checks: [] });
+const lists = (...notes: Note[]) => ({ notes, chapters: [], appearances: [], checks: [], offCamera: [] });
 const texts = (state: Parameters<typeof shown>[0]) => shown(state, 'note').map(({ form }) => form.text);
 const type = (state: Parameters<typeof shown>[0], text: string) =>
   editRow(state, ID, { text }, 'Change a note', `text ${ID}`);

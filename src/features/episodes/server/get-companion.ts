@@ -1,10 +1,12 @@
 import { read } from '../../../server/verb.ts';
 import { listShownAppearances } from '../../notes/server/list-appearances.ts';
 import { listShownNotes } from '../../notes/server/list-shown-notes.ts';
+import { findShownView } from '../../notes/server/episode-view.ts';
 import { type Companion } from '../companion.ts';
 import { getPublicEpisode } from './get-public-episode.ts';
 import { listPublicEpisodes } from './list-public-episodes.ts';
 import { describeVideo, loadShownParts } from './load-companion-pieces.ts';
+import { loadOffCamera } from './load-off-camera.ts';
 import { presentCompanion } from './present-companion.ts';
 
 interface Ref {
@@ -43,6 +45,9 @@ export const getCompanion = read({ may: 'published.read' }, async (context, ref:
       chapters,
       parts: await loadShownParts(db, workshop.id, [...partIds]),
     }),
+    offCamera: (await loadOffCamera(db, build.id, await findShownView(db, episode.id), context.now)).map(
+      (cut) => ({ ...cut, texts: [] }),
+    ),
     series: published.map(({ number, title }) => ({ number, title })).sort((a, b) => a.number - b.number),
     of,
   };

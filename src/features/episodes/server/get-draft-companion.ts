@@ -3,11 +3,13 @@ import { read } from '../../../server/verb.ts';
 import { isInEdit } from '../../notes/note.ts';
 import { listAppearances } from '../../notes/server/list-appearances.ts';
 import { listNotes } from '../../notes/server/list-notes.ts';
+import { findDraftView } from '../../notes/server/episode-view.ts';
 import { type Companion } from '../companion.ts';
 import { getDesk } from './get-desk.ts';
 import { listPublicEpisodes } from './list-public-episodes.ts';
 import { describeVideo, loadShownParts } from './load-companion-pieces.ts';
 import { type EpisodeRef } from './load-episode.ts';
+import { loadOffCamera } from './load-off-camera.ts';
 import { presentCompanion } from './present-companion.ts';
 
 /**
@@ -42,6 +44,7 @@ export const getDraftCompanion = read(
         chapters: chapters.filter(isInEdit),
         parts: await loadShownParts(db, workshop.id, [...partIds]),
       }),
+      offCamera: await loadOffCamera(db, build.id, await findDraftView(db, episode.id), context.now),
       series: series
         .map((one) => ({ number: one.number, title: one.title }))
         .sort((a, b) => a.number - b.number),

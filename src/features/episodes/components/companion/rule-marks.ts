@@ -1,6 +1,7 @@
 import { type RuleBalloon, type RuleData } from '../../../../components/rule/rule-data.ts';
 import { frameToMilliseconds } from '../../../../domain/time/frames.ts';
 import { type Companion } from '../../companion.ts';
+import { hatchingsOf } from '../say-off-camera.ts';
 import { timeAddress } from './video-times.ts';
 
 /** More balloons than this do not stand above a rule in two rows: then each part stands there once. */
@@ -34,6 +35,7 @@ export function ruleMarks(companion: Companion): RuleData {
       label: text.length <= HINT ? text : `${text.slice(0, HINT)}…`,
       href: timeAddress(video, at),
     })),
+    hatchings: hatchingsOf(companion.offCamera, ruleLength(companion)),
     chapters: chapters.map(({ at, title }) => ({ at, label: title, href: timeAddress(video, at) })),
   };
 }

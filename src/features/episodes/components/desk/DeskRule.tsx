@@ -3,6 +3,7 @@ import { SteelRule } from '../../../../components/SteelRule.tsx';
 import { appearancesFromNotes } from '../../../../domain/appearances/appearances-from-notes.ts';
 import { partsAt } from '../../../../domain/appearances/parts-at.ts';
 import { frameToSeconds } from '../../../../domain/time/frames.ts';
+import { hatchingsOf } from '../say-off-camera.ts';
 import { type DeskData } from './desk-data.ts';
 import { shown } from './desk-state.ts';
 import { formatMoment, placeAt } from './moment.ts';
@@ -69,6 +70,7 @@ export function DeskRule() {
           label: text.slice(0, 80),
           href: `#note-${id}`,
         }))}
+        hatchings={hatchingsOf(data.offCamera, seconds(length))}
         chapters={chapters
           .filter(({ frame }) => frame < length)
           .map(({ title, frame }) => ({ at: seconds(frame), label: title }))}
