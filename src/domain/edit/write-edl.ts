@@ -1,6 +1,6 @@
 import type Fraction from 'fraction.js';
 import { type Rate } from '../time/rate.ts';
-import { formatTimecode } from '../time/timecode.ts';
+import { formatTimecode, hasTimecode } from '../time/timecode.ts';
 import { type Edit, inRecordOrder, type Marker, rateOf, type Segment } from './edit.ts';
 
 /** Where the record of a list begins: at one hour, so that a lead-in has room before it. Common practice. */
@@ -43,9 +43,23 @@ function channelOf(track: string): string {
 }
 
 /**
+ * Why an edit cannot be written as a list: it counts in something that has no labels, or shows frames before the first.
+ * @returns a sentence; null where it can be written
+ */
+export function whyNoEdl(edit: Edit): string | null {
+  const segments = [...edit.picture, ...edit.sound];
+  if (![edit.rate, ...segments.map(({ clipRate }) => clipRate)].every(hasTimecode))
+    return 'An edit list writes timecode, and not every rate of this edit has any. Take the timeline.';
+  if (segments.some(({ source }) => source.in.compare(0) < 0))
+    return 'The edit shows frames before a clip’s label 00:00:00:00, which a list cannot write. Take the timeline.';
+  return null;
+}
+
+/**
  * An edit as an edit list of the CMX 3600 kind: cuts and speeds, with marks below the event that holds them. Frames are
  * whole there; what is not is rounded to the nearest. A clip's labels are at its own rate.
  * Source: the layout of SMPTE 258M lists as the samples of OpenTimelineIO's CMX 3600 adapter show it.
+ * @throws RangeError for an edit that `whyNoEdl` has a sentence for
  * @param drop whether the record's labels drop; only at the rates that have such labels
  */
 export function writeEdl(edit: Edit, drop = false): string {

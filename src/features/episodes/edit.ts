@@ -10,6 +10,9 @@ import { episodeParams } from './episode.ts';
 /** What the text of an edit may have. */
 export const EDIT_TEXT_BYTES = 6 * 1024 * 1024;
 
+/** Said where a rate is asked and something else comes. */
+export const NO_RATE = 'Choose a rate, such as 25 or 30000/1001.';
+
 export const editParams = episodeParams.extend({ edit: z.uuid('That is not an id of ours.') });
 
 /** What a name of an edit may stand for besides a clip of the footage. */
@@ -38,10 +41,10 @@ export const ReadEditInput = z
     /** A file as it was uploaded. */
     file: z.unknown().optional(),
     text: z.string('Paste the edit as text.').default(''),
-    packed: z.string().default(''),
-    name: z.string().trim().max(200).default(''),
+    packed: z.string('Choose the file again.').default(''),
+    name: z.string('Name the edit.').trim().max(200, 'Keep the name to 200 characters.').default(''),
     /** Frames a second; empty for what the timeline or the video says. */
-    rate: z.string('Choose the rate.').trim().max(20).default(''),
+    rate: z.string(NO_RATE).trim().max(20, NO_RATE).default(''),
     /** The number of the newest edit when this one was looked at; 0 before the first. */
     seen: z.coerce.number().int().min(0).optional(),
   })
@@ -134,3 +137,19 @@ export const EditViewAnswer = z.object({
 });
 
 export const TakenEdit = z.object({ id: z.uuid(), number: z.number(), segments });
+
+/** The forms that an edit and its marks leave in. */
+const EDIT_FILE_FORMS = ['edl', 'otio', 'csv'] as const;
+export type EditFileForm = (typeof EDIT_FILE_FORMS)[number];
+
+const as = z.enum(EDIT_FILE_FORMS, 'Choose edl, otio or csv.');
+export const ExportEditInput = z.object({
+  as,
+  /** The marks that it came with, or the notes and chapters. */
+  marks: z.enum(['own', 'notes'], 'Choose own or notes.').default('own'),
+});
+export const ExportClipMarksInput = z.object({
+  as,
+  /** Of the timeline; of the first clip when left out. */
+  rate: z.string(NO_RATE).trim().max(20, NO_RATE).default(''),
+});

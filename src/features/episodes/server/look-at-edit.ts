@@ -7,7 +7,7 @@ import { suggestRates } from '../../../domain/edit/suggest-rates.ts';
 import { MILLISECOND_RATE, parseRate, type Rate, sameRate } from '../../../domain/time/rate.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
 import { Invalid } from '../../../server/errors.ts';
-import { type EditView, type ReadEdit } from '../edit.ts';
+import { type EditView, NO_RATE, type ReadEdit } from '../edit.ts';
 import { type Video } from '../episode.ts';
 import { type BuildClip, loadBuildClips } from './load-clips.ts';
 import { findDraftEdit, type StoredEdit } from '../../notes/server/load-edits.ts';
@@ -38,7 +38,7 @@ function rateOfVideo(video: Video | null): Rate | null {
 function chooseRate(typed: string, { text, source }: EditText, video: Rate | null): ChosenRate {
   if (typed !== '') {
     const read = parseRate(typed);
-    if (!read.ok) throw new Invalid({ rate: read.error });
+    if (!read.ok) throw new Invalid({ rate: NO_RATE });
     const apart = video !== null && !sameRate(video, read.value);
     const reason = apart
       ? `The video runs at ${sayRate(video)} frames a second, the edit is read at ${sayRate(read.value)}.`

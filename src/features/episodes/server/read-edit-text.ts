@@ -8,7 +8,7 @@ import { parseRate, type Rate } from '../../../domain/time/rate.ts';
 import { Invalid } from '../../../server/errors.ts';
 import { readEditApart } from '../../../server/edits/read-edit-apart.ts';
 import { UploadedFile } from '../../../server/http/uploaded-file.ts';
-import { EDIT_TEXT_BYTES, type ReadEdit } from '../edit.ts';
+import { EDIT_TEXT_BYTES, NO_RATE, type ReadEdit } from '../edit.ts';
 
 /** The text of an edit as it came, with the form it has. */
 export interface EditText {
@@ -71,7 +71,7 @@ function clipRatesOf(edit: Edit, given: Readonly<Record<string, string>>): Map<s
     const text = given[String(index)]?.trim() ?? '';
     if (text === '') continue;
     const read = parseRate(text);
-    if (!read.ok) throw new Invalid({ [`clip-rate-${String(index)}`]: read.error });
+    if (!read.ok) throw new Invalid({ [`clip-rate-${String(index)}`]: NO_RATE });
     rates.set(name, read.value);
   }
   return rates;
