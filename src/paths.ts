@@ -111,6 +111,8 @@ export const paths = {
   /** @param number of the version to show; the newest when left out */
   edit: (workshop: string, build: string, episode: string, number?: number) =>
     `${onBench(workshop, build, `episodes/${part(episode)}/edit`)}${number === undefined ? '' : `?version=${String(number)}`}`,
+  leaving: (workshop: string, build: string, episode: string) =>
+    onBench(workshop, build, `episodes/${part(episode)}/text`),
   publish: (workshop: string, build: string, episode: string) =>
     onBench(workshop, build, `episodes/${part(episode)}/publish`),
   announcement: (workshop: string, build: string, episode: string) =>

@@ -256,6 +256,11 @@ export const PAGES: readonly PageState[] = [
     at: inBuild(({ published }) => `/episodes/${published}/edit`),
     then: lookAtEdit,
   },
+  {
+    route: 'bench/[workshop]/[build]/episodes/[episode]/text',
+    as: editor,
+    at: inBuild(({ published }) => `/episodes/${published}/text`),
+  },
   { route: 'bench/[workshop]/[build]/episodes/index', as: owner, at: inBuild(() => '/episodes') },
   {
     route: 'bench/[workshop]/[build]/episodes/out-already',
