@@ -21,6 +21,7 @@ import { builds } from './builds.ts';
 import { episodes } from './episodes.ts';
 import { clips } from './footage.ts';
 import { parts } from './parts.ts';
+import { worksheets } from './worksheets.ts';
 
 export const anchorClock = pgEnum('anchor_clock', ['shop', 'clip', 'episode']);
 export const anchorOf = pgEnum('anchor_of', ['picture', 'sound']);
@@ -166,6 +167,33 @@ export const noteParts = pgTable(
       foreignColumns: [parts.workshopId, parts.id],
     }).onDelete('restrict'),
     index('note_parts_part_index').on(table.partId),
+  ],
+);
+
+/** A result of a worksheet that a note carries, as it was when the note was given it. */
+export const noteResults = pgTable(
+  'note_results',
+  {
+    workshopId: uuid('workshop_id').notNull(),
+    noteId: uuid('note_id').notNull(),
+    worksheetId: uuid('worksheet_id').notNull(),
+    /** Which of its results, by what it is called. */
+    what: text('what').notNull(),
+    said: text('said').notNull(),
+  },
+  (table) => [
+    primaryKey({ name: 'note_results_pkey', columns: [table.noteId] }),
+    foreignKey({
+      name: 'note_results_note_fk',
+      columns: [table.workshopId, table.noteId],
+      foreignColumns: [notes.workshopId, notes.id],
+    }).onDelete('cascade'),
+    foreignKey({
+      name: 'note_results_worksheet_fk',
+      columns: [table.workshopId, table.worksheetId],
+      foreignColumns: [worksheets.workshopId, worksheets.id],
+    }).onDelete('cascade'),
+    index('note_results_worksheet_index').on(table.worksheetId),
   ],
 );
 

@@ -4,6 +4,7 @@ import { type NoteKind, type SizeStanding } from '../../domain/note-kinds.ts';
 import { type PartKind } from '../../domain/part-kinds.ts';
 import { type Rate } from '../../domain/time/rate.ts';
 import { type VideoAddress } from '../../domain/video-addresses/read-video-address.ts';
+import { type ShownResult } from '../notes/note-result.ts';
 
 /** A part that an episode shows. */
 export interface CompanionPart {
@@ -30,6 +31,8 @@ export interface CompanionNote {
   readonly to: number;
   /** Seconds from the start of the video. */
   readonly at: number;
+  /** What of a worksheet it carries. */
+  readonly result: ShownResult | null;
 }
 
 export interface CompanionChapter {

@@ -43,10 +43,16 @@ function present(notes: readonly Note[], seconds: number | null = 100) {
     byHand: [],
     chapters,
     parts,
+    results: new Map([['carrying', { what: 'Force out', said: '86 kN', worksheet: null }]]),
   });
 }
 
 describe('what a page shows of notes', () => {
+  it('comes with what of a worksheet a note carries', () => {
+    const { notes } = present([note('carrying', 40), note('plain', 50)]);
+    expect(notes.map(({ result }) => result?.said ?? null)).toEqual(['86 kN', null]);
+  });
+
   it('stands in frames and seconds of the shown video, whatever rate it was marked at', () => {
     const [only] = present([note('n', 40)]).notes;
     expect(only).toMatchObject({ from: 1000, to: 1500, at: 40 });

@@ -7,7 +7,7 @@ import {
   toGiven,
   toQuery,
   typedIn,
-} from '../../../src/features/worksheets/components/given.ts';
+} from '../../../src/features/worksheets/given.ts';
 
 const { inputs } = fitWorksheet;
 

@@ -2,6 +2,7 @@ import { read } from '../../../server/verb.ts';
 import { listShownAppearances } from '../../notes/server/list-appearances.ts';
 import { listShownNotes } from '../../notes/server/list-shown-notes.ts';
 import { findShownView } from '../../notes/server/episode-view.ts';
+import { loadShownResults } from '../../notes/server/load-shown-results.ts';
 import { type Companion } from '../companion.ts';
 import { getPublicEpisode } from './get-public-episode.ts';
 import { listPublicEpisodes } from './list-public-episodes.ts';
@@ -44,6 +45,10 @@ export const getCompanion = read({ may: 'published.read' }, async (context, ref:
       byHand,
       chapters,
       parts: await loadShownParts(db, workshop.id, [...partIds]),
+      results: await loadShownResults(
+        db,
+        notes.map(({ id: noteId }) => noteId),
+      ),
     }),
     offCamera: (await loadOffCamera(db, build.id, await findShownView(db, episode.id), context.now)).map(
       (cut) => ({ ...cut, texts: [] }),

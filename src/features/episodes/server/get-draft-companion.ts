@@ -4,6 +4,7 @@ import { isInEdit } from '../../notes/note.ts';
 import { listAppearances } from '../../notes/server/list-appearances.ts';
 import { listNotes } from '../../notes/server/list-notes.ts';
 import { findDraftView } from '../../notes/server/episode-view.ts';
+import { loadShownResults } from '../../notes/server/load-shown-results.ts';
 import { type Companion } from '../companion.ts';
 import { getDesk } from './get-desk.ts';
 import { listPublicEpisodes } from './list-public-episodes.ts';
@@ -43,6 +44,10 @@ export const getDraftCompanion = read(
         byHand,
         chapters: chapters.filter(isInEdit),
         parts: await loadShownParts(db, workshop.id, [...partIds]),
+        results: await loadShownResults(
+          db,
+          notes.map(({ id: noteId }) => noteId),
+        ),
       }),
       offCamera: await loadOffCamera(db, build.id, await findDraftView(db, episode.id), context.now),
       series: series

@@ -16,7 +16,7 @@ export interface ShownEdit extends StoredEdit {
 }
 
 /** The versions of an episode's edit, the newest first, without what is in them. */
-export async function listVersions(db: Database, episodeId: string): Promise<EditVersion[]> {
+async function listVersions(db: Database, episodeId: string): Promise<EditVersion[]> {
   const rows = await db
     .select({ edit: edits, takenBy: accounts.name })
     .from(edits)

@@ -7,6 +7,7 @@ import { effectiveEnd, sortNotes } from '../../../domain/notes/note-place.ts';
 import { frameToMilliseconds } from '../../../domain/time/frames.ts';
 import { type Rate } from '../../../domain/time/rate.ts';
 import { type Appearance as ByHand, type Note } from '../../notes/note.ts';
+import { type ShownResult } from '../../notes/note-result.ts';
 import { type Companion, type CompanionNote, type CompanionPart } from '../companion.ts';
 import { type Chapter, type Video } from '../episode.ts';
 
@@ -17,6 +18,8 @@ export interface CompanionSources {
   readonly chapters: readonly Chapter[];
   /** Of the whole build; a part that has been deleted since is shown nowhere. */
   readonly parts: readonly CompanionPart[];
+  /** By note, what of a worksheet it carries. */
+  readonly results: ReadonlyMap<string, ShownResult>;
 }
 
 type Placed = Pick<Companion, 'notes' | 'chapters' | 'appearances' | 'parts' | 'cautions'>;
@@ -25,7 +28,14 @@ type Placed = Pick<Companion, 'notes' | 'chapters' | 'appearances' | 'parts' | '
  * Puts everything that was marked at some rate in its place in the shown video. What begins after the video has
  * ended is left out: it belongs to an edit that viewers do not see.
  */
-export function presentCompanion({ video, notes, byHand, chapters, parts }: CompanionSources): Placed {
+export function presentCompanion({
+  video,
+  notes,
+  byHand,
+  chapters,
+  parts,
+  results,
+}: CompanionSources): Placed {
   const { rate } = video;
   const lengthFrames = video.seconds === null ? null : Math.round((video.seconds * rate.num) / rate.den);
   const isInside = ({ frame }: { readonly frame: number }) => lengthFrames === null || frame < lengthFrames;
@@ -50,7 +60,10 @@ export function presentCompanion({ video, notes, byHand, chapters, parts }: Comp
     lengthFrames,
   });
   return {
-    notes: placed.map((note) => presentNote(note, effectiveEnd(note, placed, rate, lengthFrames), rate)),
+    notes: placed.map((note) => ({
+      ...presentNote(note, effectiveEnd(note, placed, rate, lengthFrames), rate),
+      result: results.get(note.id) ?? null,
+    })),
     chapters: chapters
       .map(({ id, title, position }) => ({ id, title, from: convertPlace(position, rate).frame }))
       .filter(({ from }) => isInside({ frame: from }))
@@ -66,7 +79,11 @@ export function presentCompanion({ video, notes, byHand, chapters, parts }: Comp
   };
 }
 
-function presentNote(note: Note & { readonly frame: number }, to: number, rate: Rate): CompanionNote {
+function presentNote(
+  note: Note & { readonly frame: number },
+  to: number,
+  rate: Rate,
+): Omit<CompanionNote, 'result'> {
   const { id, kind, text, standing, topic, partIds, frame } = note;
   return {
     id,

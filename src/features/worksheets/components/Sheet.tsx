@@ -7,7 +7,7 @@ import {
   type Worked,
   type Worksheet,
 } from '../../../domain/worksheets/worksheet.ts';
-import { findErrors, findMissing, toGiven, toQuery, type Typed } from './given.ts';
+import { findErrors, findMissing, toGiven, toQuery, type Typed } from '../given.ts';
 import { SheetInputs } from './SheetInputs.tsx';
 import { SheetField } from './SheetField.tsx';
 import { SheetStanding, SheetWarnings, SheetWorking } from './SheetFindings.tsx';

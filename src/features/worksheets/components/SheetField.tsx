@@ -1,7 +1,7 @@
 import { FieldFrame, describeField, fieldId, INPUT_LOOK } from '../../../components/FieldFrame.tsx';
 import { Select } from '../../../components/Select.tsx';
 import { type Field } from '../../../domain/worksheets/worksheet.ts';
-import { INPUT_LENGTH, LINES_LENGTH } from './given.ts';
+import { INPUT_LENGTH, LINES_LENGTH } from '../given.ts';
 
 type SheetFieldProps = {
   readonly name: string;

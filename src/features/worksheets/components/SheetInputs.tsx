@@ -1,5 +1,5 @@
 import { type Field } from '../../../domain/worksheets/worksheet.ts';
-import { type Typed } from './given.ts';
+import { type Typed } from '../given.ts';
 
 type SheetInputsProps = {
   readonly inputs: Readonly<Record<string, Field<unknown>>>;

@@ -45,6 +45,7 @@ export function NoteGroups({
                 partNumbers={partNumbers}
                 href={timeAddress(video, note.at)}
                 partHref={(id) => paths.part(workshop, companion.build.slug, id)}
+                worksheetHref={(id) => paths.keptWorksheet(workshop, companion.build.slug, id)}
                 next={after}
                 first={group === 0 && row === 0 && chapter === null}
                 last={isLast && row === rows.length - 1}

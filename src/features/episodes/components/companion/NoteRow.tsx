@@ -15,6 +15,7 @@ type NoteRowProps = {
   readonly partNumbers: readonly string[];
   readonly href: string;
   readonly partHref: (id: string) => string;
+  readonly worksheetHref: (id: string) => string;
   /** The second at which the row after it begins. */
   readonly next: number;
   /** Whether the tape begins or ends with this row. */
@@ -23,7 +24,8 @@ type NoteRowProps = {
 };
 
 /** A note of the list: a small sheet beside the tape on narrow screens, a line of a table on wide ones. */
-export function NoteRow({ note, parts, partNumbers, href, partHref, next, first, last }: NoteRowProps) {
+export function NoteRow(props: NoteRowProps) {
+  const { note, parts, partNumbers, href, partHref, worksheetHref, next, first, last } = props;
   const caution = note.topic === null ? null : USUAL_CAUTIONS[note.topic];
   return (
     <li
@@ -60,6 +62,21 @@ export function NoteRow({ note, parts, partNumbers, href, partHref, next, first,
       <p className="mt-1 max-w-prose whitespace-pre-line lg:col-start-2">
         <NoteText text={note.text} standing={note.standing} partNumbers={partNumbers} />
       </p>
+      {note.result !== null && (
+        <p className="mt-1 max-w-prose text-sm lg:col-start-2">
+          <span className="font-mono">
+            {note.result.what}: {note.result.said}
+          </span>
+          {note.result.worksheet !== null && (
+            <>
+              {' · '}
+              <a href={worksheetHref(note.result.worksheet.id)} className="link">
+                {note.result.worksheet.title}
+              </a>
+            </>
+          )}
+        </p>
+      )}
       {caution !== null && (
         <p className="mt-1 max-w-prose text-sm text-ink-soft lg:col-start-2">
           <a href={`#caution-${note.topic ?? ''}`} className="link">

@@ -2,7 +2,7 @@ import { Button } from '../../../../components/Button.tsx';
 import { type Answer } from '../../../../domain/answer.ts';
 import { STOCK_INPUTS, type StockResult } from '../../../../domain/stock/stock-worksheet.ts';
 import { type Worked } from '../../../../domain/worksheets/worksheet.ts';
-import { findErrors, toQuery, type Typed } from '../given.ts';
+import { findErrors, toQuery, type Typed } from '../../given.ts';
 import { SheetField } from '../SheetField.tsx';
 import { SheetStanding, SheetWarnings, SheetWorking } from '../SheetFindings.tsx';
 import { CuttingPlan } from './CuttingPlan.tsx';

@@ -1,7 +1,7 @@
 import { formatNumber } from '../../../../domain/quantities/format-number.ts';
 import { readInputs } from '../../../../domain/worksheets/worksheet.ts';
 import { type RamResult, ramWorksheet } from '../../../../domain/ram/ram-worksheet.ts';
-import { toGiven, type Typed } from '../given.ts';
+import { toGiven, type Typed } from '../../given.ts';
 
 interface Run {
   readonly label: string;

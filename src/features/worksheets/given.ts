@@ -1,4 +1,4 @@
-import { type Field } from '../../../domain/worksheets/worksheet.ts';
+import { type Field } from '../../domain/worksheets/worksheet.ts';
 
 type Fields = Readonly<Record<string, Field<unknown>>>;
 
