@@ -1,13 +1,13 @@
 import Fraction from 'fraction.js';
 import { type Cue } from '../captions/cue.ts';
 import { type Dialect, type Finding, type ListedPart, type SpokenValue, type WordSpan } from './finding.ts';
-import { findParts, indexParts, type Mention } from './parts/find-parts.ts';
+import { findParts, indexParts, letteredCode, type Mention } from './parts/find-parts.ts';
 import { findCautions } from './remarks/cautions.ts';
 import { CHANGES } from './remarks/changes.ts';
-import { findRemarks } from './remarks/remark.ts';
-import { ARRIVALS, ASKS, UNDECIDED, UNFILMED } from './remarks/sayings.ts';
+import { findRemarks, joinRemarks, type Remark } from './remarks/remark.ts';
+import { ARRIVALS, ASKS, CAME, UNDECIDED, UNFILMED } from './remarks/sayings.ts';
 import { readSpeech } from './speech/read-speech.ts';
-import { type Speech } from './speech/speech.ts';
+import { after, type Speech } from './speech/speech.ts';
 import { type Claim } from './values/claim.ts';
 import { findValues, hearValues } from './values/find-values.ts';
 import { readShop } from './values/read-shop.ts';
@@ -29,8 +29,9 @@ export function readFindings(
   dialect: Dialect = {},
 ): Finding[] {
   const speech = readSpeech(cues);
-  const heard = hearValues(speech, dialect);
-  const mentions = findParts(speech, indexParts(parts), (word) => heard.taken.has(word));
+  const index = indexParts(parts);
+  const heard = hearValues(speech, dialect, (word) => letteredCode(speech, word, index));
+  const mentions = findParts(speech, index, (word) => heard.taken.has(word));
   const spoken = new Set<number>();
   for (const { from, to } of mentions) for (let word = from; word < to; word++) spoken.add(word);
   const shop = readShop(speech, heard.measures, heard.named, dialect);
@@ -40,7 +41,7 @@ export function readFindings(
     ...findRemarks(speech, 'undecided', UNDECIDED, 20),
     ...findRemarks(speech, 'ask', ASKS, 25),
     ...findRemarks(speech, 'unfilmed', UNFILMED, 25),
-    ...findRemarks(speech, 'arrival', ARRIVALS, 15),
+    ...joinRemarks([...findRemarks(speech, 'arrival', ARRIVALS, 15), ...findCome(speech, mentions)], 15),
   ];
   const about = aboutPart(mentions);
   const findings: (Finding & { readonly at: number })[] = [
@@ -93,6 +94,17 @@ function spokenValue({ value, unit }: Claim['values'][number], dialect: Dialect)
     exact: value.toFraction(),
     si: si === null ? null : { value: si.value.toFraction(), unit: si.unit },
   };
+}
+
+/** A part's name and that it came. */
+function findCome(speech: Speech, mentions: readonly Mention[]): Remark[] {
+  return mentions.flatMap(({ to, by }) => {
+    const come = by === 'name' ? CAME.exec(after(speech, to, 6)) : null;
+    const length = come?.[0].split(' ').length ?? 0;
+    return come === null
+      ? []
+      : [{ kind: 'arrival' as const, from: to, to: to + length, rule: 'a part came', sure: 0.75 }];
+  });
 }
 
 /** The part that was last spoken of before a word, if that was not long ago. */

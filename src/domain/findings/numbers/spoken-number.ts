@@ -27,6 +27,18 @@ const WHOLE_NUMERAL = /^\d+$/;
 const DECIMAL_NUMERAL = /^\d*\.\d+$/;
 const FRACTION_NUMERAL = /^(\d+)\/(\d+)$/;
 const DIGIT = /^\d$/;
+/** Before a hundred that is no number: a couple of hundred. */
+const VAGUE: ReadonlySet<string> = new Set([
+  'couple',
+  'few',
+  'several',
+  'many',
+  'of',
+  'per',
+  'the',
+  'odd',
+  'by',
+]);
 /** Longer than any number that is read out. */
 const MOST_DIGITS = 20;
 
@@ -205,7 +217,7 @@ function readGroup(words: Words, at: number): { value: number; to: number } | nu
   const next = words[at + 1] ?? '';
   if (article && next !== 'hundred' && !SCALES.has(next)) return null;
   // "Hundred and sixty amps", as it is said in a hurry.
-  const alone = words[at] === 'hundred' && readBelowHundred(words, next === 'and' ? at + 2 : at + 1) !== null;
+  const alone = words[at] === 'hundred' && !VAGUE.has(words[at - 1] ?? '');
   const left = alone
     ? { value: 1, to: at }
     : article

@@ -27,6 +27,14 @@ export function indexParts(parts: readonly ListedPart[]): PartIndex {
   return { names: indexNames(parts), codes: indexCodes(parts) };
 }
 
+/** Where a part number ends that begins at a word with a letter that is no other word; null where none begins. */
+export function letteredCode(speech: Speech, word: number, index: PartIndex): number | null {
+  const code = readCode(speech.texts, word, index.codes, (at) => speech.words[at]?.glued === true);
+  const lettered =
+    code !== null && (code.letters === 'written' || code.letters === 'named') && code.digits !== 'none';
+  return lettered && code.digits !== 'sounds' ? code.to : null;
+}
+
 /** Words between a part's name and its number in one breath, at most. Our own. */
 const BREATH = 7;
 /**
@@ -45,7 +53,16 @@ export function findParts(speech: Speech, index: PartIndex, taken: (word: number
     if (code !== null && !crossesTaken(code, taken)) codes.push(code);
   }
   const names = keepLongest(heard.filter((name) => !crossesTaken(name, taken)));
-  return joinMentions(speech, names, keepMeant(speech, codes, names));
+  return joinMentions(
+    speech,
+    names,
+    keepMeant(
+      speech,
+      codes,
+      names,
+      (code) => index.names.wordsOf.get(code.part)?.has(stems[code.from - 1] ?? '') === true,
+    ),
+  );
 }
 
 function crossesTaken({ from, to }: { from: number; to: number }, taken: (word: number) => boolean): boolean {
@@ -73,6 +90,7 @@ function keepMeant(
   speech: Speech,
   codes: readonly SpokenCode[],
   names: readonly HeardName[],
+  follows: (code: SpokenCode) => boolean,
 ): (Mention & { readonly by: 'number' })[] {
   const meant: (Mention & { readonly by: 'number' })[] = [];
   let end = 0;
@@ -80,7 +98,7 @@ function keepMeant(
   for (const code of codes) {
     if (code.from < end) continue;
     while ((names[near]?.to ?? Number.POSITIVE_INFINITY) < code.from - BREATH) near++;
-    const named = isNamed(names, near, code);
+    const named = follows(code) || isNamed(names, near, code);
     const other = names
       .slice(near, near + 8)
       .some(({ from, to, name }) => from < code.to && to > code.from && name.part !== code.part);

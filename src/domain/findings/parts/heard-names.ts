@@ -2,7 +2,7 @@ import { phrase, type Speech, wordAt } from '../speech/speech.ts';
 import { EVERYDAY, TIES } from './common-words.ts';
 import { type ListedName, type NameIndex } from './listed-names.ts';
 import { isOutside } from './outside.ts';
-import { likeness, phonetic, soundDistance } from './sound-alike.ts';
+import { likeness, phonetic, soundDistance, soundsLike } from './sound-alike.ts';
 import { stem } from './stem.ts';
 
 /** A name, or what was made of one. */
@@ -147,7 +147,7 @@ function isNear(speech: Speech, word: string, at: number, wanted: string): boole
   const alike = likeness(word, wanted);
   if (alike < ALIKE) return false;
   const [one, other] = [phonetic(word), phonetic(wanted)];
-  if (one === other) return true;
+  if (one === other || soundsLike(word, wanted)) return true;
   if (one.slice(0, 1) !== other.slice(0, 1) && alike < 0.8) return false;
   return (
     soundDistance(one, other) <= 1 && alike >= ALIKE_ALONE - 0.001 && Math.max(one.length, other.length) >= 3

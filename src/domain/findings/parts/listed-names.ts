@@ -19,6 +19,8 @@ export interface NameIndex {
   readonly byWord: ReadonlyMap<string, readonly ListedName[]>;
   /** Names of one word that are long enough to be known from near them, by their first sound. */
   readonly single: ReadonlyMap<string, readonly ListedName[]>;
+  /** The words of each part's names. */
+  readonly wordsOf: ReadonlyMap<string, ReadonlySet<string>>;
   /** The most words a name has as it may be cut. */
   readonly longest: number;
 }
@@ -29,6 +31,7 @@ export function indexNames(parts: readonly ListedPart[]): NameIndex {
   const bySound = new Map<string, ListedName[]>();
   const byWord = new Map<string, ListedName[]>();
   const single = new Map<string, ListedName[]>();
+  const wordsOf = new Map<string, Set<string>>();
   let longest = 1;
   for (const { number, name, aliases } of parts)
     for (const written of [name, ...aliases]) {
@@ -39,6 +42,9 @@ export function indexNames(parts: readonly ListedPart[]): NameIndex {
         .split(/[^\p{L}\p{N}']+/u)
         .map(stem)
         .filter((word) => word !== '');
+      const own = wordsOf.get(number) ?? new Set();
+      wordsOf.set(number, own);
+      for (const word of stems) if (word.length >= 4) own.add(word);
       const key = stems.join('');
       if (key === '' || byKey.has(key)) continue;
       const listed: ListedName = { part: number, stems, key, sound: phonetic(key) };
@@ -49,7 +55,7 @@ export function indexNames(parts: readonly ListedPart[]): NameIndex {
       longest = Math.max(longest, stems.length);
     }
   // A word of a name may be heard as two.
-  return { byKey, bySound, byWord, single, longest: longest + 2 };
+  return { byKey, bySound, byWord, single, wordsOf, longest: longest + 2 };
 }
 
 function push(map: Map<string, ListedName[]>, key: string, name: ListedName): void {

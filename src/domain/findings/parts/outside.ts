@@ -25,6 +25,13 @@ const OTHERS_BEHIND = set(`
 const BODY = set(
   'arm leg foot head hand finger back rib jaw neck shoulder knee elbow nose tongue chin heel toe eye ear face palm skin thumb body chest hip',
 );
+/** Words for where something is, which may be parts too: the top of the stairs, the other side. */
+const PLACES = set('top side back bottom front end base middle inside edge face corner center');
+const ABOUT = set(
+  'on at other one each either every same wrong both far near by left right from off over to this that in out any',
+);
+const ASKED =
+  /\b(?:what's|what is|how's|how is|how do you|does|is|are|show me|tell me|what are|how are|and) your $/;
 /** Somebody else's thing and what it has. */
 const THEIRS =
   /\b(?:neighbou?r|neighbou?rs|mate|friend|buddy|dad|mum|mom|brother|sister|uncle|cousin|grandad|grandpa|grandfather|father|guy|fella|bloke|kid|wife|husband|someone|somebody|everyone)'s? (?:\w+ )?(?:has|had|have|is|was|with|got)(?: got)? (?:a|an|the|no|his|her|two|three) (?:\w+ )?$/;
@@ -50,6 +57,8 @@ export function isOutside(speech: Speech, name: ListedName, from: number, to: nu
   if (THEIRS.test(`${before(speech, from, 6)} `)) return true;
   if (name.stems.length > 1) return false;
   if (OTHERS_BEHIND.has(next)) return true;
+  if (PLACES.has(name.stems[0] ?? '') && (next === 'of' || ABOUT.has(previous))) return true;
+  if (previous === 'your' && ASKED.test(`${before(speech, from, 4)} `)) return true;
   if (OTHERS_BEFORE.has(previous) || COMPOUNDS.has(`${previous}_${stem(whole)}`)) return true;
   if (
     BODY.has(name.stems[0] ?? '') &&

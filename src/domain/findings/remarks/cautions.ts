@@ -24,13 +24,13 @@ const INSTEAD: Readonly<Partial<Record<HeardTopic, readonly HeardTopic[]>>> = {
   load: ['lifting', 'pressure'],
   rotating: ['grinding'],
   eyes: ['chemicals'],
-  fire: ['grinding'],
+  fire: ['grinding', 'chemicals'],
   pinch: ['rotating', 'pressure', 'lifting', 'load', 'grinding'],
   dust: ['fumes'],
 };
 const SAME_SENTENCE = 14;
 /** Cautions that may stand within such a distance, at most. */
-const NEIGHBOURS = 12;
+const NEIGHBOURS = 16;
 /** Galvanised smoke is told at length. */
 const SMOKE = 45;
 
@@ -39,20 +39,17 @@ export function findCautions(speech: Speech): Caution[] {
   const found = [...HAZARDS.flatMap((hazard) => findHazard(speech, hazard)), ...findGuards(speech)].sort(
     (a, b) => a.from - b.from || b.sure - a.sure,
   );
+  const told = found.filter(
+    (caution, index) => !isTold(caution, found.slice(Math.max(0, index - NEIGHBOURS), index + NEIGHBOURS)),
+  );
   const kept: Caution[] = [];
   const last = new Map<HeardTopic, Caution>();
-  for (const caution of found) {
+  for (const caution of told) {
     const same = last.get(caution.topic);
-    if (same !== undefined && caution.from - same.to <= SAME) {
-      last.set(caution.topic, { ...same, to: Math.max(same.to, caution.to) });
-      continue;
-    }
+    if (same === undefined || caution.from - same.to > SAME) kept.push(caution);
     last.set(caution.topic, caution);
-    kept.push(caution);
   }
-  return kept.filter(
-    (caution, index) => !isTold(caution, kept.slice(Math.max(0, index - NEIGHBOURS), index + NEIGHBOURS)),
-  );
+  return kept;
 }
 
 function isTold(caution: Caution, all: readonly Caution[]): boolean {

@@ -48,9 +48,13 @@ export function findRemarks(
       if (crossesSentences(speech, from, to)) continue;
       found.push({ kind, from, to, rule, sure });
     }
-  found.sort((a, b) => a.from - b.from || b.to - a.to);
+  return joinRemarks(found, apart);
+}
+
+/** Remarks in order, those of them that stand within a few words taken for one. */
+export function joinRemarks(found: readonly Remark[], apart: number): Remark[] {
   const kept: Remark[] = [];
-  for (const remark of found) {
+  for (const remark of [...found].sort((a, b) => a.from - b.from || b.to - a.to)) {
     const last = kept.at(-1);
     if (last !== undefined && remark.from - last.to <= apart) {
       kept[kept.length - 1] = {

@@ -30,7 +30,7 @@ export const UNDECIDED: readonly Saying[] = [
   ),
   saying(
     'do not know yet',
-    String.raw`(?:don't|do not|not) (?:\S+ ){0,2}?(?:know|sure|certain) yet|yet to be decided|to be decided|tbd|remains to be seen|don't know (?:yet )?(?:which|what) (?:\S+ ){0,3}?(?:to use|to do|to go|i'll|i'm|we'll|it'll)`,
+    String.raw`(?:don't|do not|not) (?:\S+ ){0,2}?(?:know|sure|certain) yet|dunno (?:yet|which|what)|yet to be decided|to be decided|tbd|remains to be seen|don't know (?:yet )?(?:which|what) (?:\S+ ){0,3}?(?:to use|to do|to go|i'll|i'm|we'll|it'll)`,
     0.75,
     SEEN,
   ),
@@ -131,7 +131,7 @@ export const ASKS: readonly Saying[] = [
 export const UNFILMED: readonly Saying[] = [
   saying(
     'off camera',
-    String.raw`off (?:the )?(?:camera|screen|film|cam)|camera(?:'s| was| is| being)? (?:off|switched off|turned off|not on|not running|wasn't on|wasn't running|dead|died|flat|charging|packed up|conked out|overheated|full)|without (?:the )?(?:camera|filming|you)|(?:with )?no camera|(?:away from|behind) the camera|not on camera|behind the scenes|between (?:videos|episodes|takes|shoots)`,
+    String.raw`off (?:the )?(?:camera|screen|film|cam)|camera(?:'s| was| is| being)? (?:off|switched off|turned off|not on|not running|wasn't on|wasn't running|dead|died|flat|charging|on charge|packed up|conked out|overheated|full)|without (?:the )?(?:camera|filming|you)|(?:with )?no camera|(?:away from|behind) the camera|not on camera|behind the scenes|between (?:videos|episodes|takes|shoots)`,
     0.9,
     /\b(?:turn(?:ed)? the camera off now|off camera (?:light|mic|angle))\b/,
   ),
@@ -177,7 +177,7 @@ export const ARRIVALS: readonly Saying[] = [
   ),
   saying(
     'came',
-    String.raw`(?:came|come|has come|have come|'s come|comes) (?:today|yesterday|this morning|this week|this afternoon|on (?:monday|tuesday|wednesday|thursday|friday|saturday|sunday)|last (?:night|week)|in (?:the post|the mail|today|yesterday|this)|in from (?:the|my)|through the (?:post|door)|by (?:courier|post|truck|mail)|in a (?:box|crate|tube|jiffy|padded)|from (?:the )?(?:supplier|metal place|steel yard|foundry|laser|factory|merchant|merchants|machine shop|waterjet|galvanizer|galvaniser|powder ?coater|china))|both came|all came|finally came|what did come|did come|came (?:early|late|quick|quickly|well packed|wrapped)`,
+    String.raw`(?:came|come|has come|have come|'s come|comes) (?:today|yesterday|this morning|this week|this afternoon|(?:on )?(?:monday|tuesday|wednesday|thursday|friday|saturday|sunday)|last (?:night|week)|in (?:the post|the mail|today|yesterday|this)|in from (?:the|my)|through the (?:post|door)|by (?:courier|post|truck|mail)|in a (?:box|crate|tube|jiffy|padded)|from (?:the )?(?:supplier|metal place|steel yard|foundry|laser|factory|merchant|merchants|machine shop|waterjet|galvanizer|galvaniser|powder ?coater|china))|both came|all came|finally came|what did come|did come|came (?:early|late|quick|quickly|well packed|wrapped)`,
     0.8,
     /\b(?:(?:mate|wife|neighbou?r|he|she|i|we|you|somebody|someone|who|dad|brother|idea|cat|rain|rust|smoke|came) (?:\S+ )?(?:came|come)|welcome|(?:didn't|hasn't|haven't|doesn't|won't|not|will|to|until|when it|if it) (?:\S+ )?come)\b/,
   ),
@@ -193,3 +193,7 @@ export const ARRIVALS: readonly Saying[] = [
     0.7,
   ),
 ];
+
+/** Right behind a part's name: it has come. */
+export const CAME =
+  /^(?:(?:has|have|had|'s|'ve|finally|just|all|both|also|actually|even|eventually) )*(?:came|arrived|turned up|showed up|landed|are here|is here|got here|come in|came in|been delivered|got delivered)(?! (?:out|off|from|up|down|with|apart|loose|back|over|round|around|undone|as|at|free|away|to|on|together|first|later|last|before|after|next|along|straight|clean|through|across|through)\b)\b/;

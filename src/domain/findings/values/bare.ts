@@ -5,6 +5,7 @@ import { type Claim, type Shop } from './claim.ts';
 import { firstWords, lastWords, valuesOf } from './classify.ts';
 import {
   FREE_BEHIND,
+  WELDING,
   GRITS,
   HEATED,
   PAPER_BEHIND,
@@ -39,6 +40,10 @@ const PRESSURE = at('pressure|relief|regulator|psi|compressor|gauge|relief valve
 const HEAT = at(
   'oven|kiln|preheat|preheated|temper|tempered|tempering|temperature|temp|thermostat|bake|baked|heat gun|quench oil|annealed?',
 );
+const NUMBER_WORD =
+  /^(?:\d.*|one|two|three|four|five|six|seven|eight|nine|ten|eleven|twelve|.*teen|twenty|thirty|forty|fifty|sixty|seventy|eighty|ninety)$/;
+/** Electrodes as they are sold, in millimetres: ISO 544. */
+const ROD_MM = [1.6, 2, 2.5, 2.6, 3.2, 4, 5];
 /** Somebody changes what is set: "down to sixty". */
 const TURNED =
   /\b(?:(?:down|up|back|drop(?:ped|ping)?(?: it| that| her)?|bump(?:ed)?(?: it| that)?|turn(?:ed)?(?: it| that| her)?|knock(?:ed)?(?: it| that)?|crank(?:ed)?(?: it| that)?|wound(?: it)?|backed(?: it)?)(?: back| up| down| off)? (?:to|at)|(?:try|tried|call it|make it|went with|going with|go with)) (?:about |around |maybe |a |like |more like )?$/;
@@ -71,7 +76,11 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
   const b = `${before(speech, measure.from, 10)} `;
   const a = after(speech, measure.to, 8);
   const value = first.value.valueOf();
-  const free = FREE_BEHIND.test(a);
+  const next = speech.words[measure.to];
+  // In a new caption a number begins something new.
+  const free =
+    FREE_BEHIND.test(a) ||
+    (next !== undefined && next.cue !== speech.words[measure.to - 1]?.cue && NUMBER_WORD.test(next.text));
   const claim = (rule: string, unit: string, more: Partial<Claim> = {}): Claim => ({
     from: measure.from,
     to: measure.to,
@@ -86,10 +95,12 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
     claim(`bare ${what}`, unit, { kind: 'setting', what, dimension });
 
   if (measure.joined === 'by') return bySection(speech, measure, b, a, shop, claim);
-  const wire = /^(?:(?:solid|mig|flux|core|cored|welding) )*(?:wire|flux core)\b/.test(a)
+  const wire = /^(?:(?:solid|mig|tig|flux|core|cored|welding) )*(?:wire|flux core|filler)\b/.test(a)
     ? wireSize(first.value, speech.texts[first.from] ?? '')
     : null;
   if (wire !== null) return { ...set('wire', wire.unit, 'length'), values: [wire] };
+  if (ROD_MM.includes(value) && /^(?:welding )?(?:rods?|electrodes?|sticks?)\b/.test(a) && WELDING.test(b))
+    return set('electrode', 'mm', 'length');
   if (first.form === 'fraction' || first.form === 'mixed') return inchFraction(measure, b, a, shop, claim);
   const split = fractionWritten(speech.texts[first.from] ?? '');
   if (
@@ -100,6 +111,16 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
   )
     return { ...claim('written fraction', 'in'), values: [{ value: split, unit: 'in' }] };
   if (isForty(measure, b, a, speech)) return claim('bare angle', 'deg', { dimension: 'angle' });
+  const earlier = worked.claim;
+  const ends = free || next === undefined || next.cue !== speech.words[measure.to - 1]?.cue;
+  if (
+    earlier !== null &&
+    earlier.kind !== 'rating' &&
+    ends &&
+    measure.from - earlier.to <= 3 &&
+    /\b(?:and then|then|and then a) $/.test(b)
+  )
+    return followed(earlier, claim);
   if (!free && !WAY_BEHIND.test(a)) return null;
   if (FEED.test(b) && value < 5) return set('feed', 'mm/rev', 'feed');
   if (SPEED.test(b) && value >= 50) return set('speed', 'rpm', 'turning');
@@ -114,9 +135,22 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
       `${b}${firstWords(a, 5)}`,
     ) && /\b(?:to|at|around|about) $/.test(b);
   if ((HEAT.test(b) && value >= 60) || (hot && value >= 150))
-    return set('temperature', shop.units === 'in' ? 'F' : 'C', 'heat');
+    return set('temperature', scaleOf(value, `${b}${firstWords(a, 5)}`, shop), 'heat');
   const last = worked.claim;
+  const sized =
+    last !== null &&
+    last.dimension === 'length' &&
+    !/^(?:m|ft)$/.test(last.values[0]?.unit ?? '') &&
+    measure.from - last.to <= 12;
   if (last !== null && measure.from - last.to < NEAR && TURNED.test(b)) return followed(last, claim);
+
+  if (
+    last?.what === 'speed' &&
+    measure.from - last.to <= 10 &&
+    value >= 100 &&
+    /\b(?:and|then|or|but) $/.test(b)
+  )
+    return followed(last, claim);
   if (
     shop.units === 'mm' &&
     value >= 3 &&
@@ -124,7 +158,18 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
     /\b(?:a|the|solid|some|of|is|it's|in|from|off|old|this|that|that's|just|by) $/.test(b)
   )
     return claim('stock by its size', 'mm');
-  return isSize(b, a, measure) ? claim('bare size', unitNear(measure, shop, worked, PLANNED.test(b))) : null;
+  return isSize(b, a, measure, sized)
+    ? claim('bare size', unitNear(measure, shop, worked, PLANNED.test(b)))
+    : null;
+}
+
+/** Steel is tempered at no less than 330 degrees Fahrenheit, at which it is 165 Celsius: ASM Heat Treater's Guide. */
+const TEMPERED_F = 330;
+
+/** The scale of a bare temperature: the shop's, but where it makes no sense. */
+function scaleOf(value: number, around: string, shop: Shop): string {
+  if (/\btemper\w*/.test(around) && value <= TEMPERED_F) return 'C';
+  return shop.units === 'in' ? 'F' : 'C';
 }
 
 /** "Down to sixty": of the kind and the unit of what was told before. */
@@ -158,18 +203,20 @@ function unitNear(measure: Measure, shop: Shop, worked: Worked, planned: boolean
   return unit === 'thread' || (unit === 'thou' && !planned) ? shop.units : unit;
 }
 
-function isSize(b: string, a: string, measure: Measure): boolean {
+function isSize(b: string, a: string, measure: Measure, sized: boolean): boolean {
   const [first] = measure.terms;
   if (first === undefined) return false;
   if (TOOL_BEHIND.test(a)) return false;
-  if (PLANNED.test(b) || READ.test(b) || DIAMETER.test(b)) return true;
+  // "Where the plan shows four" may be how many.
+  const counted = PLANNED.test(b) && first.form !== 'decimal' && first.value.compare(10) < 0 && !sized;
+  if ((PLANNED.test(b) && !counted) || READ.test(b) || DIAMETER.test(b)) return true;
   // A year, or a count of something.
   if (first.form === 'pair' && /\b(?:in|since|from|of|year) $/.test(b)) return false;
   if (SIZED.test(b)) return true;
   return (
     first.value.compare(3) > 0 &&
     WAY_BEHIND.test(a) &&
-    /^(?:long|wide|tall|high|deep|thick|across|apart|diameter|dia|square|centers|centres|on cent|wall|bore|overall|in diameter|radius|outside diameter|inside diameter)\b/.test(
+    /^(?:long|longer|shorter|wider|thicker|taller|deeper|higher|lower|oversize|undersize|wide|tall|high|deep|thick|across|apart|diameter|dia|square|centers|centres|on cent|wall|bore|overall|in diameter|radius|outside diameter|inside diameter)\b/.test(
       a,
     )
   );
@@ -191,7 +238,8 @@ function bySection(
     /\b(?:one by one|two by two)\b/.test(speech.texts.slice(measure.from, measure.to).join(' '))
   )
     return null;
-  if (NOMINAL.has(key) && !/\b(?:mil|mm)\b/.test(b + a)) return claim('nominal timber', 'in', { sure: 0.85 });
+  if (NOMINAL.has(key) && !/\b(?:mil|mm)\b/.test(`${lastWords(b, 4)} ${firstWords(a, 3)}`))
+    return claim('nominal timber', 'in', { sure: 0.85 });
   if (measure.terms.some(({ form }) => form === 'fraction' || form === 'mixed'))
     return claim('section in inches', 'in');
   // Nothing of a shop that thinks in inches is forty inches thick.

@@ -54,7 +54,7 @@ export function classify(speech: Speech, measure: Measure, shop: Shop): Claim | 
     case 'feed':
       return claim('setting', 'feed', { what: 'feed' });
     case 'torque':
-      return /\b(?:motor|rated|wrench|gun|driver) $/.test(b) || /^(?:motor|servo|stepper)/.test(a)
+      return /\b(?:motor|rated) $/.test(b) || /^(?:motor|servo|stepper)/.test(a)
         ? claim('rating', 'rated torque', { sure: 0.6 })
         : claim('setting', 'torque', { what: 'torque' });
     case 'heat':
@@ -76,7 +76,9 @@ export function classify(speech: Speech, measure: Measure, shop: Shop): Claim | 
         ? null
         : claim('rating', 'force');
     case 'mass':
-      return isRated(b, a) && !isWeight(b, a) ? claim('rating', 'rated mass') : null;
+      return (isRated(b, a) || isLifter(measure, b)) && !isWeight(b, a)
+        ? claim('rating', 'rated mass')
+        : null;
     case 'volume':
       return classifyVolume(measure, b, a, claim);
     default:
@@ -90,7 +92,11 @@ function classifyLength(speech: Speech, measure: Measure, b: string, a: string, 
   const [first] = measure.terms;
   if (first === undefined) return null;
   const single = measure.terms.length === 1;
-  if (single && ELECTRODE_BEHIND.test(a) && isSold(first))
+  if (
+    single &&
+    isSold(first) &&
+    (ELECTRODE_BEHIND.test(a) || (/^(?:welding )?rod\b/.test(a) && context.WELDING.test(lastWords(b, 6))))
+  )
     return claim('setting', 'electrode diameter', { what: 'electrode' });
   if (
     single &&
@@ -114,9 +120,12 @@ function classifyLength(speech: Speech, measure: Measure, b: string, a: string, 
 }
 
 function classifyAngle(measure: Measure, b: string, a: string, shop: Shop, claim: Make): Claim | null {
+  const rated =
+    context.RATED.test(lastWords(b, 4)) && measure.terms.every(({ value }) => value.compare(60) > 0);
   const hot =
-    context.HEATED.test(`${lastWords(b, 8)} ${firstWords(a, 4)}`) &&
-    measure.terms.every(({ value }) => value.compare(45) > 0);
+    rated ||
+    (context.HEATED.test(`${lastWords(b, 8)} ${firstWords(a, 4)}`) &&
+      measure.terms.every(({ value }) => value.compare(45) > 0));
   if (hot && !/\b(?:angle|bend|bent|fold\w*|miter|mitre|bevel\w*|cut|chamfer\w*|tilt\w*)\b/.test(b)) {
     const values = measure.terms.map(({ value }) => ({ value, unit: shop.units === 'in' ? 'F' : 'C' }));
     if (context.RATED.test(lastWords(b, 4)))
@@ -181,6 +190,17 @@ function isRated(b: string, a: string): boolean {
     context.RATED.test(lastWords(b, 6)) ||
     context.LIFTING_BEHIND.test(a) ||
     /^(?:of (?:pull|lift|force|thrust|clamping))/.test(a)
+  );
+}
+
+/** "The slides are hundred pound": a lifting thing's own figure, as part of its name. */
+function isLifter(measure: Measure, b: string): boolean {
+  const named = measure.terms.at(-1)?.plural === false;
+  return (
+    named &&
+    /\b(?:slides?|runners?|hoist|winch|jack|slings?|shackles?|chain|castors?|casters?|struts?|magnets?|straps?)\b/.test(
+      lastWords(b, 9),
+    )
   );
 }
 

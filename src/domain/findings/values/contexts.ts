@@ -11,7 +11,7 @@ const words = (list: string) =>
 /** A tool that is called by its size; the size is not of the work. */
 export const TOOL_BEHIND = new RegExp(
   `^(?:(?:angle|bench|drill|router|end|hole|cordless|flap|cutting|cut|off|hex|allen|wire|chop|circular|band|table|miter|mitre|ball|open|ring|combination|ratchet|impact|deep|steel|carbide|cobalt|masonry|forstner|spade|step|brad|point|slitting|grinding|diamond|cup|finishing|paint|foam|digital|vernier|machinist|bar|sash|pipe|g|f|c|sds|hammer|ball|peen|cold|wood|mortise|firmer|center|centre|roughing|corner|flush|trim|round|over|straight|spiral|compression|insert|hss|indexable|face|fly|shell|side|tile|jig|scroll|mig|tig|knurling|lump|sledge|claw|filling|tin|crimp|stepped|key|roll|parallel) ){0,3}${words(`
-  grinder|drill|drills|bit|bits|endmill|endmills|mill|cutter|cutters|spanner|spanners|wrench|socket|sockets|blade|blades|saw|saws|bandsaw|chisel|chisels|vise|vice|hammer|reamer|punch|brush|roller|lathe|clamps?|driver|drive|key|keys|collet|chuck|calipers?|callipers?|rule|ruler|tape|jointer|planer|thicknesser|sander|disc|discs|disk|disks|file|trowel|float|nozzle|cup|tip|shroud|gun|torch|screen|monitor|telescope|anvil|swage|fuller|knife|needle|nailer|nails|gouge|tap and die|die|dies|edge finder|magnet|stone|wheel brush|broom|bucket
+  grinder|drill|drills|bit|bits|endmill|endmills|mill|cutter|cutters|spanner|spanners|wrench|socket|sockets|blade|blades|saw|saws|bandsaw|chisel|chisels|vise|vice|hammer|reamer|punch|brush|roller|lathe|clamps?|driver|drive|key|keys|collet|chuck|calipers?|callipers?|rule|ruler|tape|jointer|planer|thicknesser|sander|disc|discs|disk|disks|file|trowel|nozzle|cup|tip|shroud|gun|torch|screen|monitor|telescope|anvil|swage|fuller|knife|needle|nailer|nails|gouge|tap and die|die|dies|edge finder|magnet|stone|wheel brush|broom|bucket
 `)}(?= |$)`,
 );
 
@@ -24,7 +24,7 @@ export const WAY_BEHIND = new RegExp(
 
 /** Stock that is called by a thickness or a section: quarter plate, 3/4 ply. */
 export const STOCK_BEHIND = new RegExp(
-  `^(?:(?:hot|cold|rolled|mild|stainless|bright|black|aluminium|aluminum|brass|copper|steel|baltic|birch|marine|structural|flat|square|round|solid|hardwood|oak|maple|walnut|ash|pine|cherry|mdf|clear|galvanised|galvanized|checker|chequer|tool|spring|a36|rigid|threaded|old|new) ){0,3}${words(`
+  `^(?:(?:hot|cold|rolled|mild|stainless|bright|black|aluminium|aluminum|brass|copper|steel|baltic|birch|marine|structural|flat|square|round|solid|silver|hardwood|oak|maple|walnut|ash|pine|cherry|mdf|clear|galvanised|galvanized|checker|chequer|tool|spring|a36|rigid|threaded|old|new) ){0,3}${words(`
   ply|plywood|plate|sheet|sheets|bar|flat|flats|flatbar|angle|angles|channel|channels|tube|tubes|tubing|pipe|pipes|box|boxes|rod|round|square|stock|hot rolled|cold rolled|mdf|board|boards|steel|stainless|aluminium|aluminum|brass|copper|acrylic|perspex|polycarbonate|glass|hardwood|oak|maple|walnut|pine|ash|timber|timbers|planks?|planking|strips?|slats?|bolts?|bolt|screws?|pins?|dowels?|studs?|stud|rebar|mesh|rope|cable|hose|hoses|line|fillet|weld|bead|chamfer|radius|roundover|rebate|rabbet|dado|groove|slot|hole|holes|gap|wall|bore|shaft|keyway|key|washers?|shims?|spacers?|foam|rubber|leather|felt|gasket|cable|insert|thread|threads|lag|lags|hex|bearing|bushing|fiberglass|fibreglass|slab|gravel|base|aggregate|copper pipe|conduit|trunking|wire|cores?
 `)}(?= |$)`,
 );
@@ -35,7 +35,7 @@ export const FREE_BEHIND =
 
 /** Words before a length that is not of the build: a person, a building, a distance to keep. */
 export const OUTSIDE_BEFORE =
-  /\b(?:(?:shed|garage|shop|workshop|van|truck|trailer|yard|garden|house|room|driveway|road|field|cat|dog|lad|kid|kids|wife|husband|son|daughter|brother|sister|dad|father|mum|mom|mother|uncle|grandad|grandfather|boy|girl|he|she|he's|she's|i'm|you're|they're|who's|i was|bloke|guy|fella|man|woman|snow|rain|extension (?:lead|cord)|ceiling|doorway|the lead|tape)(?:'s)?(?: (?:is|are|was|only|about|nearly|just|maybe|like|a|all of|over|under)){0,3}|(?:stand|stay|stood|keep|get|move|step|walk|walked|drop|dropped|threw|fell|drove|back)(?: \w+){0,2}|within|give (?:him|her|them|it|you)) $/;
+  /\b(?:(?:shed|garage|shop|workshop|van|truck|trailer|yard|garden|house|room|driveway|road|field|cat|dog|lad|kid|kids|wife|husband|son|daughter|brother|sister|dad|father|mum|mom|mother|uncle|grandad|grandfather|boy|girl|he|she|he's|she's|i'm|who's|bloke|guy|fella|man|woman|snow|rain|extension (?:lead|cord)|ceiling|doorway|the lead|tape)(?:'s)?(?: (?:is|are|was|only|about|nearly|just|maybe|like|a|all of|over|under)){0,3}|(?:stand|stay|stood|keep|get|move|step|walk|walked|drop|dropped|threw|fell|drove|back)(?: \w+){0,2}|within|swings|lathe takes|give (?:him|her|them|it|you)) $/;
 export const OUTSIDE_BEHIND =
   /^(?:away|back|from me|from you|from the (?:camera|house|road)|tall (?:and he|and she|guy|man|bloke)|of (?:snow|rain|water|mud|dust|sawdust|extension|hose pipe|lead|footage|my life|film|tape)|down the (?:road|street)|in the air|clear of|of here|or so away)\b/;
 
@@ -84,6 +84,6 @@ export const GRITS: ReadonlySet<number> = new Set([
   2000, 2500, 3000, 5000,
 ]);
 export const SANDED =
-  /\b(?:sand|sands|sanded|sanding|sander|sandpaper|grit|grits|flap|abrasive|paper|wet and dry|linish\w*|polish\w*|orbital|belt sander|hand sand|scratch\w*|scuff\w*|key it)\b/;
+  /\b(?:sand|sands|sanded|sanding|sander|sandpaper|grit|grits|flap|abrasive|paper|wet and dry|linish\w*|polish\w*|ston(?:e|ed|ing)|hon(?:e|ed|ing)|orbital|belt sander|hand sand|scratch\w*|scuff\w*|key it)\b/;
 export const PAPER_BEHIND =
   /^(?:(?:flap|sanding|wet|grit|zirconia|ceramic) )?(?:grits?|paper|papers|disc|discs|disk|disks|pad|pads|belt|belts|sandpaper|flap|mesh|wet and dry|scotch|stone|block|wheel|abrasive)\b/;

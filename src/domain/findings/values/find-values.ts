@@ -21,10 +21,16 @@ export interface Heard {
 
 const BEGINS =
   /^(?:\d|m\d|p\d|e\d|er\d|\.\d|[½¼¾]|(?:a|an|m|em|g|e|er|p|inch|foot|minus|half|quarter|point|hundred|oh|o|zero|nought|naught|double|one|two|three|four|five|six|seven|eight|nine|ten|eleven|twelve|thirteen|fourteen|fifteen|sixteen|seventeen|eighteen|nineteen|twenty|thirty|forty|fourty|fifty|sixty|seventy|eighty|ninety)$)/;
+/** A thread or a filler that a part number could be taken for. */
+const THREADED =
+  /\b(?:tapped|tap|threaded|an|bolts?|with|for|some|two|four|six|eight|long) (?:an? |some )?\| |\| (?:bolts?|screws?|threads?|taps?|tapped|nuts?|studs?|grit|paper|rods?|stainless|cap|hex|machine|set|countersunk|by|eighths?|quarters?|half|hundred)\b/;
 const NUMBERS_PART = /\b(?:parts?|items?|part number|item number) $/;
 
-/** Every number of the captions, with its unit where one is said. */
-export function hearValues(speech: Speech, dialect: Dialect): Heard {
+/**
+ * Every number of the captions, with its unit where one is said.
+ * @param codeAt where a part number with a letter ends that begins at a word
+ */
+export function hearValues(speech: Speech, dialect: Dialect, codeAt: (word: number) => number | null): Heard {
   const measures: Measure[] = [];
   const named: Claim[] = [];
   const taken = new Set<number>();
@@ -33,6 +39,11 @@ export function hearValues(speech: Speech, dialect: Dialect): Heard {
   };
   let at = 0;
   while (at < speech.words.length) {
+    const code = codeAt(at);
+    if (code !== null && !THREADED.test(`${before(speech, at, 3)} | ${phrase(speech, code, code + 2)} `)) {
+      at = code;
+      continue;
+    }
     const found = BEGINS.test(wordAt(speech, at)) ? hearAt(speech, at, dialect) : null;
     if (found === null) {
       at++;

@@ -138,7 +138,22 @@ function readPort(words: Words, at: number): SpokenThread | null {
 function readInch(words: Words, at: number): SpokenThread | null {
   const size = readSize(words, at);
   if (size === null || !(size.size.includes('/') || words[size.to - 1] === 'inch')) return null;
-  return pitched(words, size.size, size.to);
+  return pitchedByName(words, size) ?? pitched(words, size.size, size.to);
+}
+
+/** Three eighths by ten threads per inch, ACME or not: ASME B1.5. */
+function pitchedByName(words: Words, { size, to }: { size: string; to: number }): SpokenThread | null {
+  const from = words[to] === 'by' ? to + 1 : to;
+  const pitch = readSpokenNumber(words, from);
+  if (pitch === null || pitch.form === 'fraction') return null;
+  const behind = words.slice(pitch.to, pitch.to + 4).join(' ');
+  const named = /^(?:tpi|t p i|threads per inch)(?= |$)/.exec(behind)?.[0] ?? '';
+  const acme = behind.slice(named.length).trim().startsWith('acme');
+  if (named === '' && !acme) return null;
+  const end = pitch.to + (named === '' ? 0 : named.split(' ').length) + (acme ? 1 : 0);
+  const turns = Number(pitch.value.valueOf());
+  const series = acme ? ' ACME' : COARSE[size] === turns ? ' UNC' : FINE[size] === turns ? ' UNF' : '';
+  return { name: `${size}-${String(turns)}${series}`, to: end };
 }
 
 function pitched(words: Words, size: string, at: number): SpokenThread | null {

@@ -122,7 +122,7 @@ const FORMS: readonly (readonly [unit: string, dimension: Dimension, one: string
   [
     '',
     'other',
-    "percent|dollar|buck|quid|euro|cent|penny|day|week|month|year|mile|oz|ounce|gram|times|time|bit|way|people|person|pm|am|oclock|o'clock|bob|pence|cycle|hertz|hz|khz|meg|megs|gig|square foot|square meter|square metre",
+    "tpi|t p i|threads per inch|percent|dollar|buck|quid|euro|cent|penny|day|week|month|year|mile|oz|ounce|gram|times|time|bit|way|people|person|pm|am|oclock|o'clock|bob|pence|cycle|hertz|hz|khz|meg|megs|gig|square foot|square meter|square metre",
     'dollars|bucks|euros|cents|pennies|days|weeks|months|years|miles|ounces|grams|bits|ways|square feet|square meters|square metres|mph|miles an hour|cycles',
   ],
 ];
