@@ -1,5 +1,6 @@
 import Fraction from 'fraction.js';
 import { type Cue } from '../captions/cue.ts';
+import { findCorrections } from './corrections.ts';
 import { type Dialect, type Finding, type ListedPart, type SpokenValue, type WordSpan } from './finding.ts';
 import { findParts, indexParts, letteredCode, type Mention } from './parts/find-parts.ts';
 import { findCautions } from './remarks/cautions.ts';
@@ -56,6 +57,15 @@ export function readFindings(
     ...claims.map((claim) => ({
       ...valueFinding(speech, cues, claim, dialect),
       part: about(claim.from),
+      at: claim.from,
+    })),
+    ...findCorrections(claims, parts, about).map(({ claim, part, sentence }) => ({
+      ...valueFinding(speech, cues, claim, dialect),
+      kind: 'correction' as const,
+      part,
+      sentence,
+      rule: 'size of the parts list',
+      sure: 0.5,
       at: claim.from,
     })),
     ...[...remarks, ...findCautions(speech)].map(({ from, to, ...remark }) => ({

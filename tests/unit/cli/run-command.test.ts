@@ -16,6 +16,10 @@ const FILES: Readonly<Record<string, string>> = {
   'bare.csv': 'n1,C0043,31.2\n',
   'bad.csv': 'id,clip,time\nn1,C0043,00:00:31:25\n',
   'few.csv': 'id,time\nn1,1\n',
+  'parts.csv': 'number,name,aliases\nK03,tiller,stick; helm\n118,"bearing, housing",\n',
+  'bare-parts.csv': 'K03,tiller\n',
+  'said.vtt':
+    'WEBVTT\n\n00:01.000 --> 00:03.000\nkay oh three is twelve mil\n\n00:03.000 --> 00:05.000\nwelded with sixty thirteens\n',
   'sound.edl': '1 C0043 V C 0 50 0 50\n2 C0044 A C 0 25 25 50\n',
 };
 const read = (path: string) => {
@@ -268,5 +272,53 @@ describe('Wrong input', () => {
   ])('in a batch, %s gets a sentence', (line, sentence) => {
     const answer = answerLine(line);
     expect(answer.ok ? '' : answer.error).toContain(sentence);
+  });
+});
+
+describe('captions', () => {
+  const findings = [
+    { cue: 1, kind: 'part', part: 'K03', text: 'kay oh three' },
+    { cue: 1, kind: 'size', part: 'K03', text: 'twelve mil', values: [{ value: 12, unit: 'mm' }] },
+    { cue: 2, kind: 'setting', what: 'electrode', text: 'E6013', words: 'sixty thirteens' },
+  ];
+
+  it('prints how many captions there are and what was found, with seconds', () => {
+    const answer = run('captions', '--parts', 'parts.csv', 'said.vtt');
+    if (!answer.ok) throw new Error(answer.error);
+    const printed = JSON.parse(answer.value) as { findings: { from: number; to: number }[] };
+    expect(printed).toMatchObject({ cues: 2, findings });
+    for (const { from, to } of printed.findings) {
+      expect(from).toBeGreaterThanOrEqual(1);
+      expect(to).toBeGreaterThan(from);
+      expect(to).toBeLessThanOrEqual(5);
+    }
+  });
+
+  it('answers a batch with the captions and the parts in fields', () => {
+    const parts = [{ number: 'K03', name: 'tiller', aliases: ['stick'] }];
+    expect(ask({ tool: 'captions', captions: FILES['said.vtt'], parts })).toMatchObject({
+      ok: true,
+      value: { cues: 2, findings },
+    });
+  });
+
+  it('takes the dialect of the maker', () => {
+    const asked = { tool: 'captions', captions: FILES['said.vtt'], parts: [], mil: 'thou' };
+    expect(ask(asked)).toMatchObject({
+      value: { findings: [{ values: [{ value: 12, unit: 'thou' }] }, {}] },
+    });
+  });
+
+  it.each([
+    [['captions', 'said.vtt'], 'Say which parts with --parts.'],
+    [
+      ['captions', '--parts', 'bare-parts.csv', 'said.vtt'],
+      'The list of parts needs the columns number and name',
+    ],
+    [['captions', '--parts', 'parts.csv', 'parts.csv'], 'This is not a captions file'],
+    [['captions', '--parts', 'parts.csv', 'gone.vtt'], 'The file gone.vtt cannot be read.'],
+  ])('%j says what is wrong', (args, error) => {
+    const answer = run(...args);
+    expect(answer.ok ? '' : answer.error).toContain(error);
   });
 });

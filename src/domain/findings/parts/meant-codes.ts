@@ -43,7 +43,7 @@ export function judgeCode(speech: Speech, code: SpokenCode, named: boolean, foll
   const part = PART.test(b);
   if (part) {
     const bare = code.letters === 'none' && code.to - code.from <= 2;
-    const episode = EPISODE_BEHIND.test(a) || (bare && EPISODE_BEFORE.test(b));
+    const episode = EPISODE_BEHIND.test(a) || (bare && (EPISODE_BEFORE.test(b) || isGreeting(speech, code)));
     return episode && !named ? null : { rule: 'part and its number', sure: 0.97 };
   }
   if (named) return { rule: 'number beside its name', sure: 0.97 };
@@ -87,4 +87,14 @@ function judgeLetters(code: SpokenCode, b: string, a: string): Meant | null {
     default:
       return null;
   }
+}
+
+/** Captions at either end in which a maker says which episode it is. */
+const GREETING = 3;
+
+/** "It's part four" among the first or last captions is an episode. */
+function isGreeting(speech: Speech, code: SpokenCode): boolean {
+  const cue = speech.words[code.from]?.cue ?? 0;
+  const last = speech.words.at(-1)?.cue ?? 0;
+  return last > 4 * GREETING && (cue < GREETING || last - cue < GREETING);
 }

@@ -146,6 +146,21 @@ function plain(number: string): string {
     .replace(/[^\p{L}\p{N}]/gu, '');
 }
 
+/** Whether a part number may begin with a word; most words are settled here. */
+function mayBegin(word: string): boolean {
+  return (
+    word.length === 1 ||
+    /\d/.test(word) ||
+    SMALL.has(word) ||
+    TENS_WORDS.has(word) ||
+    ZEROS.has(word) ||
+    word in NAMED ||
+    word in SOUNDING ||
+    word === 'double' ||
+    word === 'triple'
+  );
+}
+
 interface State {
   readonly code: string;
   readonly to: number;
@@ -169,6 +184,7 @@ export function readCode(
   index: CodeIndex,
   glued: (index: number) => boolean,
 ): SpokenCode | null {
+  if (!mayBegin(words[at] ?? '')) return null;
   let best: SpokenCode | null = null;
   let states: State[] = [{ code: '', to: at, manner: { letters: 'none', digits: 'none' } }];
   // Each step takes a word or more; no part number is longer than its 24 characters.
@@ -225,8 +241,10 @@ function grow(
   };
   if (word === '') return grown;
   if (code !== '' && SEPARATORS.has(word)) {
-    for (const state of grow(words, { code, to: to + 1, manner: so }, glued)) grown.push(state);
-    return grown;
+    // An article has no dash behind it.
+    const dashed = so.letters === 'article' && /^(?:dash|hyphen|stroke|slash)$/.test(word);
+    const spoken = dashed ? { ...so, letters: 'written' as const } : so;
+    return grow(words, { code, to: to + 1, manner: spoken }, glued);
   }
   if (/^\d+$/.test(word)) add(word, 1, 'none', 'numeral');
   else if (/^\p{L}{1,3}\d[\p{L}\d]*$/u.test(word)) add(word.toUpperCase(), 1, 'written', 'numeral');

@@ -1,6 +1,6 @@
 import { saying } from './remark.ts';
 
-const PLAN = String.raw`(?:the |my |our |these |those |that )?(?:original |printed )?(?:drawings?|plans?|print|prints|blueprints?|sketch|cad|spec|specs|design|instructions|cut list|cutlist)(?:'s)?`;
+const PLAN = String.raw`(?:the |my |our |these |those |that )?(?:original |printed )?(?:drawings?|plans?|print|prints|blueprints?|sketch|layout|schematic|template|cad|spec|specs|design|instructions|cut list|cutlist)(?:'s)?`;
 const WORKED = String.raw`(?:used|using|use|gone|going|went|go|made|making|make|put|putting|fitted|fitting|fit|chose|chosen|cut|cutting|welded|welding|bolted|bolting|did|doing|do|done|screwed|glued|bought|turned|built|ended up|settled)`;
 const INSTEAD = String.raw`(?:but|and i'm|and i've|and i am|so i|so i've|i've (?:gone|used|made|put|cut|got|done|decided|turned|moved)|instead|however|i'm (?:using|going|putting|making|doing|fitting|calling|having)|i went|i used|i made|i put|i cut|we went|we're|we used|only i|except|which is (?:wrong|daft|stupid|nonsense|optimistic|silly|mad)|and that's (?:wrong|not|never)|nope|no chance|no thanks)`;
 const NOT_WORK =

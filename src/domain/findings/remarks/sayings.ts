@@ -30,7 +30,7 @@ export const UNDECIDED: readonly Saying[] = [
   ),
   saying(
     'do not know yet',
-    String.raw`(?:don't|do not|not) (?:\S+ ){0,2}?(?:know|sure|certain) yet|dunno (?:yet|which|what)|yet to be decided|to be decided|tbd|remains to be seen|don't know (?:yet )?(?:which|what) (?:\S+ ){0,3}?(?:to use|to do|to go|i'll|i'm|we'll|it'll)`,
+    String.raw`(?:don't|do not|not) (?:\S+ ){0,2}?(?:know|sure|certain) yet|dunno (?:yet|which|what)|yet to be decided|to be decided|tbd|(?:haven't|have not|hadn't|not) (?:a|the) (?:clue|foggiest)|still no idea|remains to be seen|don't know (?:yet )?(?:which|what) (?:\S+ ){0,3}?(?:to use|to do|to go|i'll|i'm|we'll|it'll)`,
     0.75,
     SEEN,
   ),
@@ -109,7 +109,7 @@ export const ASKS: readonly Saying[] = [
   ),
   saying(
     'what would you',
-    String.raw`(?:what|which|how|where) (?:would|do|should|did|one would|way would|way do|color would|colour would) you(?: guys| lot| all)? (?:do|use|think|go|make|pick|choose|reckon|prefer|call|put|fix|stop|solve|get|like|have)`,
+    String.raw`what(?:'s| is) your (?:take|view|vote|preference|favou?rite|guess|opinion|advice|thinking|way)|what are your thoughts|comments please|(?:what|which|how|where) (?:would|do|should|did|one would|way would|way do|color would|colour would) you(?: guys| lot| all)? (?:do|use|think|go|make|pick|choose|reckon|prefer|call|put|fix|stop|solve|get|like|have)`,
     0.65,
     /\b(?:you (?:think|make|like) (?:of that|i)|what do you think you)\b/,
   ),
@@ -131,7 +131,7 @@ export const ASKS: readonly Saying[] = [
 export const UNFILMED: readonly Saying[] = [
   saying(
     'off camera',
-    String.raw`off (?:the )?(?:camera|screen|film|cam)|camera(?:'s| was| is| being)? (?:off|switched off|turned off|not on|not running|wasn't on|wasn't running|dead|died|flat|charging|on charge|packed up|conked out|overheated|full)|without (?:the )?(?:camera|filming|you)|(?:with )?no camera|(?:away from|behind) the camera|not on camera|behind the scenes|between (?:videos|episodes|takes|shoots)`,
+    String.raw`off (?:the )?(?:camera|screen|film|cam)|camera(?:'s| was| is| being)? (?:off|switched off|turned off|not on|not running|wasn't on|wasn't running|dead|died|flat|charging|on charge|packed up|conked out|overheated|full)|without (?:the )?(?:camera|filming|you)|(?:with )?no camera|(?:had|has|borrowed) the camera|(?:away from|behind) the camera|not on camera|behind the scenes|between (?:videos|episodes|takes|shoots)`,
     0.9,
     /\b(?:turn(?:ed)? the camera off now|off camera (?:light|mic|angle))\b/,
   ),

@@ -22,6 +22,8 @@ export interface Worked {
   readonly claim: Claim | null;
   readonly torque: string | null;
   readonly pressure: string | null;
+  /** Where an electrode or a wire was last told of. */
+  readonly rod: number;
 }
 
 /** How far back, in words, a unit still counts as the one being worked in. Our own: about half a minute. */
@@ -36,7 +38,7 @@ const FEED = at('feed|feeds|feedrate|feeding');
 const CURRENT = at('amps|amperage|current|welder|machine');
 const VOLTS = at('volts|voltage');
 const TORQUE = at('torque|torques|torqued|torquing|torque wrench|torque them|torque it');
-const PRESSURE = at('pressure|relief|regulator|psi|compressor|gauge|relief valve|unloader');
+const PRESSURE = at('pressure|relief|regulator|psi|compressor|relief valve|unloader');
 const HEAT = at(
   'oven|kiln|preheat|preheated|temper|tempered|tempering|temperature|temp|thermostat|bake|baked|heat gun|quench oil|annealed?',
 );
@@ -56,8 +58,8 @@ const READ =
 const PLANNED =
   /\b(?:drawing|drawings|plan|plans|print|prints|sheet|spec|list|book|sketch|cad|model|instructions?)(?:'s)? (?:(?:says?|said|calls? for|shows?|wants?|wanted|asks? for|asked for|has|had|got|gives?|reads|called for|it at|them at|it as|it|them|only|clearly) )+(?:about |a |at |as )*$/;
 const DIAMETER =
-  /\b(?:wall|bore|diameter|thickness|width|height|depth|length|radius|pitch|spacing|offset|gap|od|id|throat|leg|overhang|reveal|kerf|centers|centres)(?:'s| is| was| of| at| should be| comes out at| came out at)(?: (?:about|a|at|only|just))* $/;
-const DEGREES = new Set([15, 22.5, 30, 45, 60]);
+  /\b(?:wall|bore|rise|run|drop|span|sweep|projection|stroke|throw|reach|diameter|thickness|width|height|depth|length|radius|pitch|spacing|offset|gap|od|id|throat|leg|overhang|reveal|kerf|centers|centres)(?:'s| is| was| of| at| should be| comes out at| came out at)(?: (?:about|a|at|only|just))* $/;
+const DEGREES = new Set([15, 22.5, 30, 45, 60, 90]);
 const ANGLED =
   /\b(?:cut|cuts|miter|mitre|mitered|mitred|bevel|beveled|bevelled|chamfer|chamfered|angle|angled|angles|fold|folded|bend|bent|tilt|tilted|saw|blade|lean|leaning|slope|taper|corners?|ends?|edges?|brace|countersink|ground)\b/;
 /** Lumber by its nominal size in inches: ASTM/ALSC PS 20 sections that yards keep. */
@@ -127,6 +129,13 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
   if (TORQUE.test(b)) return set('torque', worked.torque ?? (shop.units === 'in' ? 'ft-lb' : 'Nm'), 'torque');
   if (CURRENT.test(b) && value >= 20 && value <= 400 && !/\bmachined?\b.*\bto $/.test(b))
     return set('current', 'A', 'current');
+  if (
+    measure.from - worked.rod <= 4 &&
+    value >= 20 &&
+    value <= 400 &&
+    /\b(?:at|on|at about|on about|around|with) $/.test(b)
+  )
+    return set('current', 'A', 'current');
   if (VOLTS.test(b) && value < 60) return set('voltage', 'V', 'voltage');
   if (PRESSURE.test(b) && value >= 2)
     return set('pressure', worked.pressure ?? (shop.units === 'in' ? 'psi' : 'bar'), 'pressure');
@@ -155,7 +164,8 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
     shop.units === 'mm' &&
     value >= 3 &&
     SINGLE_STOCK.test(a) &&
-    /\b(?:a|the|solid|some|of|is|it's|in|from|off|old|this|that|that's|just|by) $/.test(b)
+    (/^(?:round|square|flat)\b/.test(a) ||
+      /\b(?:a|the|solid|some|of|is|it's|in|from|off|old|this|that|that's|just|by) $/.test(b))
   )
     return claim('stock by its size', 'mm');
   return isSize(b, a, measure, sized)
@@ -279,6 +289,7 @@ function isForty(measure: Measure, b: string, a: string, speech: Speech): boolea
   if (!FREE_BEHIND.test(a) && !/^(?:angle|miter|mitre|cut|bevel|chamfer|corner|on|each|both|either)/.test(a))
     return false;
   const forty = first.value.equals(45);
+  if (first.value.equals(90) && !/\b(?:bend|bent|fold|folded)\b/.test(lastWords(b, 6))) return false;
   if (forty && /\b(?:a|the|at a|those|two|some|with) $/.test(b) && !/\b(?:drill|gauge|calibre) $/.test(b))
     return true;
   void speech;

@@ -60,7 +60,7 @@ export const WEIGHED =
 
 /** Supply, and what is plugged into it. */
 export const SUPPLY =
-  /\b(?:breaker|breakers|fuse|fused|fuses|plug|socket|supply|circuit|outlet|outlets|rated|rating|draws?|pulls|contactor|relay|switch|starter|isolator|main|mains|battery|charger|alternator|solenoid|coil|phase|transformer|power supply|extension|cable|feed|rcd|panel|inverter|controller|driver|esc|motors?|steppers?|fans?|heater|pump|compressor)\b/;
+  /\b(?:breaker|breakers|mcb|rcbo|spur|fuse|fused|fuses|plug|socket|supply|circuit|outlet|outlets|rated|rating|draws?|pulls|contactor|relay|switch|starter|isolator|main|mains|battery|charger|alternator|solenoid|coil|phase|transformer|power supply|extension|cable|feed|rcd|panel|inverter|controller|driver|esc|motors?|steppers?|fans?|heater|pump|compressor)\b/;
 
 /** Somebody welds. */
 export const WELDING =

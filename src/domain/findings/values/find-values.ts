@@ -164,7 +164,7 @@ export function findValues(
   isPart: (word: number) => boolean,
 ): Claim[] {
   const claims: Claim[] = [];
-  let worked: Worked = { claim: null, torque: null, pressure: null };
+  let worked: Worked = { claim: null, torque: null, pressure: null, rod: Number.NEGATIVE_INFINITY };
   let grit = Number.NEGATIVE_INFINITY;
   const items = [...heard.measures, ...heard.named].sort((a, b) => a.from - b.from);
   for (const item of items) {
@@ -179,6 +179,7 @@ export function findValues(
         claim: claim.dimension === 'name' || claim.what === 'grit' ? worked.claim : claim,
         torque: claim.dimension === 'torque' ? unit : worked.torque,
         pressure: claim.dimension === 'pressure' ? unit : worked.pressure,
+        rod: claim.what === 'electrode' || claim.what === 'wire' ? claim.to : worked.rod,
       };
     }
   }
@@ -188,7 +189,25 @@ export function findValues(
     if (measure.dimension === 'grit' || isGrit(speech, measure, measure.from - grit <= ROW))
       return gritClaims(measure);
     if (measure.dimension === 'other') return [];
-    if (measure.dimension !== null) return present(classify(speech, measure, shop));
+    if (measure.dimension !== null) {
+      const claim = classify(speech, measure, shop);
+      const plate = claims.at(-1);
+      // "The twenty-four volt ones, three hundred kilo": more of a nameplate.
+      if (claim !== null || measure.dimension !== 'mass' || plate?.kind !== 'rating') return present(claim);
+      if (measure.from - plate.to > 3 || measure.terms.at(-1)?.plural === true) return [];
+      const values = measure.terms.map(({ value, unit }) => ({ value, unit: unit ?? '' }));
+      return [
+        {
+          from: measure.from,
+          to: measure.to,
+          kind: 'rating',
+          values,
+          dimension: 'mass',
+          rule: 'more of a nameplate',
+          sure: 0.6,
+        },
+      ];
+    }
     if (isPart(measure.from) || isPart(measure.to - 1)) return [];
     const last = claims.at(-1);
     const bare = classifyBare(speech, measure, shop, worked);

@@ -154,6 +154,10 @@ const BY_FIRST: ReadonlyMap<string, readonly Form[]> = (() => {
 /** Units of one letter are units only behind numerals: "240 v", not "two forty v". "a" and "m" never are. */
 const LETTERS: ReadonlySet<string> = new Set(['a', 'v', 'w', 'c', 'f']);
 
+/** Behind one of these a lone c or f is a scale of heat, unless it is the shape of a clamp or begins a number. */
+const TENS = /^(?:twenty|thirty|forty|fifty|sixty|seventy|eighty|ninety|hundred|.*teen|\d{2,})$/;
+const CLAMPS = /^(?:clamps?|sections?|channels?|\d.*|one|two|three|four|five|six|seven|eight|nine|ten)$/;
+
 /** The unit that begins at a word, the longest that fits. */
 export function readUnit(words: readonly string[], at: number, dialect: Dialect): SpokenUnit | null {
   const first = words[at] ?? '';
@@ -162,7 +166,10 @@ export function readUnit(words: readonly string[], at: number, dialect: Dialect)
   for (const form of BY_FIRST.get(first) ?? []) {
     if (!fits(form, words, at)) continue;
     if (form.words.length === 1 && LETTERS.has(first)) {
-      if (first === 'a' || !/^[\d.]+$/.test(words[at - 1] ?? '')) continue;
+      const numeral = /^[\d.]+$/.test(words[at - 1] ?? '');
+      const heat =
+        /^[cf]$/.test(first) && TENS.test(words[at - 1] ?? '') && !CLAMPS.test(words[at + 1] ?? '');
+      if (first === 'a' || !(numeral || heat)) continue;
     }
     if (first === 'mils' && dialect.mil === 'thou') return { ...mil(at, dialect), plural: true };
     return { unit: form.unit, dimension: form.dimension, to: at + form.words.length, plural: form.plural };

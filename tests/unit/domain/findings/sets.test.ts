@@ -7,7 +7,8 @@ import { scoreFindings } from '../../../support/captions/score-findings.ts';
 
 /**
  * Captions of other trades and voices. Each set was written and labelled before it was first read by the reader, by
- * the rules of the labelled sets that stand beside the project; words and labels are ours.
+ * the rules of the labelled sets that stand beside the project; a label that broke those rules was mended after.
+ * Words and labels are ours.
  */
 const folder = new URL('./sets/', import.meta.url);
 const sets = readdirSync(folder)
