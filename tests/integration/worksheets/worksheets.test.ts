@@ -2,9 +2,12 @@ import { beforeAll, describe, expect, test } from 'vitest';
 import { addStage } from '../../../src/features/builds/server/add-stage.ts';
 import { changeBuild } from '../../../src/features/builds/server/change-build.ts';
 import { makeBuild } from '../../../src/features/builds/server/make-build.ts';
+import { PartInput } from '../../../src/features/parts/part.ts';
+import { addPart } from '../../../src/features/parts/server/add-part.ts';
 import { addWorksheet } from '../../../src/features/worksheets/server/add-worksheet.ts';
 import { changeWorksheet } from '../../../src/features/worksheets/server/change-worksheet.ts';
 import { deleteWorksheet } from '../../../src/features/worksheets/server/delete-worksheet.ts';
+import { getBuildMass } from '../../../src/features/worksheets/server/get-build-mass.ts';
 import { getPublicWorksheet } from '../../../src/features/worksheets/server/get-public-worksheet.ts';
 import { listOwners } from '../../../src/features/worksheets/server/list-owners.ts';
 import { listPublicWorksheets } from '../../../src/features/worksheets/server/list-public-worksheets.ts';
@@ -141,4 +144,20 @@ describe('keeping, changing, deleting and bringing back a worksheet', () => {
     const { id } = await addWorksheet(shed.owner, { ...FIT, build });
     await expect(run(other.owner, id)).rejects.toThrow(NotFound);
   });
+});
+
+test('the mass of a build is that of the sections in its parts list', async () => {
+  await aBuild();
+  const bar = PartInput.parse({
+    number: '101',
+    name: 'rail',
+    kind: 'made',
+    quantity: 2,
+    material: '50 x 12 flat',
+    size: '1000 mm',
+  });
+  await addPart(shed.owner, { ...bar, build });
+  const mass = await getBuildMass(shed.editor, { build });
+  expect(mass.kg).toBeCloseTo(9.42, 2);
+  await expect(getBuildMass(other.owner, { build })).rejects.toThrow(NotFound);
 });
