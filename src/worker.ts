@@ -1,6 +1,7 @@
 import { audienceJobs } from './features/audience/jobs.ts';
 import { eraseDeletedJob, placeFootageJob } from './features/episodes/jobs.ts';
 import { fileJobs } from './features/files/jobs.ts';
+import { makeClipJob } from './features/footage/jobs.ts';
 import { questionJobs } from './features/questions/jobs.ts';
 import { sendInvitationJob } from './features/workshops/jobs.ts';
 import { liveUntilStopped, startProcess } from './process-life.ts';
@@ -12,6 +13,7 @@ import { type JobDefinition, workQueue } from './server/jobs/queue.ts';
 const JOBS: readonly JobDefinition[] = [
   sendInvitationJob,
   ...fileJobs,
+  makeClipJob,
   placeFootageJob,
   eraseDeletedJob,
   ...questionJobs,

@@ -25,6 +25,7 @@ import {
 } from './press-episodes.ts';
 import { addWorksheet } from '../features/worksheets/server/add-worksheet.ts';
 import { PRESS_WORKSHEETS } from './press-worksheets.ts';
+import { seedFootage } from './press-footage.ts';
 import { NOT_IN_PLANS, PRESS_PARTS, PRESS_STAGES } from './press-parts.ts';
 import { readMedia, takeIn } from './take-in.ts';
 
@@ -55,6 +56,7 @@ export async function seedPress({ owner, editor }: { owner: Context; editor: Con
   const fileIds = await seedFiles(owner);
   await seedDiary(owner, stageIds, fileIds);
   await seedWorksheets(owner, partIds);
+  await seedFootage(owner, BUILD);
   for (const episode of PRESS_EPISODES) {
     const ref = await seedEpisode(owner, episode, { partIds, fileIds });
     const { episode: draft } = await getDesk(owner, ref);

@@ -34,7 +34,7 @@ test('an owner and an editor take a build from a list of parts to a page that vi
   await makeBuildFromList(owner, workshop);
 
   const editor = await (await openBrowser(helper)).newPage();
-  await editor.goto(paths.footage(workshop, 'press'));
+  await editor.goto(paths.files(workshop, 'press'));
   const [first, second] = [testInfo.outputPath('first-cut.mp4'), testInfo.outputPath('second-cut.mp4')];
   await editor
     .getByLabel('Choose files…')

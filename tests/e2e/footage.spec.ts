@@ -64,7 +64,7 @@ test('a clip goes on after a lost connection and after a reload, and only what i
     return path;
   };
   const clip = await keep('card', await filmOf(40 * MiB));
-  await page.goto(`/bench/${owner.workshop}/${slug}/footage`);
+  await page.goto(`/bench/${owner.workshop}/${slug}/footage/files`);
   await page.getByLabel('Choose files…').setInputFiles(clip);
   const row = page.getByRole('list', { name: 'On their way' }).getByRole('listitem');
   await expect(row.getByText('32.0 MiB of 40.0 MiB')).toBeVisible();

@@ -30,7 +30,7 @@ test('an owner, a moderator and two viewers go from a list of parts and a video 
   await follower.getByRole('button', { name: 'Yes, mail me' }).click();
   await expect(follower.getByText('You are on the list.')).toBeVisible();
 
-  await owner.goto(paths.footage(workshop, 'press'));
+  await owner.goto(paths.files(workshop, 'press'));
   const film = await cutVideo(testInfo.outputPath('film.mp4'), 'testsrc2');
   await owner.getByLabel('Choose files…').setInputFiles(film);
   await expect(

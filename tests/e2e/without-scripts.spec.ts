@@ -83,7 +83,7 @@ test('without scripts an editor puts stages in order, sees the files, and takes 
   const stages = (await listStages(context, { build: BUILD })).items.map(({ name }) => name);
   expect(stages).toEqual(['Frame', 'Mill drum']);
 
-  await page.goto(paths.footage(owner.workshop, BUILD));
+  await page.goto(paths.files(owner.workshop, BUILD));
   await expect(page.getByRole('region', { name: 'Files' })).toContainText('episode.mp4');
 
   await page.goto(paths.episodes(owner.workshop, BUILD));

@@ -36,7 +36,7 @@ await aShownEpisode(owner, parts, video);
 const { id: episode } = await makeEpisode(owner, { build: BUILD, title: 'A draft' });
 const { id: stage } = await addStage(owner, { build: BUILD, name: 'Frame', about: '' });
 const clip = await aClip(owner, BUILD);
-const read = { frame: 0, at: '', shows: '', shopMs: 1, readBy: 'hand' } as const;
+const read = { frame: 0, moment: '', shows: '', shopMs: 1, readBy: 'hand' } as const;
 /** What is there, by its name in paths; anything else is an id of nothing. */
 const THERE: Readonly<Record<string, string>> = {
   workshop: slug,

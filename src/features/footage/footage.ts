@@ -127,6 +127,8 @@ export const TagClipsInput = z.object({
   ),
   stage: z.union([z.literal('keep'), z.literal('none'), id], 'Choose a stage.').default('keep'),
   parts,
+  /** The page that a plain form goes back to. */
+  back: z.string().max(400).default(''),
 });
 
 /** Sets when a clip began: at a wall time of the shop, or so many seconds later than now (earlier below zero). */
@@ -142,7 +144,7 @@ export const JoinClipInput = z.object({ before: id, version: buildVersion });
 /** A slate as it was read: in which frame, or at which clip time; and the shop time it showed. */
 export const AddSlateInput = z.object({
   frame: frame.optional(),
-  at: z.string().trim().max(40).default(''),
+  moment: z.string().trim().max(40).default(''),
   shopMs: z.int().min(0).max(9_999_999_999_999).optional(),
   shows: z.string().trim().max(40).default(''),
   readBy: z.enum(SLATE_READERS).default('hand'),

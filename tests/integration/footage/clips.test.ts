@@ -274,7 +274,7 @@ describe('a camera', () => {
       build,
       clip,
       frame: 50,
-      at: '',
+      moment: '',
       shows: '',
       shopMs,
       readBy: 'code',
@@ -286,9 +286,9 @@ describe('a camera', () => {
 
   test('reads a slate that was typed, and refuses what is no moment or no time', async () => {
     const clip = await aClip(shed.owner, build);
-    const typed = (at: string, shows: string) =>
-      addSlate(shed.owner, { build, clip, at, shows, readBy: 'hand' });
-    await expect(typed('2:00', '2026-11-02 14:22:09')).rejects.toHaveProperty('fields.at');
+    const typed = (moment: string, shows: string) =>
+      addSlate(shed.owner, { build, clip, moment, shows, readBy: 'hand' });
+    await expect(typed('2:00', '2026-11-02 14:22:09')).rejects.toHaveProperty('fields.moment');
     await expect(typed('0:02', 'noon')).rejects.toHaveProperty('fields.shows');
     await typed('0:02', '2026-11-02 14:22:10');
     expect(await beginnings()).toEqual({ 'C0001.MP4': '2026-11-02T14:22:08.000Z' });
@@ -323,7 +323,8 @@ describe('who may not', () => {
       joinClip: () => joinClip(who, { ...ref, before: clip }),
       partClip: () => partClip(who, ref),
       keepThumbnail: () => keepThumbnail(who, { build, clip, jpeg: '' }),
-      addSlate: () => addSlate(who, { build, clip, frame: 0, at: '', shows: '', shopMs: 1, readBy: 'hand' }),
+      addSlate: () =>
+        addSlate(who, { build, clip, frame: 0, moment: '', shows: '', shopMs: 1, readBy: 'hand' }),
       removeSlate: () => removeSlate(who, { build, clip, slate }),
     };
   };
@@ -335,7 +336,7 @@ describe('who may not', () => {
       build,
       clip,
       frame: 0,
-      at: '',
+      moment: '',
       shows: '',
       shopMs: 1,
       readBy: 'hand',

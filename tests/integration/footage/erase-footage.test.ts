@@ -21,7 +21,7 @@ const services = await storageServices();
 const { db } = services;
 const { owner, id: workshopId } = await aWorkshop(services);
 const after = (days: number) => eraseDeleted(services, new Date(Date.now() + days * 86_400_000));
-const slate = { frame: 0, at: '', shows: '', shopMs: 1, readBy: 'hand' } as const;
+const slate = { frame: 0, moment: '', shows: '', shopMs: 1, readBy: 'hand' } as const;
 const at = { clock: 'clip', frame: 1, rateNum: 25, rateDen: 1 } as const;
 
 async function aNote(buildId: string, clipId: string): Promise<void> {

@@ -209,7 +209,16 @@ export const PAGES: readonly PageState[] = [
   { route: 'bench/[workshop]/settings', as: owner, at: bench('/settings') },
   { route: 'bench/[workshop]/storage', as: owner, at: bench('/storage') },
   { route: 'bench/[workshop]/subscribers', as: owner, at: bench('/subscribers') },
-  { route: 'bench/[workshop]/[build]/footage', as: editor, at: inBuild(() => '/footage') },
+  { route: 'bench/[workshop]/[build]/footage/index', as: editor, at: inBuild(() => '/footage') },
+  { route: 'bench/[workshop]/[build]/footage/add', as: editor, at: inBuild(() => '/footage/add') },
+  { route: 'bench/[workshop]/[build]/footage/cameras', as: editor, at: inBuild(() => '/footage/cameras') },
+  { route: 'bench/[workshop]/[build]/footage/files', as: editor, at: inBuild(() => '/footage/files') },
+  {
+    route: 'bench/[workshop]/[build]/footage/clips/[clip]',
+    as: editor,
+    at: inBuild(({ clip }) => `/footage/clips/${clip}`),
+  },
+  { route: 'slate', at: () => paths.slate('Europe/London') },
   {
     route: 'bench/[workshop]/[build]/episodes/[episode]/preview',
     as: editor,

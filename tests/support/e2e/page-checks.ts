@@ -65,7 +65,7 @@ export function countStops(page: Page): Promise<number> {
   return page.evaluate(() => {
     // A grid is one stop, at the cell that would have the focus.
     const made = '[role=gridcell][tabindex="0"], [role=slider][tabindex="0"]';
-    const stops = `a[href], button, input:not([type=hidden]), select, textarea, summary, ${made}`;
+    const stops = `a[href]:not([tabindex="-1"]), button, input:not([type=hidden]), select, textarea, summary, ${made}`;
     const reached = [...document.querySelectorAll(stops)].filter(
       (stop) => stop.checkVisibility() && !stop.matches(':disabled'),
     );

@@ -10,6 +10,7 @@ import { addPart } from '../../../src/features/parts/server/add-part.ts';
 import { LIST, NEXT_LIST, takeList } from '../edits.ts';
 import { addSubscribers, tokensOf } from '../audience.ts';
 import { inWorkshop, type TestPerson } from '../people.ts';
+import { filmADay } from '../footage.ts';
 import { ask } from '../questions.ts';
 import { addWorksheet } from '../../../src/features/worksheets/server/add-worksheet.ts';
 import { type Owner, type Product } from './product.ts';
@@ -33,6 +34,8 @@ export interface World {
   /** One that is risky and answered by the owner, and one that waits. */
   readonly question: string;
   readonly waiting: string;
+  /** Of a day with two cameras and a gap. */
+  readonly clip: string;
   /** One for everyone. */
   readonly worksheet: string;
 }
@@ -95,6 +98,7 @@ export async function makeWorld(product: Product): Promise<World> {
   const text = '**No.** It is drawn for 8, and I did the sums for 8 only.';
   await answerQuestion(context, { question, text, send: 'answer', version: 0 });
   const waiting = await ask(asking, { ...asked, text: 'Which glue holds the slats?' });
+  const clip = await filmADay(context, build);
   const { id: worksheet } = await addWorksheet(context, {
     build,
     sheet: 'ram',
@@ -120,6 +124,7 @@ export async function makeWorld(product: Product): Promise<World> {
     invitation,
     build,
     part,
+    clip,
     episode,
     question,
     waiting,

@@ -11,14 +11,14 @@ import { type ClipRef, loadClip, type StoredClip } from './load-clip.ts';
 
 /**
  * Keeps a clock slate that was read in a clip; every clip of its camera is timed anew.
- * @throws Invalid at `at` for a moment outside of the clip, at `shows` for what is no time of the shop
+ * @throws Invalid at `moment` for a moment outside of the clip, at `shows` for what is no time of the shop
  */
 export const addSlate = verb({ may: 'footage.change' }, async (context, input: AddSlate & ClipRef) => {
   const { db, workshop } = context;
   const clip = await loadClip(context, input);
-  const frame = input.frame ?? frameAt(clip, input.at);
+  const frame = input.frame ?? frameAt(clip, input.moment);
   if (clip.frames !== null && frame >= clip.frames)
-    throw new Invalid({ at: 'That is after the end of the clip.' });
+    throw new Invalid({ moment: 'That is after the end of the clip.' });
   const shopMs = input.shopMs ?? instantOfWall(workshop.timeZone, input.shows);
   if (shopMs === null) throw new Invalid({ shows: 'Write what the slate shows: 2026-11-02 14:22:07.4.' });
   const id = newId();
@@ -36,7 +36,7 @@ export const addSlate = verb({ may: 'footage.change' }, async (context, input: A
 
 function frameAt({ rateNum, rateDen, frameTimes }: StoredClip, text: string): number {
   const seconds = parseClock(text);
-  if (!seconds.ok) throw new Invalid({ at: `The moment of the clip: ${seconds.error}` });
+  if (!seconds.ok) throw new Invalid({ moment: `The moment of the clip: ${seconds.error}` });
   if (frameTimes === null) return secondsToFrame(seconds.value, { num: rateNum, den: rateDen });
   return Math.max(
     0,

@@ -41,7 +41,7 @@ export function editByIds(of: {
 }
 
 /** The seconds since a clip's first frame at which one of its frames begins: by its timestamps, where it has them. */
-function secondsOn(clip: LoadedClip | undefined, frame: number, rate: Rate): Fraction {
+export function secondsOn(clip: LoadedClip | undefined, frame: number, rate: Rate): Fraction {
   const at = clip && sameRate(rate, clip.rate) ? clip.frameTimes?.[frame] : undefined;
   return at === undefined ? new Fraction(frame).div(rateOf(rate)) : new Fraction(at).div(1000);
 }

@@ -45,7 +45,7 @@ export async function loadStandingNoteAt(...asked: Parameters<typeof loadNoteAt>
 }
 
 /** What is asked of one person is for them, who asked, and the owner. */
-function maySee({ actor, role }: WorkshopContext, note: typeof notes.$inferSelect): boolean {
+export function maySee({ actor, role }: WorkshopContext, note: typeof notes.$inferSelect): boolean {
   if (note.audience !== 'person' || role === 'owner') return true;
   return actor.kind === 'account' && (note.askedId === actor.id || note.writtenBy === actor.id);
 }

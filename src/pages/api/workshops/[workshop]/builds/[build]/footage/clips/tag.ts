@@ -10,7 +10,12 @@ export const POST = apiRoute({
   body: TagClipsInput,
   answer: TaggedClips,
   form: {
-    page: ({ workshop, build }) => paths.footage(workshop, build),
-    done: (_, { workshop, build }) => paths.footage(workshop, build),
+    page: ({ workshop, build }, { back = '' }) => within(paths.footage(workshop, build), back),
+    done: (_, { workshop, build, back }) => within(paths.footage(workshop, build), back),
   },
 });
+
+/** A page of the footage, and no other place. */
+function within(footage: string, back: string): string {
+  return back.startsWith(`${footage}?`) ? back : footage;
+}
