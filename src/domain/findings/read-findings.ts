@@ -35,7 +35,7 @@ export function readFindings(
   const mentions = findParts(speech, index, (word) => heard.taken.has(word));
   const spoken = new Set<number>();
   for (const { from, to } of mentions) for (let word = from; word < to; word++) spoken.add(word);
-  const shop = readShop(speech, heard.measures, heard.named, dialect);
+  const shop = readShop(heard.measures, heard.named, dialect);
   const claims = findValues(speech, heard, shop, (word) => spoken.has(word));
   const remarks = [
     ...findRemarks(speech, 'change', CHANGES, 20),

@@ -4,6 +4,7 @@ import { type Speech, phrase } from '../speech/speech.ts';
 import { hearNames, type HeardName, stemsOf } from './heard-names.ts';
 import { indexNames, type NameIndex } from './listed-names.ts';
 import { judgeCode } from './meant-codes.ts';
+import { stem } from './stem.ts';
 import { type CodeIndex, indexCodes, readCode, type SpokenCode } from './spoken-codes.ts';
 
 /** A part that is spoken of. */
@@ -27,9 +28,15 @@ export function indexParts(parts: readonly ListedPart[]): PartIndex {
   return { names: indexNames(parts), codes: indexCodes(parts) };
 }
 
-/** Where a part number ends that begins at a word with a letter that is no other word; null where none begins. */
+/** Where a part number ends that begins at a word, by a letter that is no other word or beside its name; else null. */
 export function letteredCode(speech: Speech, word: number, index: PartIndex): number | null {
   const code = readCode(speech.texts, word, index.codes, (at) => speech.words[at]?.glued === true);
+  if (code?.letters === 'none') {
+    // "The hinge tubes two oh six": the number of what was just named.
+    const own = index.names.wordsOf.get(code.part)?.has(stem(speech.texts[word - 1] ?? '')) === true;
+    const readOut = code.digits === 'read-out' || code.digits === 'numeral';
+    return own && readOut && code.part.length >= 3 ? code.to : null;
+  }
   const lettered =
     code !== null && (code.letters === 'written' || code.letters === 'named') && code.digits !== 'none';
   return lettered && code.digits !== 'sounds' ? code.to : null;

@@ -68,7 +68,9 @@ export function isOutside(speech: Speech, name: ListedName, from: number, to: nu
       ))
   )
     return true;
-  return isVerb(speech, previous, next, isPlural(whole), from, to);
+  // The caption before may have ended on anything.
+  const beside = speech.words[from - 1]?.cue === speech.words[from]?.cue ? previous : '';
+  return isVerb(speech, beside, next, isPlural(whole), from, to);
 }
 
 function isSomebody(word: string): boolean {

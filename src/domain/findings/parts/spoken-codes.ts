@@ -203,8 +203,7 @@ export function readCode(
   return best;
 }
 
-function manner({ manner: { letters, digits }, to, code }: State): CodeManner {
-  void to;
+function manner({ manner: { letters, digits }, code }: State): CodeManner {
   // A single number word is plain; several digits one by one are read out.
   return {
     letters,

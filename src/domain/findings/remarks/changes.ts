@@ -84,6 +84,12 @@ export const CHANGES = [
     0.65,
   ),
   saying(
+    'figure on the plan, but',
+    `(?:says?|said|shows?|it's|was|were|is|are) (?:\\S+ ){1,6}?(?:on|in) ${PLAN} (?:\\S+ ){0,3}?(?:but|i've|so i|and i)`,
+    0.7,
+  ),
+  saying('got more', String.raw`got (?:bumped|upped|upgraded|beefed up|upsized) (?:up )?to`, 0.6),
+  saying(
     'changed',
     String.raw`(?:i've|i have|we've|i) (?:had to change|changed|altered|modified|redesigned|redrawn|redrew|swapped|moved|upgraded|beefed up|upsized|downsized) (?:the|this|that|it|these|those|my|how|where|from|them|my mind)`,
     0.7,

@@ -42,7 +42,7 @@ export const UNDECIDED: readonly Saying[] = [
   ),
   saying(
     'in two minds',
-    String.raw`(?:in|of) two minds|on the fence (?:about|on|over|whether|with|between|here|still)|still on the fence|toss up|tossing up|jury(?:'s| is) (?:still )?out|coin (?:toss|flip)|flip a coin|toss a coin|up in the air|open question|undecided|could go either way|fifty fifty|can't choose|sleep on (?:it|that)|have a think|need to think|thinking about it|chew on (?:it|that)|mull\w*(?: that| it)? over`,
+    String.raw`(?:in|of) two minds|(?:keep|kept|keeps) (?:on )?changing (?:my|our) minds?|on the fence (?:about|on|over|whether|with|between|here|still)|still on the fence|toss up|tossing up|jury(?:'s| is) (?:still )?out|coin (?:toss|flip)|flip a coin|toss a coin|(?:still|all|bit) up in the air|open question|undecided|could go either way|fifty fifty|can't choose|sleep on (?:it|that)|have a think|need to think|thinking about it|chew on (?:it|that)|mull\w*(?: that| it)? over`,
     0.75,
     /\b(?:chuck|hang|throw|lift|arms?) (?:\S+ )?up in the air\b/,
   ),
@@ -131,7 +131,7 @@ export const ASKS: readonly Saying[] = [
 export const UNFILMED: readonly Saying[] = [
   saying(
     'off camera',
-    String.raw`off (?:the )?(?:camera|screen|film|cam)|camera(?:'s| was| is| being)? (?:off|switched off|turned off|not on|not running|wasn't on|wasn't running|dead|died|flat|charging|on charge|packed up|conked out|overheated|full)|without (?:the )?(?:camera|filming|you)|(?:with )?no camera|(?:had|has|borrowed) the camera|(?:away from|behind) the camera|not on camera|behind the scenes|between (?:videos|episodes|takes|shoots)`,
+    String.raw`off (?:the )?(?:camera|screen|film|cam)|camera(?:'s| was| is| being)? (?:off|switched off|turned off|not on|not running|wasn't on|wasn't running|dead|died|flat|charging|on charge|packed up|conked out|overheated|full)|without (?:the )?(?:camera|filming|you)|(?:with )?no camera|(?:had|has|borrowed) the camera|(?:didn't|couldn't|never|forgot to) (?:\S+ ){1,3}?(?:the |my )camera|(?:away from|behind) the camera|not on camera|behind the scenes|between (?:videos|episodes|takes|shoots)`,
     0.9,
     /\b(?:turn(?:ed)? the camera off now|off camera (?:light|mic|angle))\b/,
   ),
@@ -189,7 +189,7 @@ export const ARRIVALS: readonly Saying[] = [
   ),
   saying(
     'in the post',
-    String.raw`(?:got|had|received|picked up) (?:\S+ ){0,5}?(?:in the (?:post|mail) (?:today|yesterday|this|finally|from)|back from the (?:galvani[sz]er|galvani[sz]ers|laser|machine shop|foundry|powder coater|plater|platers|heat treat\w*|sharpener|rewinder))|(?:is|are|'s|came|come) back from (?:the )?(?:galvani\w+|laser\w*|machine shop|foundry|powder\w*|plat\w+|heat treat\w*|anodi\w+|grinder'?s?|blaster\w*)`,
+    String.raw`(?:came|turned up|arrived) (?:\S+ ){0,6}?(?:wrong|broken|damaged|bent|cracked|dinged)|(?:got|had|received|picked up) (?:\S+ ){0,5}?(?:in the (?:post|mail) (?:today|yesterday|this|finally|from)|back from the (?:galvani[sz]er|galvani[sz]ers|laser|machine shop|foundry|powder coater|plater|platers|heat treat\w*|sharpener|rewinder))|(?:is|are|'s|came|come) back from (?:the )?(?:galvani\w+|laser\w*|machine shop|foundry|powder\w*|plat\w+|heat treat\w*|anodi\w+|grinder'?s?|blaster\w*)`,
     0.7,
   ),
 ];

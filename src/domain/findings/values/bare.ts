@@ -72,7 +72,13 @@ const COUNTED_TURNS =
   /^(?:turn|turns|of the (?:way|time|people|batch)|way|way through|full|the|of my|of you|of us|of them|of it|an hour|a mile|a minute|a second|past|price|day|mile|dozen|million|decent|done|finished|moon|pipe|cup|asleep|dead|expect\w*|thought|hoping|a day|a dozen|a chance)\b/;
 
 /** A number without a unit as a finding, where what stands beside it says what it is. */
-export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worked: Worked): Claim | null {
+export function classifyBare(
+  speech: Speech,
+  measure: Measure,
+  shop: Shop,
+  worked: Worked,
+  isPart: (word: number) => boolean,
+): Claim | null {
   const [first] = measure.terms;
   if (first === undefined) return null;
   const b = `${before(speech, measure.from, 10)} `;
@@ -101,7 +107,11 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
     ? wireSize(first.value, speech.texts[first.from] ?? '')
     : null;
   if (wire !== null) return { ...set('wire', wire.unit, 'length'), values: [wire] };
-  if (ROD_MM.includes(value) && /^(?:welding )?(?:rods?|electrodes?|sticks?)\b/.test(a) && WELDING.test(b))
+  if (
+    ROD_MM.includes(value) &&
+    /^(?:welding )?(?:rods?|electrodes?|sticks?)\b/.test(a) &&
+    (WELDING.test(b) || /^(?:welding )?(?:rods|electrodes)\b/.test(a))
+  )
     return set('electrode', 'mm', 'length');
   if (first.form === 'fraction' || first.form === 'mixed') return inchFraction(measure, b, a, shop, claim);
   const split = fractionWritten(speech.texts[first.from] ?? '');
@@ -112,7 +122,7 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
     (free || WAY_BEHIND.test(a) || STOCK_BEHIND.test(a))
   )
     return { ...claim('written fraction', 'in'), values: [{ value: split, unit: 'in' }] };
-  if (isForty(measure, b, a, speech)) return claim('bare angle', 'deg', { dimension: 'angle' });
+  if (isForty(measure, b, a)) return claim('bare angle', 'deg', { dimension: 'angle' });
   const earlier = worked.claim;
   const ends = free || next === undefined || next.cue !== speech.words[measure.to - 1]?.cue;
   if (
@@ -120,9 +130,36 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
     earlier.kind !== 'rating' &&
     ends &&
     measure.from - earlier.to <= 3 &&
-    /\b(?:and then|then|and then a) $/.test(b)
+    /\b(?:and then|then|and then a|every) $/.test(b)
   )
     return followed(earlier, claim);
+  if (first.form === 'decimal' && STOCK_BEHIND.test(a)) return claim('stock by its thickness', shop.units);
+  if (
+    /^(?:on|in) (?:the|my) (?:drawing|plan|plans|print|sheet)s?\b/.test(a) &&
+    /\b(?:says|said|shows|it's|is|was|were) (?:about )?$/.test(b)
+  )
+    return claim('figure of the plan', unitNear(measure, shop, worked, true));
+  if (
+    shop.units === 'mm' &&
+    value >= 3 &&
+    SINGLE_STOCK.test(a) &&
+    (/^(?:round|square|flat)\b/.test(a) ||
+      /\b(?:a|the|solid|some|of|is|it's|in|from|off|old|this|that|that's|just|by) $/.test(b))
+  )
+    return claim('stock by its size', 'mm');
+  if (
+    shop.units === 'mm' &&
+    value >= 3 &&
+    SINGLE_STOCK.test(a) &&
+    (/^(?:round|square|flat)\b/.test(a) ||
+      /\b(?:a|the|solid|some|of|is|it's|in|from|off|old|this|that|that's|just|by) $/.test(b))
+  )
+    return claim('stock by its size', 'mm');
+  // "The flow pipe's twenty two", where sizes are called in millimetres.
+  const said = /'s$/.test(speech.texts[measure.from - 1] ?? '') && isPart(measure.from - 1);
+  const is = /^(?:is|are)$/.test(speech.texts[measure.from - 1] ?? '') && isPart(measure.from - 2);
+  if ((said || is) && ends && shop.units === 'mm' && (first.form === 'decimal' || value >= 5))
+    return claim('a part is so much', 'mm', { sure: 0.55 });
   if (!free && !WAY_BEHIND.test(a)) return null;
   if (FEED.test(b) && value < 5) return set('feed', 'mm/rev', 'feed');
   if (SPEED.test(b) && value >= 50) return set('speed', 'rpm', 'turning');
@@ -160,14 +197,7 @@ export function classifyBare(speech: Speech, measure: Measure, shop: Shop, worke
     /\b(?:and|then|or|but) $/.test(b)
   )
     return followed(last, claim);
-  if (
-    shop.units === 'mm' &&
-    value >= 3 &&
-    SINGLE_STOCK.test(a) &&
-    (/^(?:round|square|flat)\b/.test(a) ||
-      /\b(?:a|the|solid|some|of|is|it's|in|from|off|old|this|that|that's|just|by) $/.test(b))
-  )
-    return claim('stock by its size', 'mm');
+
   return isSize(b, a, measure, sized)
     ? claim('bare size', unitNear(measure, shop, worked, PLANNED.test(b)))
     : null;
@@ -226,7 +256,7 @@ function isSize(b: string, a: string, measure: Measure, sized: boolean): boolean
   return (
     first.value.compare(3) > 0 &&
     WAY_BEHIND.test(a) &&
-    /^(?:long|longer|shorter|wider|thicker|taller|deeper|higher|lower|oversize|undersize|wide|tall|high|deep|thick|across|apart|diameter|dia|square|centers|centres|on cent|wall|bore|overall|in diameter|radius|outside diameter|inside diameter)\b/.test(
+    /^(?:long|longer|shorter|wider|thicker|taller|deeper|higher|lower|oversize|undersize|above|below|wide|tall|high|deep|thick|across|apart|diameter|dia|square|centers|centres|on cent|wall|bore|overall|in diameter|radius|outside diameter|inside diameter)\b/.test(
       a,
     )
   );
@@ -283,7 +313,7 @@ function inchFraction(
 }
 
 /** "A forty five on the end", "at 45". */
-function isForty(measure: Measure, b: string, a: string, speech: Speech): boolean {
+function isForty(measure: Measure, b: string, a: string): boolean {
   const [first] = measure.terms;
   if (first === undefined || measure.terms.length > 1 || !DEGREES.has(first.value.valueOf())) return false;
   if (!FREE_BEHIND.test(a) && !/^(?:angle|miter|mitre|cut|bevel|chamfer|corner|on|each|both|either)/.test(a))
@@ -292,7 +322,6 @@ function isForty(measure: Measure, b: string, a: string, speech: Speech): boolea
   if (first.value.equals(90) && !/\b(?:bend|bent|fold|folded)\b/.test(lastWords(b, 6))) return false;
   if (forty && /\b(?:a|the|at a|those|two|some|with) $/.test(b) && !/\b(?:drill|gauge|calibre) $/.test(b))
     return true;
-  void speech;
   return (
     /\b(?:at|to|at a|to a|at about|up to|over to) $/.test(b) &&
     ANGLED.test(lastWords(b, 8)) &&

@@ -64,7 +64,9 @@ export function classify(speech: Speech, measure: Measure, shop: Shop): Claim | 
     case 'power':
       return claim('rating', 'power');
     case 'pressure':
-      return context.RATED.test(lastWords(b, 5)) || !context.SET.test(`${b}${firstWords(a, 5)}`)
+      return context.RATED.test(lastWords(b, 5)) ||
+        /\bsafety valve\b/.test(lastWords(b, 5)) ||
+        !context.SET.test(`${b}${firstWords(a, 5)}`)
         ? claim('rating', 'rated pressure')
         : claim('setting', 'pressure', { what: 'pressure' });
     case 'flow':
@@ -107,11 +109,16 @@ function classifyLength(speech: Speech, measure: Measure, b: string, a: string, 
     return claim('setting', 'wire diameter', { what: 'wire' });
   if (first.unit === 'm' && /^(?:a|per) (?:minute|second|min)/.test(a)) return null;
   if (context.TOOL_BEHIND.test(a)) return null;
-  if (context.OUTSIDE_BEFORE.test(b) || context.OUTSIDE_BEHIND.test(a)) return null;
+  if (
+    context.OUTSIDE_BEHIND.test(a) ||
+    (context.OUTSIDE_BEFORE.test(b) && !/^(?:long|wide|deep|thick|across|diameter)\b/.test(a))
+  )
+    return null;
   if (first.form === 'article' && !context.WAY_BEHIND.test(a) && !context.STOCK_BEHIND.test(a)) return null;
   // Six foot two is somebody's height unless something is measured.
   if (
     isHeight(speech, measure) &&
+    !/^(?:long|wide|deep|thick|across)\b/.test(a) &&
     /\b(?:he|she|who|tall|lad|kid|brother|sister|guy|bloke|fella|man)\b/.test(`${b}${a}`)
   )
     return null;
@@ -198,7 +205,7 @@ function isLifter(measure: Measure, b: string): boolean {
   const named = measure.terms.at(-1)?.plural === false;
   return (
     named &&
-    /\b(?:slides?|runners?|hoist|winch|jack|slings?|shackles?|chain|castors?|casters?|struts?|magnets?|straps?)\b/.test(
+    /\b(?:slides?|runners?|hoist|winch|jack|slings?|shackles?|chain|castors?|casters?|struts?|magnets?|straps?|axles?)\b/.test(
       lastWords(b, 9),
     )
   );

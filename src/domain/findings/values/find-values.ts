@@ -210,7 +210,7 @@ export function findValues(
     }
     if (isPart(measure.from) || isPart(measure.to - 1)) return [];
     const last = claims.at(-1);
-    const bare = classifyBare(speech, measure, shop, worked);
+    const bare = classifyBare(speech, measure, shop, worked, isPart);
     if (bare !== null) return [bare];
     // "Eighty mil, sorry, eighteen".
     const gap = last === undefined || measure.from - last.to > 4 ? '' : phrase(speech, last.to, measure.from);

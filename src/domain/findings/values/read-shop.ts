@@ -1,15 +1,9 @@
 import { type Dialect } from '../finding.ts';
-import { type Speech } from '../speech/speech.ts';
 import { type Claim, type Shop } from './claim.ts';
 import { type Measure } from './measures.ts';
 
 /** How the maker measures: as told, else the units most of the sizes are in. */
-export function readShop(
-  speech: Speech,
-  measures: readonly Measure[],
-  named: readonly Claim[],
-  dialect: Dialect,
-): Shop {
+export function readShop(measures: readonly Measure[], named: readonly Claim[], dialect: Dialect): Shop {
   const mil = dialect.mil ?? 'mm';
   if (dialect.units !== undefined) return { units: dialect.units, mil };
   let metric = 0;
@@ -24,6 +18,5 @@ export function readShop(
       else if (unit === 'psi' || unit === 'ft-lb' || unit === 'F') inch += 0.5;
     }
   for (const { values } of named) if (/^M/.test(String(values[0]?.value))) metric += 0.5;
-  void speech;
   return { units: inch > metric ? 'in' : 'mm', mil };
 }
