@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { memo, useState } from 'react';
 import { Balloon } from '../../../../components/Balloon.tsx';
 import { Button } from '../../../../components/Button.tsx';
 import { Combobox } from '../../../../components/Combobox.tsx';
@@ -6,13 +6,14 @@ import { NO_MARKS, stretchOf } from './composer-draft.ts';
 import { shown } from './desk-state.ts';
 import { placeAt, sayPlace } from './moment.ts';
 import { SavedMark } from './SavedMark.tsx';
-import { useDesk } from './use-desk.ts';
+import { useDesk, useDeskState } from './use-desk.ts';
 
 export const BENCH_PART = 'bench-part';
 
 /** Parts put on the bench by hand, beside those that notes name. */
-export function BenchPanel() {
-  const { data, clock, state, marks, setMarks, add, remove, sending, stalled } = useDesk();
+export const BenchPanel = memo(function BenchPanel() {
+  const { data, clock, marks, setMarks, add, remove, sending, stalled } = useDesk();
+  const state = useDeskState();
   const [partId, setPartId] = useState('');
   const [round, setRound] = useState(0);
   const rows = shown(state, 'appearance');
@@ -99,4 +100,4 @@ export function BenchPanel() {
       </div>
     </section>
   );
-}
+});

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { Button } from '../../../../components/Button.tsx';
 import { INPUT_LOOK } from '../../../../components/FieldFrame.tsx';
 import { formatClock } from '../../../../domain/time/format-clock.ts';
@@ -8,11 +9,12 @@ import { type Row } from './desk-rows.ts';
 import { shown } from './desk-state.ts';
 import { movedTo, placeAt } from './moment.ts';
 import { SavedMark } from './SavedMark.tsx';
-import { useDesk } from './use-desk.ts';
+import { useDesk, useDeskState } from './use-desk.ts';
 
 /** The chapters, each renamed where it stands. */
-export function ChapterPanel({ onAdd }: { readonly onAdd: () => void }) {
-  const { state, data } = useDesk();
+export const ChapterPanel = memo(function ChapterPanel({ onAdd }: { readonly onAdd: () => void }) {
+  const { data } = useDesk();
+  const state = useDeskState();
   const rows = shown(state, 'chapter');
   return (
     <section id="chapters" aria-labelledby="chapters-title" className="border border-line bg-sheet">
@@ -39,7 +41,7 @@ export function ChapterPanel({ onAdd }: { readonly onAdd: () => void }) {
       )}
     </section>
   );
-}
+});
 
 function ChapterLine({ row }: { readonly row: Row<'chapter'> }) {
   const { clock, data, edit, leave, remove, sending, stalled } = useDesk();

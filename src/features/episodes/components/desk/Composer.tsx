@@ -4,7 +4,7 @@ import { joinClasses } from '../../../../components/join-classes.ts';
 import { isBegun, NO_MARKS, placeOfDraft, stretchOf } from './composer-draft.ts';
 import { formatMoment } from './moment.ts';
 import { NoteFields } from './NoteFields.tsx';
-import { useClock, useDesk } from './use-desk.ts';
+import { useClock, useDesk, useDeskDraft } from './use-desk.ts';
 
 export const COMPOSER = 'new-note';
 
@@ -16,7 +16,8 @@ type ComposerProps = {
 
 /** A new note, at the moment on screen or from in to out. */
 export function Composer({ open, onClose }: ComposerProps) {
-  const { data, clock, draft, setDraft, marks, setMarks, saveDraft, stalled } = useDesk();
+  const { data, clock, setDraft, marks, setMarks, stalled } = useDesk();
+  const { draft, saveDraft } = useDeskDraft();
   const [tried, setTried] = useState(false);
   const now = useClock(clock, (one) => one.now());
   const place = placeOfDraft(draft, marks, now, clock.rate);

@@ -1,4 +1,4 @@
-import { useEffect, useRef } from 'react';
+import { memo, useEffect, useRef } from 'react';
 import { SteelRule } from '../../../../components/SteelRule.tsx';
 import { appearancesFromNotes } from '../../../../domain/appearances/appearances-from-notes.ts';
 import { partsAt } from '../../../../domain/appearances/parts-at.ts';
@@ -8,12 +8,13 @@ import { type DeskData } from './desk-data.ts';
 import { shown } from './desk-state.ts';
 import { formatMoment, placeAt } from './moment.ts';
 import { ruleLength } from './rule-length.ts';
-import { useClock, useDesk } from './use-desk.ts';
+import { useClock, useDesk, useDeskState } from './use-desk.ts';
 import { useRuleSlider } from './use-rule-slider.ts';
 
 /** The episode's time as a steel rule that seeks: by click, by drag, by tap, and by keys on its face. */
-export function DeskRule() {
-  const { data, clock, state, mark } = useDesk();
+export const DeskRule = memo(function DeskRule() {
+  const { data, clock, mark } = useDesk();
+  const state = useDeskState();
   const place = useRef<HTMLDivElement>(null);
   const known = useClock(clock, (one) => one.length());
   const { rate } = clock;
@@ -77,7 +78,7 @@ export function DeskRule() {
       />
     </div>
   );
-}
+});
 
 function balloonsOf(
   appearances: readonly { readonly partId: string; readonly from: number }[],

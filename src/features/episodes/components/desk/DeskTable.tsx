@@ -1,4 +1,4 @@
-import { type ReactNode, useEffect, useRef, useState } from 'react';
+import { type ReactNode, useCallback, useEffect, useRef, useState } from 'react';
 import { Button } from '../../../../components/Button.tsx';
 import { Notice } from '../../../../components/Notice.tsx';
 import { BENCH_PART, BenchPanel } from './BenchPanel.tsx';
@@ -15,7 +15,8 @@ import { NoteList } from './NoteList.tsx';
 import { NotInEdit } from './NotInEdit.tsx';
 import { runCommand } from './run-command.ts';
 import { Transport } from './Transport.tsx';
-import { type Desk, DeskProvider } from './use-desk.ts';
+import { DeskProvider } from './DeskProvider.tsx';
+import { type Desk } from './use-desk.ts';
 import { useDeskKeys } from './use-desk-keys.ts';
 import { useDeskTable } from './use-desk-table.ts';
 import { usePlayer } from './use-player.ts';
@@ -29,7 +30,7 @@ type DeskTableProps = {
 
 /** The desk at work: rule, video, composer, notes, chapters and bench, with every key. */
 export function DeskTable({ data, video }: DeskTableProps) {
-  const desk = useDeskTable(data);
+  const { tools, desk, said } = useDeskTable(data);
   const { clock } = desk;
   const place = useRef<HTMLDivElement>(null);
   const [sheet, setSheet] = useState(false);
@@ -43,15 +44,16 @@ export function DeskTable({ data, video }: DeskTableProps) {
     if (wanted === null) return;
     document.getElementById(wanted.split(' ')[0] ?? '')?.focus();
   }, [wanted]);
-  const focus = (id: string) => {
+  const focus = useCallback((id: string) => {
     setWanted(`${id} ${String(performance.now())}`);
-  };
+  }, []);
 
-  function addChapter(): void {
+  const { add } = tools;
+  const addChapter = useCallback(() => {
     const position = { frame: clock.now(), endFrame: null, rate: clock.rate };
     clock.player()?.pause();
-    focus(`chapter-${desk.add('chapter', { title: '', position })}`);
-  }
+    focus(`chapter-${add('chapter', { title: '', position })}`);
+  }, [add, clock, focus]);
 
   function openComposer(): void {
     setSheet(true);
@@ -75,7 +77,7 @@ export function DeskTable({ data, video }: DeskTableProps) {
   });
 
   return (
-    <DeskProvider value={desk}>
+    <DeskProvider desk={desk} tools={tools}>
       <div className="grid gap-4 pb-16 lg:pb-0">
         {desk.stalled && (
           <Notice tone="error" live title="No connection.">
@@ -86,7 +88,7 @@ export function DeskTable({ data, video }: DeskTableProps) {
         <Transport />
         <DeskActions
           desk={desk}
-          said={desk.said}
+          said={said}
           onKeys={() => {
             setKeys(true);
           }}

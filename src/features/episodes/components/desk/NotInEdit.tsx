@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { useState } from 'react';
+import { memo, useState } from 'react';
 import { ApiError } from '../../../../client/call-api.ts';
 import { Button } from '../../../../components/Button.tsx';
 import { Field } from '../../../../components/Field.tsx';
@@ -15,7 +15,7 @@ import { takeNote } from './desk-saving.ts';
 import { lost } from './desk-state.ts';
 import { mayChangeNote, sayWhyLost } from './note-words.ts';
 import { SavedMark } from './SavedMark.tsx';
-import { type Desk, useDesk } from './use-desk.ts';
+import { type DeskTools, useDesk, useDeskState } from './use-desk.ts';
 
 interface Placed {
   readonly id: string;
@@ -25,10 +25,9 @@ interface Placed {
 }
 
 /** What the episode's edit does not hold, with the segment that was dropped; each is placed by hand. */
-export function NotInEdit() {
-  const desk = useDesk();
+export const NotInEdit = memo(function NotInEdit() {
   const [placed, setPlaced] = useState<Placed | null>(null);
-  const rows = lost(desk.state);
+  const rows = lost(useDeskState());
   if (rows.length === 0 && placed === null) return null;
   return (
     <section id="not-in-edit" aria-labelledby="not-in-edit-title" className="border border-line bg-sheet">
@@ -46,9 +45,9 @@ export function NotInEdit() {
       </ul>
     </section>
   );
-}
+});
 
-function wordsOf(row: AnyRow, desk: Desk): string {
+function wordsOf(row: AnyRow, desk: DeskTools): string {
   if (row.what === 'note') return row.form.text;
   if (row.what === 'chapter') return `Chapter: ${row.form.title}`;
   const part = desk.data.parts.find(({ id }) => id === row.form.partId);

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { EmptyState } from '../../../../components/EmptyState.tsx';
 import { effectiveEnd } from '../../../../domain/notes/note-place.ts';
 import { type AnyRow } from './desk-rows.ts';
@@ -5,11 +6,12 @@ import { shown } from './desk-state.ts';
 import { ConflictBox } from './ConflictBox.tsx';
 import { placeAt } from './moment.ts';
 import { NoteRow } from './NoteRow.tsx';
-import { useClock, useDesk } from './use-desk.ts';
+import { useClock, useDesk, useDeskState } from './use-desk.ts';
 
 /** The notes in the order of the episode; those that hold at the moment on screen are marked. */
-export function NoteList() {
-  const { state, clock, data } = useDesk();
+export const NoteList = memo(function NoteList() {
+  const { clock, data } = useDesk();
+  const state = useDeskState();
   const rows = shown(state, 'note');
   const places = rows.map(({ id, form }) => ({ id, ...placeAt(form.position, clock.rate) }));
   const holding = useClock(clock, (one) => {
@@ -23,7 +25,6 @@ export function NoteList() {
       .join();
   });
   const current = new Set(holding.split(','));
-  const inView = new Set(rows.flatMap(({ id, form }) => (current.has(id) ? form.partIds : [])));
   const team = rows.filter(({ form }) => form.audience !== 'viewers').length;
   return (
     <section id="notes" aria-labelledby="notes-title" className="border border-line bg-sheet">
@@ -47,13 +48,13 @@ export function NoteList() {
       ) : (
         <ol>
           {rows.map((row) => (
-            <NoteRow key={row.id} row={row} current={current.has(row.id)} inView={inView} />
+            <NoteRow key={row.id} row={row} current={current.has(row.id)} />
           ))}
         </ol>
       )}
     </section>
   );
-}
+});
 
 /** Rows that were deleted here while someone else changed them: the choice has to be somewhere in sight. */
 function GoneConflicts({ rows }: { readonly rows: readonly AnyRow[] }) {

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { Balloon } from '../../../../components/Balloon.tsx';
 import { Button } from '../../../../components/Button.tsx';
 import { joinClasses } from '../../../../components/join-classes.ts';
@@ -18,12 +19,10 @@ type NoteRowProps = {
   readonly row: Row<'note'>;
   /** It holds at the moment on screen. */
   readonly current: boolean;
-  /** Parts in view at the moment on screen. */
-  readonly inView: ReadonlySet<string>;
 };
 
 /** A note in the list: read, and opened for changing in its place. */
-export function NoteRow({ row, current, inView }: NoteRowProps) {
+export const NoteRow = memo(function NoteRow({ row, current }: NoteRowProps) {
   const desk = useDesk();
   const { data, clock, marked, mark, editing, setEditing, remove, sending, stalled, setDraft } = desk;
   const { id, form, stored } = row;
@@ -87,7 +86,7 @@ export function NoteRow({ row, current, inView }: NoteRowProps) {
                 number={part?.number ?? null}
                 name={part?.name}
                 dashed={part?.inPlans === false}
-                filled={current && inView.has(partId)}
+                filled={current}
               />
             );
           })}
@@ -150,4 +149,4 @@ export function NoteRow({ row, current, inView }: NoteRowProps) {
       {open && <NoteEditor row={row} />}
     </li>
   );
-}
+});

@@ -1,5 +1,5 @@
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { type Dispatch, type SetStateAction, useEffect, useMemo, useRef, useState } from 'react';
+import { type Dispatch, type SetStateAction, useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { ApiError } from '../../../../client/call-api.ts';
 import { type DeskLists } from '../../desk.ts';
 import { deskQuery, type DeskOf, sendDeskChange } from '../../queries.ts';
@@ -121,11 +121,8 @@ export function useDeskSync(
     };
   }, [open]);
 
-  return {
-    sending: sending?.id ?? null,
-    stalled,
-    flush: () => {
-      setHurry((count) => count + 1);
-    },
-  };
+  const flush = useCallback(() => {
+    setHurry((count) => count + 1);
+  }, []);
+  return { sending: sending?.id ?? null, stalled, flush };
 }

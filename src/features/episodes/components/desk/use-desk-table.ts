@@ -4,15 +4,20 @@ import { makeClock } from './clock.ts';
 import { afterSaving, type Draft, EMPTY_DRAFT, isBegun, NO_MARKS, placeOfDraft } from './composer-draft.ts';
 import { type DeskData } from './desk-data.ts';
 import { type AnyRow, type Forms, type RowKind } from './desk-rows.ts';
-import { addRow, deleteRow, editRow, endRun, startDesk } from './desk-state.ts';
+import { addRow, deleteRow, type DeskState, editRow, endRun, startDesk } from './desk-state.ts';
 import { readKept, writeKept } from './kept-in-tab.ts';
-import { type Desk } from './use-desk.ts';
+import { type Desk, type DeskTools } from './use-desk.ts';
 import { useDeskSync } from './use-desk-sync.ts';
 
 const NAMES = { note: 'note', chapter: 'chapter', appearance: 'part on the bench' };
 
 /** The desk of an episode: its rows and what is being done with them. */
-export function useDeskTable(data: DeskData): Desk & { readonly said: string } {
+export function useDeskTable(data: DeskData): {
+  /** The same object for as long as nothing in it changes. */
+  readonly tools: DeskTools;
+  readonly desk: Desk;
+  readonly said: string;
+} {
   const [state, setState] = useState(() => startDesk(data));
   const [clock] = useState(() => makeClock(data.rate, data.length));
   const [marks, setMarks] = useState(NO_MARKS);
@@ -31,46 +36,36 @@ export function useDeskTable(data: DeskData): Desk & { readonly said: string } {
     setState((before) => editRow(before, id, fields, what, run ?? null));
   }, []);
 
-  return {
-    data,
-    clock,
-    state,
-    sending,
-    stalled,
-    said,
-    marks,
-    setMarks,
-    draft,
-    setDraft,
-    marked,
-    mark,
-    editing,
-    setEditing,
-    add,
-    edit,
-    remove: ({ id, what }: AnyRow) => {
-      setState((before) => deleteRow(before, id, `Delete a ${NAMES[what]}`));
-      setEditing((open) => (open === id ? null : open));
-      setSaid(`The ${NAMES[what]} is deleted. Ctrl Z, or Undo, brings it back.`);
-    },
-    leave: () => {
-      setState(endRun);
-      flush();
-    },
-    change: (next) => {
-      setState(next);
-      setSaid('');
-    },
-    saveDraft: () => {
-      const { at: _at, ...fields } = draft;
-      const position = placeOfDraft(draft, marks, clock.now(), clock.rate);
-      const askedId = fields.audience === 'person' ? fields.askedId : null;
-      mark(add('note', { ...fields, askedId, partIds: [...fields.partIds], position }));
-      setDraft(afterSaving);
-      setMarks(NO_MARKS);
-      setSaid('');
-    },
-  };
+  const remove = useCallback(({ id, what }: AnyRow) => {
+    setState((before) => deleteRow(before, id, `Delete a ${NAMES[what]}`));
+    setEditing((open) => (open === id ? null : open));
+    setSaid(`The ${NAMES[what]} is deleted. Ctrl Z, or Undo, brings it back.`);
+  }, []);
+  const leave = useCallback(() => {
+    setState(endRun);
+    flush();
+  }, [flush]);
+  const change = useCallback((next: (state: DeskState) => DeskState) => {
+    setState(next);
+    setSaid('');
+  }, []);
+  const saveDraft = useCallback(() => {
+    const { at: _at, ...fields } = draft;
+    const position = placeOfDraft(draft, marks, clock.now(), clock.rate);
+    const askedId = fields.audience === 'person' ? fields.askedId : null;
+    mark(add('note', { ...fields, askedId, partIds: [...fields.partIds], position }));
+    setDraft(afterSaving);
+    setMarks(NO_MARKS);
+    setSaid('');
+  }, [draft, marks, clock, add, setDraft]);
+  const tools = useMemo(
+    (): DeskTools => ({
+      ...{ data, clock, sending, stalled, marks, setMarks, setDraft, marked, mark },
+      ...{ editing, setEditing, add, edit, remove, leave, change },
+    }),
+    [data, clock, sending, stalled, marks, setDraft, marked, editing, add, edit, remove, leave, change],
+  );
+  return { tools, desk: { ...tools, state, draft, saveDraft }, said };
 }
 
 /** What is being written, kept in this tab over a reload. */

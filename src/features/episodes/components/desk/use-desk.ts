@@ -5,16 +5,14 @@ import { type DeskData } from './desk-data.ts';
 import { type AnyRow, type Forms, type RowKind } from './desk-rows.ts';
 import { type DeskState } from './desk-state.ts';
 
-/** Everything that the pieces of the desk share. */
-export interface Desk {
+/** What the pieces of the desk share, but for its rows and what is being written: it changes seldom. */
+export interface DeskTools {
   readonly data: DeskData;
   readonly clock: DeskClock;
-  readonly state: DeskState;
   readonly sending: string | null;
   readonly stalled: boolean;
   readonly marks: Marks;
   readonly setMarks: (marks: Marks) => void;
-  readonly draft: Draft;
   readonly setDraft: (change: (draft: Draft) => Draft) => void;
   /** The note that keys act on. */
   readonly marked: string | null;
@@ -33,17 +31,41 @@ export interface Desk {
   /** A field is left: what it holds is one step, and is saved at once. */
   readonly leave: () => void;
   readonly change: (next: (state: DeskState) => DeskState) => void;
+}
+
+/** The note that is being written. */
+export interface DeskDraft {
+  readonly draft: Draft;
   readonly saveDraft: () => void;
 }
 
-const DeskContext = createContext<Desk | null>(null);
-export const DeskProvider = DeskContext.Provider;
+export interface Desk extends DeskTools, DeskDraft {
+  readonly state: DeskState;
+}
+
+// Three, so that a key that is pressed in a field renders that field, and not five hundred rows.
+const ToolsContext = createContext<DeskTools | null>(null);
+const StateContext = createContext<DeskState | null>(null);
+const DraftContext = createContext<DeskDraft | null>(null);
+export const DeskContexts = { Tools: ToolsContext, State: StateContext, Draft: DraftContext };
+
+function present<Value>(value: Value | null): Value {
+  if (value === null) throw new Error('This belongs on a desk.');
+  return value;
+}
 
 /** The desk around a piece of it. */
-export function useDesk(): Desk {
-  const desk = useContext(DeskContext);
-  if (desk === null) throw new Error('This belongs on a desk.');
-  return desk;
+export function useDesk(): DeskTools {
+  return present(useContext(ToolsContext));
+}
+
+/** Its rows. */
+export function useDeskState(): DeskState {
+  return present(useContext(StateContext));
+}
+
+export function useDeskDraft(): DeskDraft {
+  return present(useContext(DraftContext));
 }
 
 /** Something of the clock, for pieces that change with it; `pick` must give a plain value. */
