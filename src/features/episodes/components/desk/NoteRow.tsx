@@ -39,6 +39,8 @@ export const NoteRow = memo(function NoteRow({ row, current }: NoteRowProps) {
       aria-current={current ? 'true' : undefined}
       className={joinClasses(
         'scroll-mt-40 border-s-4 border-b border-b-line',
+        // Rows out of sight are not laid out or painted while something else is typed.
+        '[contain-intrinsic-block-size:auto_4.5rem] [content-visibility:auto]',
         marked === id ? 'border-s-brass' : 'border-s-transparent',
         current && 'bg-dye-wash',
       )}
