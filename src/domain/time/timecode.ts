@@ -1,5 +1,5 @@
 import { type Answer, right, wrong } from '../answer.ts';
-import { type Rate, requireRate, sameRate } from './rate.ts';
+import { LISTED_RATES, type Rate, requireRate, sameRate } from './rate.ts';
 
 /** Rates that have drop-frame labels, and the labels left out each minute (SMPTE ST 12-1:2014). */
 const DROPPED: readonly { readonly rate: Rate; readonly labels: number }[] = [
@@ -10,9 +10,9 @@ const DROPPED: readonly { readonly rate: Rate; readonly labels: number }[] = [
 /** Timecode labels a clock of one day and then begins again (SMPTE ST 12-1). */
 const HOURS = 24;
 
-/** Whether frames at this rate have labels at all: 12.5 and 1000 have none. */
+/** Whether timecode is defined for a rate at all: for 12.5 and 1000 it is not (SMPTE ST 12-1:2014). */
 export function hasTimecode(rate: Rate): boolean {
-  return countingOf(rate, false) !== null;
+  return LISTED_RATES.some((listed) => sameRate(listed, rate));
 }
 
 /** How many frames a day of labels has. @throws RangeError for a rate without such labels */

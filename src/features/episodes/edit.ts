@@ -153,3 +153,12 @@ export const ExportClipMarksInput = z.object({
   /** Of the timeline; of the first clip when left out. */
   rate: z.string(NO_RATE).trim().max(20, NO_RATE).default(''),
 });
+
+/** An edit built by hand: rows of clip, in, out. */
+export const BuildEditInput = z.object({
+  segments: z
+    .string('Add at least one clip, with its in and out.')
+    .max(200_000, 'That is too much for one edit built by hand.'),
+  rate: z.string(NO_RATE).trim().max(20, NO_RATE).default(''),
+});
+export type BuildEdit = z.output<typeof BuildEditInput>;
