@@ -7,6 +7,7 @@ import { NotFound } from '../../../server/errors.ts';
 import { read } from '../../../server/verb.ts';
 import { findEditById, type StoredEdit } from '../../notes/server/load-edits.ts';
 import { type EditVersion } from '../edit.ts';
+import { offerMarks } from './offer-marks.ts';
 import { type EpisodeRef, findDraftVideo, loadEpisode } from './load-episode.ts';
 
 /** A version as its page shows it. */
@@ -52,12 +53,16 @@ export const getEdits = read(
     const versions = await listVersions(db, episode.id);
     const index = ref.version === undefined ? 0 : versions.findIndex(({ number }) => number === ref.version);
     if (index === -1) throw new NotFound('This version of the edit');
+    const shown = await showEdit(db, versions[index]?.id, versions[index + 1]?.id);
+    // Marks stand on the newest edit's times: an older version's are offered no more.
+    const marks = shown === null || index > 0 ? [] : await offerMarks(db, shown, shown.edit.markers);
     return {
       build,
       episode,
       versions,
       video: await findDraftVideo(db, episode.id),
-      shown: await showEdit(db, versions[index]?.id, versions[index + 1]?.id),
+      shown,
+      marks,
     };
   },
 );
