@@ -1,6 +1,7 @@
-import { type ReactNode, useEffect, useState } from 'react';
+import { type ReactNode, useState } from 'react';
 import { Button } from '../../../../components/Button.tsx';
 import { INPUT_LOOK } from '../../../../components/FieldFrame.tsx';
+import { useHydrated } from '../../../../components/use-hydrated.ts';
 import { type HandRow, type ListedClip, moveRow, readRows, sayTotal, writeRows } from './hand-rows.ts';
 
 /** Where the page keeps the clips that an edit is built from. */
@@ -8,15 +9,24 @@ export const HAND_CLIPS_ID = 'hand-clips';
 
 /** Builds an edit from clips with in and out, in the place of the form's text of rows. */
 export function HandEdit({ children }: { readonly children?: ReactNode }) {
-  const [clips, setClips] = useState<readonly ListedClip[] | null>(null);
-  const [rows, setRows] = useState<readonly HandRow[]>([]);
-  useEffect(() => {
-    const listed = JSON.parse(document.getElementById(HAND_CLIPS_ID)?.textContent ?? '[]') as ListedClip[];
-    const field = document.querySelector<HTMLTextAreaElement>('textarea[name="segments"]');
-    setRows(readRows(field?.value ?? '', listed));
-    setClips(listed);
-  }, []);
-  if (clips === null) return <>{children}</>;
+  return useHydrated() ? <HandRows /> : <>{children}</>;
+}
+
+function listedClips(): readonly ListedClip[] {
+  return JSON.parse(document.getElementById(HAND_CLIPS_ID)?.textContent ?? '[]') as ListedClip[];
+}
+
+/** The text that the form holds, read while it still stands in the page. */
+function typedRows(clips: readonly ListedClip[]): readonly HandRow[] {
+  return readRows(
+    document.querySelector<HTMLTextAreaElement>('textarea[name="segments"]')?.value ?? '',
+    clips,
+  );
+}
+
+function HandRows() {
+  const [clips] = useState(listedClips);
+  const [rows, setRows] = useState(() => typedRows(clips));
   const change = (key: number, fields: Partial<HandRow>) => {
     setRows(rows.map((row) => (row.key === key ? { ...row, ...fields } : row)));
   };
