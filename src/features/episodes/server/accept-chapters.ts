@@ -3,8 +3,8 @@ import { millisecondsToFrame } from '../../../domain/time/frames.ts';
 import { Invalid } from '../../../server/errors.ts';
 import { verb } from '../../../server/verb.ts';
 import { addChapter } from './add-chapter.ts';
-import { loadNewProposals } from './list-proposed-chapters.ts';
 import { type EpisodeRef, loadEpisode } from './load-episode.ts';
+import { loadNewProposals } from './load-new-proposals.ts';
 
 /**
  * Takes chapters that the stages of the footage propose, by where they start.

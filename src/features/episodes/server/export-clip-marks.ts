@@ -12,7 +12,7 @@ import { read } from '../../../server/verb.ts';
 import { loadBuild } from '../../builds/server/load-build.ts';
 import { loadFilmedClips, type LoadedClip } from '../../footage/server/load-filmed-clips.ts';
 import { type EditFileForm, NO_RATE } from '../edit.ts';
-import { loadPartNumbers } from './export-edit.ts';
+import { loadPartNumbers } from './load-part-numbers.ts';
 import { writeEditFile } from './write-edit-file.ts';
 
 type Input = { readonly build: string; readonly as: EditFileForm; readonly rate: string };

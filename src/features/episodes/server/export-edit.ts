@@ -1,7 +1,6 @@
 import { and, eq } from 'drizzle-orm';
 import Fraction from 'fraction.js';
 import { edits } from '../../../db/schema/episodes.ts';
-import { parts } from '../../../db/schema/parts.ts';
 import { type Database } from '../../../db/client.ts';
 import { type Edit, type Marker, rateOf } from '../../../domain/edit/edit.ts';
 import { CHAPTER_COLOUR, markOfNote } from '../../../domain/marks/note-marks.ts';
@@ -12,6 +11,7 @@ import { findEditById } from '../../notes/server/load-edits.ts';
 import { loadNotes, ofEpisode } from '../../notes/server/load-notes.ts';
 import { type EditFileForm } from '../edit.ts';
 import { loadChapters } from './load-chapters.ts';
+import { loadPartNumbers } from './load-part-numbers.ts';
 import { type EpisodeRef, loadEpisode } from './load-episode.ts';
 import { writeEditFile } from './write-edit-file.ts';
 
@@ -62,13 +62,4 @@ async function loadMarks(
     })),
   ];
   return marks.filter(({ record }) => record.compare(frames) < 0).sort((a, b) => a.record.compare(b.record));
-}
-
-/** The numbers of a build's parts by their ids, of deleted ones too. */
-export async function loadPartNumbers(db: Database, buildId: string): Promise<ReadonlyMap<string, string>> {
-  const rows = await db
-    .select({ id: parts.id, number: parts.number })
-    .from(parts)
-    .where(eq(parts.buildId, buildId));
-  return new Map(rows.map(({ id, number }) => [id, number]));
 }

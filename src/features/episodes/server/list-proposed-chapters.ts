@@ -1,23 +1,7 @@
-import { frameToMilliseconds } from '../../../domain/time/frames.ts';
 import { type Chapter } from '../../../domain/chapters/chapter.ts';
-import { type WorkshopContext } from '../../../server/context.ts';
 import { read } from '../../../server/verb.ts';
-import { loadDraftChapters } from './load-chapters.ts';
-import { type EpisodeRef, findDraftVideo, loadEpisode } from './load-episode.ts';
-import { proposeEpisodeChapters } from './propose-episode-chapters.ts';
-
-/** The proposals that say something new: no chapter begins there yet. */
-export async function loadNewProposals({ db }: WorkshopContext, episode: { id: string; buildId: string }) {
-  const video = await findDraftVideo(db, episode.id);
-  const length = video?.seconds == null ? null : Math.round(video.seconds * 1000);
-  const { chapters, rate } = await proposeEpisodeChapters(db, episode, length);
-  const there = new Set(
-    (await loadDraftChapters(db, episode.id)).map(({ position }) =>
-      frameToMilliseconds(position.frame, position.rate),
-    ),
-  );
-  return { chapters: chapters.filter(({ start }) => !there.has(start)), rate };
-}
+import { type EpisodeRef, loadEpisode } from './load-episode.ts';
+import { loadNewProposals } from './load-new-proposals.ts';
 
 /** Chapters that the stages of the footage propose, without those that are there. */
 export const listProposedChapters = read(

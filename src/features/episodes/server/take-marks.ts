@@ -7,7 +7,7 @@ import { findDraftEdit } from '../../notes/server/load-edits.ts';
 import { CHAPTER_TITLE_LENGTH } from '../episode.ts';
 import { type TakeMarks } from '../marks.ts';
 import { addChapter } from './add-chapter.ts';
-import { loadPartNumbers } from './export-edit.ts';
+import { loadPartNumbers } from './load-part-numbers.ts';
 import { type EpisodeRef, loadEpisode } from './load-episode.ts';
 
 /** Takes marks of an editing program as notes for the team, or as chapters. @throws Invalid where there is no edit */
