@@ -26,6 +26,7 @@ const USUAL: Readonly<Record<string, unknown>> = {
   position: POSITION,
   rate: POSITION.rate,
   role: 'editor',
+  segments: 'C0043.MP4,0,1',
   slug: 'another-name',
   text: 'The housing goes on.',
   timeZone: 'Europe/London',
