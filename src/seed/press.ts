@@ -10,6 +10,8 @@ import { changeEpisode } from '../features/episodes/server/change-episode.ts';
 import { getDesk } from '../features/episodes/server/get-desk.ts';
 import { makeEpisode } from '../features/episodes/server/make-episode.ts';
 import { publishEdition } from '../features/episodes/server/publish-edition.ts';
+import { ReadEditInput } from '../features/episodes/edit.ts';
+import { takeEdit } from '../features/episodes/server/take-edit.ts';
 import { setVideo } from '../features/episodes/server/set-video.ts';
 import { addNote } from '../features/notes/server/add-note.ts';
 import { setAppearance } from '../features/notes/server/set-appearance.ts';
@@ -25,6 +27,7 @@ import {
 } from './press-episodes.ts';
 import { addWorksheet } from '../features/worksheets/server/add-worksheet.ts';
 import { PRESS_WORKSHEETS } from './press-worksheets.ts';
+import { PRESS_EDIT } from './press-edit.ts';
 import { seedFootage } from './press-footage.ts';
 import { NOT_IN_PLANS, PRESS_PARTS, PRESS_STAGES } from './press-parts.ts';
 import { readMedia, takeIn } from './take-in.ts';
@@ -145,6 +148,7 @@ async function seedEpisode(
   const { episode: made } = await getDesk(writer, ref);
   await changeEpisode(writer, { ...ref, number, title, about, version: made.version });
   const position = await seedVideo(writer, ref, video, fileIds);
+  if (number === PRESS_EDIT.episode) await takeEdit(writer, { ...ref, ...ReadEditInput.parse(PRESS_EDIT) });
   for (const [at, chapter] of chapters)
     await addChapter(writer, { ...ref, id: newId(), title: chapter, position: position(at) });
   for (const note of notes)
