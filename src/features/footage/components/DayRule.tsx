@@ -56,16 +56,16 @@ function Lying(data: DayRuleData) {
       </svg>
       <div className="steel border border-steel-edge">
         <svg width="100%" height={FACE} className="block overflow-visible">
-          {graduateDay(data).map(({ at, hour }) => (
+          {graduateDay(data).map(({ at, isHour, label }) => (
             <svg key={at} x={x(at)} overflow="visible">
-              <path d={`M0 0V${hour === null ? '9' : '18'}`} className="stroke-steel-mark" />
-              {hour !== null && at < until && (
+              <path d={`M0 0V${isHour ? '18' : '9'}`} className="stroke-steel-mark" />
+              {label !== null && at < until && (
                 <text
                   x="5"
                   y="32"
-                  className={`fill-steel-mark font-mono text-[12px] font-semibold ${hours > 12 && Number.parseInt(hour, 10) % 2 === 1 ? 'hidden' : ''}`}
+                  className={`fill-steel-mark font-mono text-[12px] font-semibold ${hours > 12 && Number.parseInt(label, 10) % 2 === 1 ? 'hidden' : ''}`}
                 >
-                  {hour}
+                  {label}
                 </text>
               )}
             </svg>
@@ -145,15 +145,15 @@ function Upright(data: DayRuleData) {
       <foreignObject x="0" y="22" width={RULE_WIDTH} height={height}>
         <div className="steel-upright h-full border border-steel-edge" />
       </foreignObject>
-      {graduateDay(data).map(({ at, hour }) => (
+      {graduateDay(data).map(({ at, isHour, label }) => (
         <g key={at} transform={`translate(0 ${String(y(at))})`}>
           <path
-            d={`M${String(RULE_WIDTH)} 0H${String(RULE_WIDTH - (hour === null ? 8 : 16))}`}
+            d={`M${String(RULE_WIDTH)} 0H${String(RULE_WIDTH - (isHour ? 16 : 8))}`}
             className="stroke-steel-mark"
           />
-          {hour !== null && at < until && (
+          {label !== null && at < until && (
             <text x="4" y="14" className="fill-steel-mark font-mono text-[12px] font-semibold">
-              {hour}
+              {label}
             </text>
           )}
         </g>

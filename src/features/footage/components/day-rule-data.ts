@@ -39,17 +39,26 @@ export function spanOf(times: readonly number[]): { from: number; until: number 
   return { from, until };
 }
 
-/** Where the lines of a rule stand: every quarter of an hour, and the hours with their number. */
+/** Up to so long a day there is room for the number of every quarter of an hour. Our own choice. */
+const ROOM_FOR_QUARTERS_MS = 3 * HOUR_MS;
+
+/** Where the lines of a rule stand: every quarter of an hour; what stands at each, where there is room for it. */
 export function graduateDay({
   from,
   until,
   timeZone,
-}: Pick<DayRuleData, 'from' | 'until' | 'timeZone'>): { at: number; hour: string | null }[] {
-  const lines: { at: number; hour: string | null }[] = [];
+}: Pick<DayRuleData, 'from' | 'until' | 'timeZone'>): {
+  at: number;
+  isHour: boolean;
+  label: string | null;
+}[] {
+  const lines: { at: number; isHour: boolean; label: string | null }[] = [];
+  const quarters = until - from <= ROOM_FOR_QUARTERS_MS;
   const clock = new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', minute: '2-digit' });
   for (let at = from; at <= until; at += HOUR_MS / 4) {
     const text = clock.format(at);
-    lines.push({ at, hour: text.endsWith(':00') ? text.replace(/^0/, '') : null });
+    const isHour = text.endsWith(':00');
+    lines.push({ at, isHour, label: isHour || quarters ? text.replace(/^0/, '') : null });
   }
   return lines;
 }
