@@ -111,6 +111,9 @@ export const paths = {
   /** @param number of the version to show; the newest when left out */
   edit: (workshop: string, build: string, episode: string, number?: number) =>
     `${onBench(workshop, build, `episodes/${part(episode)}/edit`)}${number === undefined ? '' : `?version=${String(number)}`}`,
+  /** The edit page with what moving by the captions would do. */
+  captionMove: (workshop: string, build: string, episode: string) =>
+    `${onBench(workshop, build, `episodes/${part(episode)}/edit`)}?look=captions#by-captions`,
   leaving: (workshop: string, build: string, episode: string) =>
     onBench(workshop, build, `episodes/${part(episode)}/text`),
   publish: (workshop: string, build: string, episode: string) =>

@@ -2,7 +2,8 @@ import { z } from 'zod';
 import { type EditWarning } from '../../domain/edit/edit.ts';
 import { type ComparedSegment } from '../../domain/edit/compare-edits.ts';
 import { type Edit } from '../../domain/edit/edit.ts';
-import { EDIT_SOURCES, type EditSource } from '../../domain/edit/edit-sources.ts';
+import { EDIT_SOURCES, type EditSource, type WrittenSource } from '../../domain/edit/edit-sources.ts';
+import { type UnalignedStretch } from '../../domain/place/align-captions.ts';
 import { type Rate } from '../../domain/time/rate.ts';
 import { type EditReport } from './edit-report.ts';
 import { episodeParams } from './episode.ts';
@@ -87,7 +88,7 @@ export interface EditName {
 export interface EditView {
   readonly name: string;
   readonly packed: string;
-  readonly source: Exclude<EditSource, 'hand'>;
+  readonly source: WrittenSource;
   /** As it was chosen or suggested: `25`, `30000/1001`; empty while nobody has said. */
   readonly rate: string;
   /** Why that rate is suggested, or that it must be chosen. */
@@ -162,3 +163,29 @@ export const BuildEditInput = z.object({
   rate: z.string(NO_RATE).trim().max(20, NO_RATE).default(''),
 });
 export type BuildEdit = z.output<typeof BuildEditInput>;
+
+/** A move by the captions, as it was looked at: the number of the newest captions, so that no others are taken. */
+export const MoveByCaptionsInput = z.object({
+  captions: z.coerce.number('Look at what moves first.').int('Look at what moves first.').min(1),
+});
+export type MoveByCaptions = z.output<typeof MoveByCaptionsInput>;
+
+/** Notes can move by the captions of two versions. */
+export interface CaptionMove {
+  /** The number of the newest captions. */
+  readonly captions: number;
+  /** What the captions of the version before and of the new one were called. */
+  readonly from: string;
+  readonly to: string;
+  /** Null until it is asked for: two hours take a second or two. */
+  readonly look: CaptionMoveLook | null;
+}
+
+/** What moving by the captions would do, nothing kept. */
+export interface CaptionMoveLook {
+  /** Milliseconds of the version before that were found in the new one. */
+  readonly found: number;
+  readonly length: number;
+  readonly unaligned: readonly UnalignedStretch[];
+  readonly report: EditReport;
+}

@@ -3,7 +3,7 @@ import { type Database } from '../../../db/client.ts';
 import { episodes } from '../../../db/schema/episodes.ts';
 import { anchors } from '../../../db/schema/notes.ts';
 import { keepOnClip } from '../../../domain/place/keep-on-clip.ts';
-import { type AnchorRow, editByIds, loadFootage } from '../../notes/server/footage-of-edits.ts';
+import { editByIds, loadFootage, positionOf } from '../../notes/server/footage-of-edits.ts';
 import { findEditById, type StoredEdit } from '../../notes/server/load-edits.ts';
 import { lockPlaces, placeEdit } from '../../notes/server/place-edit.ts';
 
@@ -57,8 +57,4 @@ async function keepTypedOnClips(
       ) as k (id, clip_id, end_clip_id, frame, end_frame, rate_num, rate_den)
       where a.id = k.id`);
   }
-}
-
-function positionOf({ frame, endFrame, rateNum, rateDen }: AnchorRow) {
-  return { frame: frame ?? 0, endFrame, rate: { num: rateNum ?? 1, den: rateDen ?? 1 } };
 }

@@ -2,7 +2,7 @@ import { deflateRawSync, inflateRawSync } from 'node:zlib';
 import { type Answer } from '../../../domain/answer.ts';
 import { decodeText } from '../../../domain/csv/decode-text.ts';
 import { type Edit } from '../../../domain/edit/edit.ts';
-import { type EditSource } from '../../../domain/edit/edit-sources.ts';
+import { type WrittenSource } from '../../../domain/edit/edit-sources.ts';
 import { clipNames } from '../../../domain/edit/clip-names.ts';
 import { parseRate, type Rate } from '../../../domain/time/rate.ts';
 import { Invalid } from '../../../server/errors.ts';
@@ -14,7 +14,7 @@ import { EDIT_TEXT_BYTES, NO_RATE, type ReadEdit } from '../edit.ts';
 export interface EditText {
   readonly text: string;
   readonly name: string;
-  readonly source: Exclude<EditSource, 'hand'>;
+  readonly source: WrittenSource;
 }
 
 /** The most that is believed, as in positions. */

@@ -5,6 +5,7 @@ import { type Edit, rateOf } from '../../../domain/edit/edit.ts';
 import { type CountedClip } from '../../../domain/place/keep-on-clip.ts';
 import { nameByFootage } from '../../../domain/place/name-by-footage.ts';
 import { type Anchor, type EditedClip } from '../../../domain/place/place-anchors.ts';
+import { type Position } from '../../../domain/positions.ts';
 import { MILLISECOND_RATE, type Rate, sameRate } from '../../../domain/time/rate.ts';
 import { type LoadedClip, loadFilmedClips } from '../../footage/server/load-filmed-clips.ts';
 
@@ -67,4 +68,9 @@ export function anchorOf(row: AnchorRow, footage: Footage, rate: Rate): Anchor {
     until: endFrame === null ? null : { clip: row.endClipId, at: on(row.endClipId ?? clipId, endFrame) },
     sense,
   };
+}
+
+/** The frames of an anchor, as they are counted. */
+export function positionOf({ frame, endFrame, rateNum, rateDen }: AnchorRow): Position {
+  return { frame: frame ?? 0, endFrame, rate: { num: rateNum ?? 1, den: rateDen ?? 1 } };
 }

@@ -1,0 +1,1 @@
+ALTER TYPE "public"."edit_source" ADD VALUE 'captions';
