@@ -18,9 +18,14 @@ export type ReadCsv =
 /**
  * Reads a list: the delimiter found, cells trimmed, empty rows left out, escaped formulas given back.
  * @param text without a byte order mark
+ * @param most rows that are read; what stands after them is not looked at
  * @returns the rows, of unequal length where the list is ragged; or a sentence that says what is wrong, and on which line
  */
-export function readCsv(text: string, delimiter: Delimiter = findDelimiter(text)): ReadCsv {
+export function readCsv(
+  text: string,
+  delimiter: Delimiter = findDelimiter(text),
+  most: number | null = null,
+): ReadCsv {
   try {
     const records = parse(text.replace(/^\uFEFF/, ''), {
       delimiter,
@@ -28,16 +33,16 @@ export function readCsv(text: string, delimiter: Delimiter = findDelimiter(text)
       info: true,
       relax_column_count: true,
       skip_empty_lines: true,
+      skip_records_with_empty_values: true,
+      ...(most !== null && { to: most }),
       // An inch mark in the middle of a cell is no quote.
       relax_quotes: true,
     }) as unknown as { record: string[]; info: { lines: number } }[];
-    const rows = records
-      .map(({ record, info }) => ({
-        // The parser counts to the end of a row, which quoted cells may stretch over several lines.
-        line: info.lines - record.reduce((sum, cell) => sum + cell.split('\n').length - 1, 0),
-        cells: record.map((cell) => unescapeFormula(cell.trim())),
-      }))
-      .filter(({ cells }) => cells.some((cell) => cell !== ''));
+    const rows = records.map(({ record, info }) => ({
+      // The parser counts to the end of a row, which quoted cells may stretch over several lines.
+      line: info.lines - record.reduce((sum, cell) => sum + cell.split('\n').length - 1, 0),
+      cells: record.map((cell) => unescapeFormula(cell.trim())),
+    }));
     return { ok: true, value: { delimiter, rows } };
   } catch (error) {
     if (error instanceof CsvError) return { ok: false, error: sentenceFor(error) };

@@ -62,11 +62,13 @@ export function readClipList(text: string, usual: Rate): ClipList {
 
 /** Rows; of a list that breaks off inside quotes, those before the row that does. */
 function readRows(text: string): { rows: readonly CsvRow[]; problem: LineProblem | null } {
-  const read = readCsv(text);
+  // With the row of heads, and one more to know that there are more.
+  const most = MOST_LISTED_CLIPS + 2;
+  const read = readCsv(text, undefined, most);
   if (read.ok) return { rows: read.value.rows, problem: null };
   const lines = text.split('\n');
   const odd = lines.findLastIndex((line) => (line.split('"').length - 1) % 2 === 1);
-  const before = odd === -1 ? null : readCsv(lines.slice(0, odd).join('\n'));
+  const before = odd === -1 ? null : readCsv(lines.slice(0, odd).join('\n'), undefined, most);
   if (before?.ok !== true) return { rows: [], problem: { line: 0, text: read.error } };
   const sentence =
     'The list breaks off inside quotes here: it may have been cut off. What stands before was read.';

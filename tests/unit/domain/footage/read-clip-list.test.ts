@@ -41,6 +41,10 @@ describe('a list of clips', () => {
     expect(names('\uFEFFname,length\r\nA,1\rB,2\n\n\nC,3\r\n')).toEqual(['A', 'B', 'C']);
   });
 
+  test('with more empty rows than clips may be is read to its end', () => {
+    expect(names(`name,length\n${' , \n'.repeat(MOST_LISTED_CLIPS + 2)}A,1`)).toEqual(['A']);
+  });
+
   test('that was cut off inside quotes is read up to there, and the line told', () => {
     const text = 'name,stage\nA,"Drum"\nB,"Dr';
     expect(names(text)).toEqual(['A']);
