@@ -84,7 +84,7 @@ export const clips = pgTable(
     /** Seconds of the shop that a second of it shows: 1/1 as filmed, 20/1 for time-lapse, 1/4 for slow motion. */
     paceNum: integer('pace_num').notNull().default(1),
     paceDen: integer('pace_den').notNull().default(1),
-    /** Where frames do not come at a constant rate: when each begins, in milliseconds since the first. */
+    /** Where frames do not come at a constant rate: when each begins, in milliseconds since the first. Counts at 1000/1 stay milliseconds. */
     frameTimes: jsonb('frame_times').$type<readonly number[]>(),
     /** The clip that this one goes on from without a gap: a camera splits what it films into several files. */
     continuesId: uuid('continues_id'),

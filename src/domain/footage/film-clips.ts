@@ -1,6 +1,6 @@
 import Fraction from 'fraction.js';
 import { type Answer, right } from '../answer.ts';
-import { type Rate } from '../time/rate.ts';
+import { MILLISECOND_RATE, type Rate, sameRate } from '../time/rate.ts';
 import { instantOfWall, wallAsUtc } from '../time/wall-time.ts';
 import { type CameraClock, cameraClock, type SlateReading } from './camera-clock.ts';
 import { type CreationMeans } from './clip-facts.ts';
@@ -53,12 +53,15 @@ export interface ClipTiming {
   readonly problem: string | null;
 }
 
-/** Seconds since a clip's first frame at which a frame begins: by its timestamps where it has them. */
+/**
+ * Seconds since a clip's first frame at which a frame begins: by its timestamps where it has them. A clip that counts in
+ * milliseconds counts time already.
+ */
 export function clipTimeOfFrame(
   { rate, frameTimes }: Pick<ClipFacts, 'rate' | 'frameTimes'>,
   frame: number,
 ): Fraction {
-  const at = frameTimes?.[frame];
+  const at = sameRate(rate, MILLISECOND_RATE) ? undefined : frameTimes?.[frame];
   return at === undefined ? new Fraction(frame).mul(rate.den).div(rate.num) : new Fraction(at).div(1000);
 }
 

@@ -134,7 +134,17 @@ export const DropOriginalsInput = z.object({ file: z.uuid().optional() });
 
 /** The kept forms of a file. */
 export type Variant =
-  'original' | 'video' | 'sound' | 'document' | 'poster' | 'thumb' | 'medium' | 'large' | 'filmstrip';
+  | 'original'
+  | 'video'
+  | 'sound'
+  | 'document'
+  | 'poster'
+  | 'thumb'
+  | 'medium'
+  | 'large'
+  | 'filmstrip'
+  | 'waveform'
+  | 'frame-times';
 
 /** What may stay when the original goes: that which viewers and editors look at. */
 export const STAND_INS: readonly Variant[] = ['video', 'sound', 'document', 'large'];

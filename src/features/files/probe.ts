@@ -18,6 +18,10 @@ export interface Probe {
   readonly timecode?: string | undefined;
   /** Whether frames come at uneven times. */
   readonly variableRate?: boolean | undefined;
+  /** Whether those times were left unread: there are too many of them. */
+  readonly frameTimesUnread?: boolean | undefined;
+  /** The camera by the file's own tags: maker and model. */
+  readonly filmedWith?: string | undefined;
   /** Which text it is: csv, vtt, srt, edl, otio. */
   readonly format?: string | undefined;
   /** Whether the streams of the playable copy are the camera's own, or made anew. */

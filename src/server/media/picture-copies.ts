@@ -3,7 +3,7 @@ import { RefusedFile } from './refused-file.ts';
 
 /** One kept form, made. */
 export interface MadePicture {
-  readonly variant: 'thumb' | 'medium' | 'large' | 'poster' | 'filmstrip';
+  readonly variant: 'thumb' | 'medium' | 'large' | 'poster' | 'filmstrip' | 'waveform';
   readonly contentType: string;
   readonly bytes: Buffer;
   readonly width: number;

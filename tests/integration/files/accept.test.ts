@@ -112,7 +112,8 @@ describe('A film', () => {
       timecode: '01:00:00:00',
       camera: { wallTime: '2026-03-14T14:22:07', offset: null, assumedZone: 'UTC' },
     });
-    expect(Object.keys(variants).sort()).toEqual(['filmstrip', 'original', 'poster', 'thumb', 'video']);
+    const made = ['filmstrip', 'original', 'poster', 'thumb', 'video', 'waveform'];
+    expect(Object.keys(variants).sort()).toEqual(made);
     expect(variants['filmstrip']).toMatchObject({ frames: 2, height: 90, width: 320 });
     const video = await kept(file.id, 'video');
     const traces = ['+52.65', 'Marram', 'Lavf', 'Lavc', 'x264'];
@@ -161,7 +162,7 @@ describe('A sound', () => {
     const { file, variants } = await uploadAndCheck(editor, build, name, await makeSound(name, ...options));
     expect(file).toMatchObject({ state: 'ready', kind: 'sound', rateNum: 1000, rateDen: 1 });
     expect(Math.abs((file.durationFrames ?? 0) - 2000)).toBeLessThan(60);
-    expect(Object.keys(variants).sort()).toEqual(['original', 'sound']);
+    expect(Object.keys(variants).sort()).toEqual(['original', 'sound', 'waveform']);
     expect((await look(await kept(file.id, 'sound'))).streams[0]).toMatchObject({ codec_name: 'aac' });
   });
 });

@@ -15,6 +15,7 @@ type FileRowProps = {
 /** A clip, a sound or a list: what it is, how long, how large; while it is looked at, how far that is. */
 export function FileRow({ item, onDelete }: FileRowProps) {
   const strip = item.variants.find(({ variant }) => variant === 'filmstrip');
+  const wave = item.variants.find(({ variant }) => variant === 'waveform');
   const thumb = item.variants.find(({ variant }) => variant === 'thumb');
   const playable = item.variants.find(({ variant }) => variant === 'video' || variant === 'sound');
   return (
@@ -61,6 +62,16 @@ export function FileRow({ item, onDelete }: FileRowProps) {
             alt={`${String(strip.frames ?? 0)} pictures of ${item.name}, at even times`}
             loading="lazy"
             className="mt-1 h-auto max-h-14 w-auto max-w-full border-y-2 border-line-strong object-contain object-left"
+          />
+        )}
+        {wave && (
+          <img
+            src={paths.media(item.id, 'waveform')}
+            width={wave.width ?? 0}
+            height={wave.height ?? 0}
+            alt={`The sound of ${item.name}`}
+            loading="lazy"
+            className="mt-1 h-8 w-full max-w-lg"
           />
         )}
       </div>

@@ -2,15 +2,19 @@ import { eq } from 'drizzle-orm';
 import { statfs } from 'node:fs/promises';
 import { join } from 'node:path';
 import { files } from '../../../db/schema/files.ts';
+import { cameraOfTags } from '../../../domain/footage/camera-of-tags.ts';
+import { averageOf } from '../../../domain/footage/frame-times.ts';
 import { framesIn } from '../../../domain/media-rates.ts';
 import { isRate, MILLISECOND_RATE, snapRate } from '../../../domain/time/rate.ts';
 import { type JobHandler } from '../../../server/jobs/queue.ts';
 import { findCutOff } from '../../../server/media/box-lengths.ts';
+import { drawWaveform } from '../../../server/media/draw-waveform.ts';
 import { takeFrames, takeStill } from '../../../server/media/film-frames.ts';
 import { type MediaFormat } from '../../../server/media/media-input.ts';
 import { makeFilmstrip, makeStills } from '../../../server/media/picture-copies.ts';
 import { canCopyStreams, renditionArgs, soundArgs } from '../../../server/media/plan-rendition.ts';
 import { type MediaFacts, probeMedia } from '../../../server/media/probe-media.ts';
+import { type FrameTimes, readFrameTimes } from '../../../server/media/read-frame-times.ts';
 import { RefusedFile } from '../../../server/media/refused-file.ts';
 import { runFfmpeg } from '../../../server/media/run-ffmpeg.ts';
 import { oneAtATime } from '../../../server/run-program.ts';
@@ -97,7 +101,39 @@ async function acceptFilm(
       ...(made.video && { width: made.video.width, height: made.video.height }),
     },
   ]);
-  await acceptAs(services, file, filmFacts(file, facts, film.format));
+  if (made.audio !== null) await keepWaveform(services, file, { ...film, path, format: 'mov' }, folder);
+  const frames = await keepFrameTimes(services, file, facts, film);
+  await acceptAs(services, file, filmFacts(file, facts, film.format, frames));
+}
+
+/** Draws the sound of footage by the copy that is played, which is smaller than what was sent. */
+async function keepWaveform(
+  services: Services,
+  file: CheckedFile,
+  film: Film,
+  folder: string,
+): Promise<void> {
+  if (file.purpose !== 'footage') return;
+  const drawn = await drawWaveform(film, folder);
+  if (drawn !== null) await keepVariants(services, file, [drawn]);
+}
+
+/** Keeps when each frame is shown, where they come unevenly, for the clip that is made of footage; null where none is. */
+async function keepFrameTimes(
+  services: Services,
+  file: CheckedFile,
+  facts: MediaFacts,
+  film: Film,
+): Promise<FrameTimes | null> {
+  // A Matroska file gives no rate of its own: ffprobe's is a guess by the beginning.
+  const mayBeUneven = facts.video?.variableRate === true || film.format === 'matroska';
+  if (file.purpose !== 'footage' || facts.video === null || !mayBeUneven) return null;
+  const frames = await readFrameTimes(film.path, film.format);
+  if (frames.times !== null) {
+    const bytes = Buffer.from(JSON.stringify(frames.times));
+    await keepVariants(services, file, [{ variant: 'frame-times', contentType: 'application/json', bytes }]);
+  }
+  return frames;
 }
 
 async function acceptSound(
@@ -110,7 +146,8 @@ async function acceptSound(
   const path = join(folder, 'sound.m4a');
   await render(services, file, film, soundArgs(facts, path));
   await keepVariants(services, file, [{ variant: 'sound', contentType: 'audio/mp4', path }]);
-  await acceptAs(services, file, filmFacts(file, facts, film.format));
+  await keepWaveform(services, file, { ...film, path, format: 'mov' }, folder);
+  await acceptAs(services, file, filmFacts(file, facts, film.format, null));
 }
 
 /** Makes the playable copy and says in the file's row how far it is. */
@@ -141,9 +178,15 @@ async function render(
   });
 }
 
-function filmFacts(file: CheckedFile, facts: MediaFacts, format: MediaFormat): AcceptedAs {
+function filmFacts(
+  file: CheckedFile,
+  facts: MediaFacts,
+  format: MediaFormat,
+  frames: FrameTimes | null,
+): AcceptedAs {
   const { video, audio, seconds, tags } = facts;
-  const average = video?.averageRate ?? null;
+  const times = format === 'matroska' ? (frames?.times ?? null) : null;
+  const average = times === null ? (video?.averageRate ?? null) : averageOf(times);
   const rate = average === null || !isRate(average) ? MILLISECOND_RATE : snapRate(average);
   return {
     kind: video === null ? 'sound' : 'video',
@@ -157,7 +200,9 @@ function filmFacts(file: CheckedFile, facts: MediaFacts, format: MediaFormat): A
       videoCodec: video?.codec,
       audioCodec: audio?.codec,
       timecode: tags['timecode'],
-      variableRate: video?.variableRate,
+      variableRate: frames === null ? video?.variableRate : frames.times !== null || frames.unread,
+      frameTimesUnread: frames?.unread === true ? true : undefined,
+      filmedWith: cameraOfTags(tags) ?? undefined,
       copied: canCopyStreams(facts),
     },
   };

@@ -13,7 +13,7 @@ import { isShownToEveryone } from './shown-files.ts';
 const FOR_EVERYONE = ['video', 'sound', 'poster', 'thumb', 'medium', 'large', 'filmstrip'];
 
 /** What is looked at in the page; everything else is saved. */
-const STREAMED = ['poster', 'thumb', 'medium', 'large', 'filmstrip'];
+const STREAMED = ['poster', 'thumb', 'medium', 'large', 'filmstrip', 'waveform'];
 
 /**
  * One kept form of a file, for whoever may have it: the team, or everyone once it is shown to everyone.

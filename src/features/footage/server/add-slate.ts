@@ -1,6 +1,7 @@
 import { newId } from '../../../db/columns.ts';
 import { slates } from '../../../db/schema/footage.ts';
 import { parseClock } from '../../../domain/time/parse-clock.ts';
+import { MILLISECOND_RATE, sameRate } from '../../../domain/time/rate.ts';
 import { secondsToFrame } from '../../../domain/time/frames.ts';
 import { instantOfWall } from '../../../domain/time/wall-time.ts';
 import { Invalid } from '../../../server/errors.ts';
@@ -38,8 +39,10 @@ function frameAt({ rateNum, rateDen, frameTimes }: StoredClip, text: string): nu
   const seconds = parseClock(text);
   if (!seconds.ok) throw new Invalid({ moment: `The moment of the clip: ${seconds.error}` });
   if (frameTimes === null) return secondsToFrame(seconds.value, { num: rateNum, den: rateDen });
-  return Math.max(
+  const shown = Math.max(
     0,
     frameTimes.findLastIndex((begins) => begins <= seconds.value * 1000),
   );
+  const counted = { num: rateNum, den: rateDen };
+  return sameRate(counted, MILLISECOND_RATE) ? Math.round(frameTimes[shown] ?? 0) : shown;
 }

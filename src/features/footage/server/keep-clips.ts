@@ -64,8 +64,11 @@ export async function keepClips(
   return { added: fresh.length, updated: new Set(again.map(({ id }) => id)).size, ids, problems };
 }
 
-/** By what a clip is known: never by its name alone, for cards start again at the same numbers. */
-function identityOf(row: {
+/**
+ * By what a clip is known: never by its name alone, for cards start again at the same numbers. One moment written in two
+ * zones is the same.
+ */
+export function identityOf(row: {
   readonly cameraId?: string | null | undefined;
   readonly name: string;
   readonly frames?: number | null | undefined;
@@ -76,7 +79,8 @@ function identityOf(row: {
 }): string {
   const wall = row.createdWall == null ? null : wallAsUtc(row.createdWall);
   const length = row.frames == null ? null : [row.frames, row.rateNum / row.rateDen];
-  return JSON.stringify([row.cameraId ?? null, row.name, length, wall, row.createdOffset ?? null]);
+  const created = wall === null ? null : wall - (row.createdOffset ?? 0) * 60_000;
+  return JSON.stringify([row.cameraId ?? null, row.name, length, created, row.createdOffset == null]);
 }
 
 function rowOf(

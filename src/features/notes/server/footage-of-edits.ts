@@ -2,6 +2,7 @@ import Fraction from 'fraction.js';
 import { type Database } from '../../../db/client.ts';
 import { type anchors } from '../../../db/schema/notes.ts';
 import { type Edit, rateOf } from '../../../domain/edit/edit.ts';
+import { clipTimeOfFrame } from '../../../domain/footage/film-clips.ts';
 import { type CountedClip } from '../../../domain/place/keep-on-clip.ts';
 import { nameByFootage } from '../../../domain/place/name-by-footage.ts';
 import { type Anchor, type EditedClip } from '../../../domain/place/place-anchors.ts';
@@ -43,8 +44,8 @@ export function editByIds(of: {
 
 /** The seconds since a clip's first frame at which one of its frames begins: by its timestamps, where it has them. */
 export function secondsOn(clip: LoadedClip | undefined, frame: number, rate: Rate): Fraction {
-  const at = clip && sameRate(rate, clip.rate) ? clip.frameTimes?.[frame] : undefined;
-  return at === undefined ? new Fraction(frame).div(rateOf(rate)) : new Fraction(at).div(1000);
+  const frameTimes = clip && sameRate(rate, clip.rate) ? clip.frameTimes : null;
+  return clipTimeOfFrame({ rate, frameTimes }, frame);
 }
 
 /** A stored anchor as it is placed. @param rate of the edit, in whose frames an episode time is given */

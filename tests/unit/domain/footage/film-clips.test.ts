@@ -108,6 +108,11 @@ test('a slate counts from the timestamp of its frame where frames come unevenly'
   expect(startOf(given, {}, [{ clipId: 'c1', frame: 2, shopAt: 1000 }]).start?.valueOf()).toBe(910);
 });
 
+test('a slate in a clip that counts in milliseconds stands at its millisecond, whatever its frames begin at', () => {
+  const given = { createdWall: null, rate: { num: 1000, den: 1 }, frameTimes: [0, 33, 90, 120] };
+  expect(startOf(given, {}, [{ clipId: 'c1', frame: 2, shopAt: 1000 }]).start?.valueOf()).toBe(998);
+});
+
 describe('a clip that goes on from another', () => {
   const first = clip({ id: 'c1' });
   const second = clip({ id: 'c2', continuesId: 'c1', createdWall: '1904-01-01T00:00:00' });
