@@ -11,6 +11,7 @@ import { changeClip } from '../../../src/features/footage/server/change-clip.ts'
 import { deleteCamera } from '../../../src/features/footage/server/delete-camera.ts';
 import { deleteClip } from '../../../src/features/footage/server/delete-clip.ts';
 import { getThumbnail } from '../../../src/features/footage/server/get-thumbnail.ts';
+import { giveCamera } from '../../../src/features/footage/server/give-camera.ts';
 import { importClips } from '../../../src/features/footage/server/import-clips.ts';
 import { joinClip } from '../../../src/features/footage/server/join-clip.ts';
 import { keepThumbnail } from '../../../src/features/footage/server/keep-thumbnail.ts';
@@ -322,6 +323,7 @@ describe('who may not', () => {
       restoreClip: () => restoreClip(who, ref),
       joinClip: () => joinClip(who, { ...ref, before: clip }),
       partClip: () => partClip(who, ref),
+      giveCamera: () => giveCamera(who, ref),
       keepThumbnail: () => keepThumbnail(who, { build, clip, jpeg: '' }),
       addSlate: () =>
         addSlate(who, { build, clip, frame: 0, moment: '', shows: '', shopMs: 1, readBy: 'hand' }),

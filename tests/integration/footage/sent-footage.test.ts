@@ -4,8 +4,11 @@ import sharp from 'sharp';
 import { beforeEach, describe, expect, test } from 'vitest';
 import { clips, slates } from '../../../src/db/schema/footage.ts';
 import { addSlate } from '../../../src/features/footage/server/add-slate.ts';
+import { getClip } from '../../../src/features/footage/server/get-clip.ts';
+import { giveCamera } from '../../../src/features/footage/server/give-camera.ts';
 import { loadFilmedClips } from '../../../src/features/footage/server/load-filmed-clips.ts';
 import { makeClip } from '../../../src/features/footage/server/make-clip.ts';
+import { Conflict } from '../../../src/server/errors.ts';
 import { keyOf } from '../../../src/server/storage/storage.ts';
 import { aBuildToFilm, aCamera, aClip } from '../../support/footage.ts';
 import { makeFilm, makeMedia, makeSound } from '../../support/media-samples.ts';
@@ -100,6 +103,14 @@ describe('what a camera wrote into its film', () => {
     const { clip, file } = await send('C3.mov', await tagged('C3.mov', 'make=Tarn', 'model=Tarn Two'));
     expect(file.probe).toMatchObject({ filmedWith: 'Tarn Two' });
     expect(clip?.cameraId).toBeNull();
+    const ref = { build, clip: clip?.id ?? '' };
+    expect(await getClip(shed.owner, ref)).toMatchObject({ filmedWith: 'Tarn Two', camera: null });
+    await giveCamera(shed.owner, { ...ref, version: 1 });
+    expect(await getClip(shed.owner, ref)).toMatchObject({ camera: { name: 'Tarn Two' } });
+    await expect(giveCamera(shed.owner, { ...ref, version: 1 })).rejects.toThrow(Conflict);
+    const silent = await aClip(shed.owner, build);
+    const attempt = giveCamera(shed.owner, { build, clip: silent, version: 1 });
+    await expect(attempt).rejects.toHaveProperty('fields.camera');
   });
 
   test('gives the first label with drop frame, and the moment with the camera’s own zone', async () => {

@@ -54,25 +54,29 @@ export function FileRow({ item, onDelete }: FileRowProps) {
         </p>
         {item.state === 'checking' && <Checking item={item} />}
         {item.state === 'failed' && <p className="text-primer">{item.failure}</p>}
-        {strip && (
-          <img
-            src={paths.media(item.id, 'filmstrip')}
-            width={strip.width ?? 0}
-            height={strip.height ?? 0}
-            alt={`${String(strip.frames ?? 0)} pictures of ${item.name}, at even times`}
-            loading="lazy"
-            className="mt-1 h-auto max-h-14 w-auto max-w-full border-y-2 border-line-strong object-contain object-left"
-          />
-        )}
-        {wave && (
-          <img
-            src={paths.media(item.id, 'waveform')}
-            width={wave.width ?? 0}
-            height={wave.height ?? 0}
-            alt={`The sound of ${item.name}`}
-            loading="lazy"
-            className="mt-1 h-8 w-full max-w-lg"
-          />
+        {(strip ?? wave) && (
+          <div className={joinClasses('mt-1 grid max-w-full gap-1', strip && 'w-fit')}>
+            {strip && (
+              <img
+                src={paths.media(item.id, 'filmstrip')}
+                width={strip.width ?? 0}
+                height={strip.height ?? 0}
+                alt={`${String(strip.frames ?? 0)} pictures of ${item.name}, at even times`}
+                loading="lazy"
+                className="h-auto max-h-14 w-auto max-w-full border-y-2 border-line-strong object-contain object-left"
+              />
+            )}
+            {wave && (
+              <img
+                src={paths.media(item.id, 'waveform')}
+                width={wave.width ?? 0}
+                height={wave.height ?? 0}
+                alt={`How loud ${item.name} is, from its beginning to its end`}
+                loading="lazy"
+                className="h-8 w-0 min-w-full"
+              />
+            )}
+          </div>
         )}
       </div>
       {onDelete && item.state !== 'checking' && (

@@ -4,6 +4,7 @@ import { NotFound } from '../../../server/errors.ts';
 import { read } from '../../../server/verb.ts';
 import { proposeJoin } from '../../../domain/footage/propose-join.ts';
 import { type ClipRef, loadClip } from './load-clip.ts';
+import { loadSaid } from './load-said.ts';
 import { presentClips } from './present-clips.ts';
 
 /** A clip with its slates, its neighbours, and the one that its camera may have split it from. @throws NotFound */
@@ -21,6 +22,7 @@ export const getClip = read({ may: 'workshop.see-bench' }, async (context, ref: 
   const before = all.find(({ id }) => id === clip.continuesId) ?? null;
   return {
     ...clip,
+    ...(await loadSaid(context.db, row.fileId)),
     frames: row.frames,
     frameTimes: row.frameTimes,
     startSet: row.startSetAt !== null,
