@@ -4,7 +4,7 @@ import { files, fileVariants } from '../../../db/schema/files.ts';
 import { type Probe } from '../../files/probe.ts';
 
 /** What the file of a clip says of it beyond its columns, and the pictures made of all of it. */
-export interface Said {
+interface Said {
   /** The camera by the file's own tags; null when they name none. */
   readonly filmedWith: string | null;
   /** Whether its frames come at uneven times that were not read. */
