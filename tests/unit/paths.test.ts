@@ -80,6 +80,7 @@ test('every address of the product', () => {
       "episodesOutAlready: /bench/w%201/b%2F2/episodes/out-already",
       "desk: /bench/w%201/b%2F2/episodes/3",
       "edit: /bench/w%201/b%2F2/episodes/3/edit?version=4",
+      "captionMove: /bench/w%201/b%2F2/episodes/3/edit?look=captions#by-captions",
       "leaving: /bench/w%201/b%2F2/episodes/3/text",
       "publish: /bench/w%201/b%2F2/episodes/3/publish",
       "announcement: /bench/w%201/b%2F2/episodes/3/announcement",

@@ -43,11 +43,7 @@ export function spanOf(times: readonly number[]): { from: number; until: number 
 const ROOM_FOR_QUARTERS_MS = 3 * HOUR_MS;
 
 /** Where the lines of a rule stand: every quarter of an hour; what stands at each, where there is room for it. */
-export function graduateDay({
-  from,
-  until,
-  timeZone,
-}: Pick<DayRuleData, 'from' | 'until' | 'timeZone'>): {
+export function graduateDay({ from, until, timeZone }: Pick<DayRuleData, 'from' | 'until' | 'timeZone'>): {
   at: number;
   isHour: boolean;
   label: string | null;
