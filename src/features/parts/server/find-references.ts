@@ -11,15 +11,14 @@ import { questionParts } from '../../../db/schema/questions.ts';
 export async function findReferences(db: Database, ids: readonly string[]): Promise<Map<string, number>> {
   const found = new Map<string, number>();
   if (ids.length === 0) return found;
-  const sources = await Promise.all(
-    [noteParts, appearances, questionParts, clipParts].map((table) =>
-      db
-        .select({ partId: table.partId, times: count() })
-        .from(table)
-        .where(inArray(table.partId, [...ids]))
-        .groupBy(table.partId),
-    ),
-  );
-  for (const { partId, times } of sources.flat()) found.set(partId, (found.get(partId) ?? 0) + times);
+  // One after another: inside a transaction they share a connection.
+  for (const table of [noteParts, appearances, questionParts, clipParts]) {
+    const rows = await db
+      .select({ partId: table.partId, times: count() })
+      .from(table)
+      .where(inArray(table.partId, [...ids]))
+      .groupBy(table.partId);
+    for (const { partId, times } of rows) found.set(partId, (found.get(partId) ?? 0) + times);
+  }
   return found;
 }
