@@ -23,10 +23,10 @@ export function parsePace(text: string): Answer<Pace> {
   const [, clip, shop] = /^(\d{1,6}):(\d{1,6})$/.exec(written) ?? [];
   const [, num, den = '1'] = /^(\d{1,6})(?:\/(\d{1,6}))?$/.exec(written) ?? [];
   const pace = { num: Number(shop ?? num), den: Number(clip ?? den) };
-  if (!(pace.num > 0 && pace.den > 0)) return wrong(`“${written.slice(0, 40)}” is no pace. ${HOW}`);
+  if (!(pace.num > 0 && pace.den > 0)) return wrong(`There is no pace “${written.slice(0, 40)}”. ${HOW}`);
   if (pace.num / pace.den > FASTEST || pace.den / pace.num > SLOWEST)
     return wrong(
-      `“${written}” is out of range: 1:${String(FASTEST)} to 1/${String(SLOWEST)} are taken. ${HOW}`,
+      `The pace “${written}” is out of range: 1:${String(FASTEST)} to 1/${String(SLOWEST)} are taken. ${HOW}`,
     );
   return right(pace);
 }

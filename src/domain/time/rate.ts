@@ -65,9 +65,7 @@ export function parseRate(text: string): Answer<Rate> {
   const [, num, den = '1'] = /^(\d{1,7})(?:\/(\d{1,5}))?$/.exec(written) ?? [];
   const rate = { num: Number(num), den: Number(den) };
   if (num === undefined || !isRate(rate))
-    return wrong(
-      `${written === '' ? 'An empty text' : `“${written.slice(0, 40)}”`} is no frame rate. Write 25 or 30000/1001.`,
-    );
+    return wrong(`There is no frame rate “${written.slice(0, 40)}”. Write 25 or 30000/1001.`);
   return right(rate);
 }
 
