@@ -43,12 +43,13 @@ export async function validateHtml(html: string): Promise<string[]> {
 
 /** What axe finds wrong on a page as it is now: by all rules, or by those about colour. */
 export async function findBarriers(page: Page, rules: 'all' | 'colour'): Promise<string[]> {
-  await page.evaluate(axe.source);
+  // It stays in the page until the page is left.
+  if (!(await page.evaluate(() => 'axe' in globalThis))) await page.evaluate(axe.source);
   const runOnly: axe.RunOnly =
     rules === 'all' ? { type: 'tag', values: TAGS } : { type: 'rule', values: COLOUR_RULES };
   return page.evaluate(async (only) => {
     const { run } = (globalThis as unknown as { axe: typeof axe }).axe;
-    const { violations } = await run({ runOnly: only });
+    const { violations } = await run({ runOnly: only, resultTypes: ['violations'] });
     return violations.flatMap(({ id, nodes }) =>
       nodes.map(({ target, failureSummary = '' }) => `${id} at ${target.join(' ')}: ${failureSummary}`),
     );

@@ -12,7 +12,7 @@ const STANDINGS: Record<Source['standing'], string> = {
 
 const COLUMNS = [
   { key: 'what', label: 'What' },
-  { key: 'value', label: 'Result', numeric: true },
+  { key: 'value', label: 'Result' },
   { key: 'formula', label: 'Formula' },
   { key: 'numbers', label: 'Numbers put in' },
 ];
@@ -30,7 +30,7 @@ export function SheetWarnings({ warnings }: Pick<Worked<unknown>, 'warnings'>) {
 export function SheetWorking({ working }: Pick<Worked<unknown>, 'working'>) {
   const rows = working.map(({ what, formula, numbers, value }, at) => ({
     id: `${String(at)} ${what}`,
-    cells: { what, value: <strong>{value}</strong>, formula, numbers },
+    cells: { what, value: <strong className="font-mono">{value}</strong>, formula, numbers },
   }));
   return <Table caption="Result and working" hideCaption columns={COLUMNS} rows={rows} />;
 }
