@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { type HandClip, readHandEdit, sayClipTime } from '../../../../src/domain/edit/read-hand-edit.ts';
+import { type HandClip, sayClipTime } from '../../../../src/domain/edit/hand-clip.ts';
+import { readHandEdit } from '../../../../src/domain/edit/read-hand-edit.ts';
 
 const RATE = { num: 25, den: 1 };
 const clip = (id: string, name: string, more: Partial<HandClip> = {}): HandClip => ({

@@ -1,4 +1,4 @@
-import { type HandClip, readClipTime } from '../../../../domain/edit/read-hand-edit.ts';
+import { type HandClip, readClipTime } from '../../../../domain/edit/hand-clip.ts';
 import { formatClock } from '../../../../domain/time/format-clock.ts';
 
 /** A clip as it is chosen from. */
