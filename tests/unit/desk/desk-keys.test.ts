@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { commandOf, digitOf } from '../../../src/features/episodes/components/desk/desk-keys.ts';
+import { digitOf } from '../../../src/client/note-keys.ts';
+import { commandOf } from '../../../src/features/episodes/components/desk/desk-keys.ts';
 
 const press = (
   key: string,

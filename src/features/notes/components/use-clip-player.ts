@@ -1,8 +1,8 @@
 import { useEffect, useRef, useState } from 'react';
 import { filePlayer } from '../../../client/file-player.ts';
+import { type NoteKey, noteKeyOf } from '../../../client/note-keys.ts';
 import { singleKeysAreOn } from '../../../client/single-keys.ts';
 import { type Rate } from '../../../domain/time/rate.ts';
-import { type ClipCommand, clipCommand } from './clip-keys.ts';
 
 const TYPING = 'input, textarea, select, button, summary, a, video, [contenteditable]';
 
@@ -10,7 +10,7 @@ const TYPING = 'input, textarea, select, button, summary, a, video, [contentedit
  * Follows a clip's player by the frames it shows, and hands keys to it.
  * @param onCommand what the player itself does not do
  */
-export function useClipPlayer(address: string | null, rate: Rate, onCommand: (command: ClipCommand) => void) {
+export function useClipPlayer(address: string | null, rate: Rate, onCommand: (command: NoteKey) => void) {
   const video = useRef<HTMLVideoElement>(null);
   const command = useRef(onCommand);
   const [frame, setFrame] = useState(0);
@@ -27,7 +27,7 @@ export function useClipPlayer(address: string | null, rate: Rate, onCommand: (co
     const press = (event: KeyboardEvent) => {
       const target = event.target as HTMLElement;
       const element = video.current;
-      const own = clipCommand(event);
+      const own = noteKeyOf(event);
       const typing = target.closest(TYPING) !== null && target !== element;
       if (own === null || (typing ? own.do !== 'leave' : !singleKeysAreOn())) return;
       if (!typing) event.preventDefault();
@@ -46,18 +46,20 @@ export function useClipPlayer(address: string | null, rate: Rate, onCommand: (co
 }
 
 /** A file that counts in milliseconds is stepped through by a thirtieth of a second. */
-function move(video: HTMLVideoElement, command: ClipCommand, fps: number): void {
-  if (command.do === 'play') {
+function move(video: HTMLVideoElement, key: NoteKey, fps: number): void {
+  if (key.do === 'play') {
     if (video.paused) void video.play().catch(() => undefined);
     else video.pause();
   }
-  if (command.do === 'step') video.currentTime = Math.max(0, video.currentTime + command.seconds);
-  if (command.do === 'frame') {
-    video.pause();
-    const step = 1 / Math.min(fps, fps === 1000 ? 30 : fps);
-    // Half a frame in, so that rounding cannot fall on the one beside it.
-    const at = Math.floor(video.currentTime / step + 0.01) + command.by;
-    video.currentTime = Math.max(0, (at + 0.5) * step);
+  if (key.do === 'note' || key.do === 'kind') video.pause();
+  if (key.do !== 'step') return;
+  if (key.size !== 'frame') {
+    video.currentTime = Math.max(0, video.currentTime + key.by * (key.size === 'ten' ? 10 : 1));
+    return;
   }
-  if (command.do === 'note' || command.do === 'kind') video.pause();
+  video.pause();
+  const step = 1 / (fps >= 1000 ? 30 : fps);
+  // Half a frame in, so that rounding cannot fall on the one beside it.
+  const at = Math.floor(video.currentTime / step + 0.01) + key.by;
+  video.currentTime = Math.max(0, (at + 0.5) * step);
 }

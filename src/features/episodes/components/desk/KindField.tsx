@@ -1,6 +1,6 @@
 import { NOTE_KINDS, type NoteKind } from '../../../../domain/note-kinds.ts';
 import { NOTE_KINDS as LOOKS } from '../../../../components/note-kind.ts';
-import { digitOf } from './desk-keys.ts';
+import { digitOf } from '../../../../client/note-keys.ts';
 
 type KindFieldProps = {
   readonly name: string;

@@ -1,7 +1,8 @@
 import { useEffect, useRef } from 'react';
 import { Button } from '../../../../components/Button.tsx';
 import { faultsOf, type Row } from './desk-rows.ts';
-import { formatMoment, framesIn, movedTo, movePlace, placeAt, type StepSize } from './moment.ts';
+import { formatMoment, framesIn, movedTo, movePlace, placeAt } from './moment.ts';
+import { type StepSize } from '../../../../client/note-keys.ts';
 import { NoteFields } from './NoteFields.tsx';
 import { SavedMark } from './SavedMark.tsx';
 import { useDesk } from './use-desk.ts';

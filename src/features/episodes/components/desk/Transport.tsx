@@ -4,7 +4,8 @@ import { INPUT_LOOK } from '../../../../components/FieldFrame.tsx';
 import { parseClock } from '../../../../domain/time/parse-clock.ts';
 import { secondsToFrame } from '../../../../domain/time/frames.ts';
 import { NO_MARKS, setMark } from './composer-draft.ts';
-import { formatMoment, framesIn, type StepSize } from './moment.ts';
+import { formatMoment, framesIn } from './moment.ts';
+import { type StepSize } from '../../../../client/note-keys.ts';
 import { useClock, useDesk } from './use-desk.ts';
 
 const STEPS: readonly (readonly [by: 1 | -1, size: StepSize, label: string, said: string])[] = [

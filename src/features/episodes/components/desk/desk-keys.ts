@@ -1,27 +1,14 @@
-import { NOTE_KINDS, type NoteKind } from '../../../../domain/note-kinds.ts';
-import { type StepSize } from './moment.ts';
+import { type NoteKey, noteKeyOf, type Pressed, type StepSize } from '../../../../client/note-keys.ts';
 
 export type Command =
-  | { readonly do: 'play' | 'in' | 'out' | 'clear-marks' | 'note' | 'chapter' | 'bench' }
-  | { readonly do: 'kind'; readonly kind: NoteKind }
-  | { readonly do: 'step'; readonly by: 1 | -1; readonly size: StepSize }
+  | NoteKey
+  | { readonly do: 'in' | 'out' | 'clear-marks' | 'chapter' | 'bench' }
   | { readonly do: 'to-note'; readonly by: 1 | -1 }
-  | { readonly do: 'edit' | 'move-here' | 'delete' | 'undo' | 'redo' | 'keys' | 'leave' }
+  | { readonly do: 'edit' | 'move-here' | 'delete' | 'undo' | 'redo' | 'keys' }
   | { readonly do: 'nudge'; readonly by: 1 | -1; readonly size: StepSize };
 
-/** A key as the browser reports it. */
-export interface Pressed {
-  readonly key: string;
-  readonly ctrlKey: boolean;
-  readonly metaKey: boolean;
-  readonly shiftKey: boolean;
-  readonly altKey: boolean;
-}
-
+/** What only the desk has; the rest is that of every player with notes. */
 const SINGLE: Readonly<Record<string, Command>> = {
-  ' ': { do: 'play' },
-  ',': { do: 'step', by: -1, size: 'frame' },
-  '.': { do: 'step', by: 1, size: 'frame' },
   '<': { do: 'nudge', by: -1, size: 'frame' },
   '>': { do: 'nudge', by: 1, size: 'frame' },
   '-': { do: 'nudge', by: -1, size: 'second' },
@@ -29,7 +16,6 @@ const SINGLE: Readonly<Record<string, Command>> = {
   i: { do: 'in' },
   o: { do: 'out' },
   x: { do: 'clear-marks' },
-  n: { do: 'note' },
   c: { do: 'chapter' },
   p: { do: 'bench' },
   b: { do: 'to-note', by: -1 },
@@ -38,22 +24,14 @@ const SINGLE: Readonly<Record<string, Command>> = {
   m: { do: 'move-here' },
   Delete: { do: 'delete' },
   '?': { do: 'keys' },
-  Escape: { do: 'leave' },
 };
-
-/** The keys that are digits, in the order in which kinds are offered: 1 is a step, 0 a tip. */
-export function digitOf(kind: NoteKind): string {
-  return String((NOTE_KINDS.indexOf(kind) + 1) % 10);
-}
 
 /**
  * What a key does when nobody is typing.
  * @param singles false when keys without Ctrl are switched off
  */
-export function commandOf(
-  { key, ctrlKey, metaKey, shiftKey, altKey }: Pressed,
-  singles = true,
-): Command | null {
+export function commandOf(pressed: Pressed, singles = true): Command | null {
+  const { key, ctrlKey, metaKey, shiftKey, altKey } = pressed;
   if (altKey) return null;
   if (ctrlKey || metaKey) {
     const letter = key.toLowerCase();
@@ -61,12 +39,7 @@ export function commandOf(
     return letter === 'y' && !shiftKey ? { do: 'redo' } : null;
   }
   if (!singles) return null;
-  if (key === 'ArrowLeft' || key === 'ArrowRight') {
-    return { do: 'step', by: key === 'ArrowLeft' ? -1 : 1, size: shiftKey ? 'ten' : 'second' };
-  }
-  const kind = NOTE_KINDS.find((one) => digitOf(one) === key);
-  if (kind !== undefined) return { do: 'kind', kind };
-  return SINGLE[key] ?? SINGLE[key.toLowerCase()] ?? null;
+  return noteKeyOf(pressed) ?? SINGLE[key] ?? SINGLE[key.toLowerCase()] ?? null;
 }
 
 /** What the panel says, a group at a time. */

@@ -1,3 +1,4 @@
+import { type StepSize } from '../../../../client/note-keys.ts';
 import { convertEndFrame, convertFrame, frameToSeconds } from '../../../../domain/time/frames.ts';
 import { formatClock } from '../../../../domain/time/format-clock.ts';
 import { type Position } from '../../../../domain/positions.ts';
@@ -31,8 +32,6 @@ export function sayPlace(position: Position): string {
     ? clock(position.frame)
     : `${clock(position.frame)} to ${clock(position.endFrame)}`;
 }
-
-export type StepSize = 'frame' | 'second' | 'ten';
 
 /** How many frames a step is; in thousandths a frame of 1/25 s is meant. */
 export function framesIn(size: StepSize, rate: Rate): number {
