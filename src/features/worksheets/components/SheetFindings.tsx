@@ -1,6 +1,7 @@
-import { CentrePop } from '../../../components/CentrePop.tsx';
+import { CautionNote } from '../../../components/CautionNote.tsx';
 import { Notice } from '../../../components/Notice.tsx';
 import { Table } from '../../../components/Table.tsx';
+import { sayPublished } from '../../../domain/cautions/say-sources.ts';
 import { USUAL_CAUTIONS } from '../../../domain/cautions/usual-cautions.ts';
 import { PLANNING_GUIDE, type Source, type Worked } from '../../../domain/worksheets/worksheet.ts';
 
@@ -59,22 +60,7 @@ export function SheetStanding({ limits, notChecked, sources, cautions }: Omit<Wo
       <p className="border-s-4 border-primer ps-3 font-bold">{PLANNING_GUIDE}</p>
       {cautions.map((topic) => {
         const { label, words, sources: published } = USUAL_CAUTIONS[topic];
-        return (
-          <div
-            key={topic}
-            className="grid max-w-prose grid-cols-[1.5rem_minmax(0,1fr)] gap-x-2 border border-primer bg-sheet px-3 py-2"
-          >
-            <CentrePop tone="primer" />
-            <div>
-              <p>
-                <strong className="text-primer">The usual caution, {label}:</strong> {words}
-              </p>
-              <p className="text-sm text-ink-soft">
-                Source: {published.map(({ publisher, number }) => `${publisher}, ${number}`).join('; ')}
-              </p>
-            </div>
-          </div>
-        );
+        return <CautionNote key={topic} label={label} words={words} source={sayPublished(published)} />;
       })}
       <div className="grid gap-4 text-sm lg:grid-cols-3">
         <Lines title="Where it holds" lines={limits} />

@@ -5,7 +5,7 @@ import { USUAL_CAUTIONS } from '../../../../domain/cautions/usual-cautions.ts';
 import { formatClock } from '../../../../domain/time/format-clock.ts';
 import { type CompanionNote, type CompanionPart } from '../../companion.ts';
 import { NoteText, STANDING_WORDS } from './NoteText.tsx';
-import { sayNumbers } from './say-sources.ts';
+import { sayNumbers } from '../../../../domain/cautions/say-sources.ts';
 import { TapeStretch } from './TapeStretch.tsx';
 
 type NoteRowProps = {

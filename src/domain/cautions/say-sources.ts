@@ -1,4 +1,4 @@
-import { type CautionSource } from '../../../../domain/cautions/usual-cautions.ts';
+import { type CautionSource } from './usual-cautions.ts';
 
 /** Sources in full: under each publisher its texts, by number and title. */
 export function saySources(sources: readonly CautionSource[]): string {
@@ -14,4 +14,9 @@ export function saySources(sources: readonly CautionSource[]): string {
 /** Sources by their numbers alone, where the full names stand elsewhere on the page. */
 export function sayNumbers(sources: readonly CautionSource[]): string {
   return sources.map(({ number }) => number).join(', ');
+}
+
+/** Sources in one line, each with its publisher and number. */
+export function sayPublished(sources: readonly CautionSource[]): string {
+  return sources.map(({ publisher, number }) => `${publisher}, ${number}`).join('; ');
 }
