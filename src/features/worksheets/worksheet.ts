@@ -2,8 +2,8 @@ import { z } from 'zod';
 import { lineOfText } from '../../domain/plain-text.ts';
 import { buildParams, buildVersion } from '../builds/build.ts';
 
-/** The worksheets that anyone may fill in, as the list of them says it. */
-export const OPEN_SHEETS = {
+/** Those that anyone may fill in, and that are kept with a build. */
+const KEPT_AND_OPEN = {
   lengths: {
     title: 'Lengths',
     about: 'mm, inches, fractions, thou and feet, and the nearest mark of a rule.',
@@ -14,10 +14,6 @@ export const OPEN_SHEETS = {
     about: 'Shaft and hole by ISO 286, the clearance, and what is still to come off.',
   },
   seats: { title: 'Bearing seats', about: 'The seats of a bearing, by which ring turns under the load.' },
-  stock: {
-    title: 'Cutting plan',
-    about: 'The fewest bars for a list of pieces, offcuts first, with marks for the tape.',
-  },
   sections: { title: 'Section mass', about: 'What a bar, tube or angle weighs by the metre.' },
   ports: {
     title: 'Ports',
@@ -30,8 +26,18 @@ export const OPEN_SHEETS = {
   },
 } as const;
 
-/** Those that only a team fills in: others see the maker’s inputs and working, and none of their own. */
-export const TEAM_SHEETS = {
+/** Those that anyone may fill in. */
+export const OPEN_SHEETS = {
+  ...KEPT_AND_OPEN,
+  stock: {
+    title: 'Cutting plan',
+    about: 'The fewest bars for a list of pieces, offcuts first, with marks for the tape.',
+  },
+} as const;
+
+/** Those that are kept with a build. The last only a team fills in: others see its inputs and working. */
+export const SHEETS = {
+  ...KEPT_AND_OPEN,
   ram: { title: 'Hydraulic ram', about: 'Force, speed, power and oil of a cylinder and its pump.' },
   weld: {
     title: 'Stick welding',
@@ -39,11 +45,6 @@ export const TEAM_SHEETS = {
   },
   beam: { title: 'Simple beam', about: 'Stress and deflection, where the method holds.' },
 } as const;
-
-const { stock: _cuttingPlan, ...KEEPABLE } = OPEN_SHEETS;
-
-/** Those that are kept with a build. */
-export const SHEETS = { ...KEEPABLE, ...TEAM_SHEETS } as const;
 export type SheetId = keyof typeof SHEETS;
 const SHEET_IDS = Object.keys(SHEETS) as [SheetId, ...SheetId[]];
 
