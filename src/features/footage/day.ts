@@ -47,6 +47,8 @@ export interface FootageDay {
   readonly day: string | null;
   readonly clips: readonly ShownClip[];
   readonly stretches: readonly ShownStretch[];
+  /** When no camera ran between the day's first clip and its last, whatever is shown of it. */
+  readonly gaps: readonly { readonly from: number; readonly until: number }[];
   /** How many clips there are that nothing says the time of. */
   readonly unknown: number;
   /** All clips of the build. */

@@ -42,10 +42,13 @@ test('clips stand on the day of the shop they began on, in its order, with what 
 
 test('only the clips of a camera or a stage are shown when they are asked for', async () => {
   await filmADay(shed.owner, build);
-  const { cameras } = await getFootageDay(shed.owner, { build });
+  const { cameras, gaps } = await getFootageDay(shed.owner, { build });
   const small = cameras.find(({ name }) => name === 'Small camera');
   const shown = await getFootageDay(shed.owner, { build, camera: small?.id });
   expect(shown.clips.map(({ name }) => name)).toEqual(['TL_0012.MP4']);
+  // What another camera filmed is filmed, whether it is shown or not.
+  expect(gaps.length).toBeGreaterThan(0);
+  expect(shown.gaps).toEqual(gaps);
 });
 
 test('a camera says how far its clock is off, and by how much more each day', async () => {

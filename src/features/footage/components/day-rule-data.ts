@@ -1,4 +1,5 @@
 import { type NoteKind } from '../../../components/note-kind.ts';
+import { type FootageDay } from '../day.ts';
 
 /** What stands on a day's rule. Times are milliseconds since 1970. */
 export interface DayRuleData {
@@ -31,8 +32,52 @@ export interface DayRuleData {
 
 const HOUR_MS = 3_600_000;
 
+type Drawn = Pick<FootageDay, 'clips' | 'stretches' | 'gaps'> & {
+  readonly timeZone: string;
+  readonly pops: DayRuleData['pops'];
+  /** Where a stretch that still runs has come to. */
+  readonly now: number;
+  readonly clipHref: (clip: string) => string;
+};
+
+/** A day of footage as its rule shows it: a lane a camera; null when nothing of it has a time. */
+export function drawDay({
+  clips,
+  stretches,
+  gaps,
+  pops,
+  timeZone,
+  now,
+  clipHref,
+}: Drawn): DayRuleData | null {
+  const ran = clips.flatMap(({ from, until, ...clip }) =>
+    from === null || until === null ? [] : [{ ...clip, from, until }],
+  );
+  const hatchings = stretches.map(({ from, until, text }) => ({ from, until: until ?? now, label: text }));
+  const span = spanOf([
+    ...[...ran, ...hatchings].flatMap(({ from, until }) => [from, until]),
+    ...pops.map(({ at }) => at),
+  ]);
+  if (span === null) return null;
+  const lanes = [...new Set(ran.map(({ camera }) => camera?.id))].map((id) => {
+    const own = ran.filter(({ camera }) => camera?.id === id);
+    return {
+      name: own[0]?.camera?.name ?? 'no camera',
+      clips: own.map(({ id: clip, name, from, until, pace }) => ({
+        id: clip,
+        name,
+        from,
+        until,
+        href: clipHref(clip),
+        dashed: pace.num !== pace.den,
+      })),
+    };
+  });
+  return { timeZone, ...span, lanes, pops, gaps, hatchings };
+}
+
 /** The whole hours around all that a day has to show; null when there is nothing. */
-export function spanOf(times: readonly number[]): { from: number; until: number } | null {
+function spanOf(times: readonly number[]): { from: number; until: number } | null {
   if (times.length === 0) return null;
   const from = Math.floor(Math.min(...times) / HOUR_MS) * HOUR_MS;
   const until = Math.ceil((Math.max(...times) + 1) / HOUR_MS) * HOUR_MS;

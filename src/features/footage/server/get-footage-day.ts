@@ -1,6 +1,7 @@
 import { and, asc, eq, isNull } from 'drizzle-orm';
 import { stages } from '../../../db/schema/builds.ts';
 import { workStretches } from '../../../db/schema/footage.ts';
+import { findGaps } from '../../../domain/footage/find-gaps.ts';
 import { dayIn } from '../../../domain/time/day-in.ts';
 import { type WorkshopContext } from '../../../server/context.ts';
 import { read } from '../../../server/verb.ts';
@@ -31,14 +32,17 @@ export const getFootageDay = read(
     const days = [...counts].map(([day, clips]) => ({ day, clips })).sort((a, b) => (a.day < b.day ? 1 : -1));
     const unknown = all.filter(({ from }) => from === null).length;
     const day = asked.day === 'unknown' ? null : (asked.day ?? days[0]?.day ?? null);
+    const ofDay = all.filter(({ from }) => (from === null ? day === null : dayOf(from) === day));
     return {
       days,
       day,
       unknown,
       total: all.length,
-      clips: all.filter(
-        ({ from, camera, stage }) =>
-          (from === null ? day === null : dayOf(from) === day) &&
+      gaps: findGaps(
+        ofDay.flatMap(({ from, until }) => (from === null || until === null ? [] : [{ from, until }])),
+      ),
+      clips: ofDay.filter(
+        ({ camera, stage }) =>
           (asked.camera === undefined || camera?.id === asked.camera) &&
           (asked.stage === undefined || stage?.id === asked.stage),
       ),
