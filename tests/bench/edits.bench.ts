@@ -4,7 +4,6 @@ import { openDataDir } from '../../scripts/data-dir.ts';
 import { newId } from '../../src/db/columns.ts';
 import { anchors, notes } from '../../src/db/schema/notes.ts';
 import { migrateDatabase } from '../../src/db/migrate.ts';
-import { formatTimecode } from '../../src/domain/time/timecode.ts';
 import { getBuild } from '../../src/features/builds/server/get-build.ts';
 import { lookAtDesk } from '../../src/features/episodes/server/look-at-desk.ts';
 import { makeEpisode } from '../../src/features/episodes/server/make-episode.ts';
@@ -14,40 +13,21 @@ import { accountMails } from '../../src/process-mails.ts';
 import { type WorkshopContext } from '../../src/server/context.ts';
 import { readServiceSettings } from '../../src/server/env.ts';
 import { openServices, type Services } from '../../src/server/services.ts';
-import { aShownBuild, BUILD, noteAt, RATE } from '../support/companion.ts';
+import { aShownBuild, BUILD, noteAt } from '../support/companion.ts';
 import { aWorkshop } from '../support/people.ts';
 import { aClip, editOf, takeEdit } from '../support/placed.ts';
 import { throwawayFolder } from '../support/throwaway.ts';
 import { type Bench, formatTable } from './support/bench.ts';
+import { CLIP_FRAMES, CLIPS, cutList, RATE, SIZES } from './support/cut-list.ts';
 
 // Announces on stderr that it will want a newer Node one day.
 process.env['AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED'] = 'true';
 
-/** Segments and notes; the last is the largest edit that is thought of. */
-const SIZES = [
-  [500, 2500],
-  [1000, 5000],
-  [2000, 10_000],
-] as const;
 /** "A few seconds" for the largest to be placed again and stored, and the most that twice the size may take of once. */
 const MOST_MS = 4000;
 const MOST_GROWTH = 3;
 
-const CLIPS = 40;
-const CLIP_FRAMES = 60_000;
 const AT_ONCE = 1000;
-
-/** A list of cuts of 1 to 4 s, taken from a few long clips in no order. The same one each time. */
-function aList(segments: number): string[] {
-  let at = 0;
-  return Array.from({ length: segments }, (_none, index) => {
-    const length = 25 + ((index * 37) % 75);
-    const from = (index * 7919) % (CLIP_FRAMES - 100);
-    const times = [from, from + length, at, at + length].map((frame) => formatTimecode(frame, RATE));
-    at += length;
-    return `${String(index + 1)} C${String(index % CLIPS)} V C ${times.join(' ')}`;
-  });
-}
 
 async function makeNotes({ db, workshop }: WorkshopContext, buildId: string, count: number, ids: string[]) {
   await db.delete(notes);
@@ -93,7 +73,7 @@ async function measure(
   const clipIds = Object.fromEntries(ids.map((id, index) => [`C${String(index)}`, id]));
   const { id: episode } = await makeEpisode(owner, { build: BUILD, title: 'The longest' });
   await makeNotes(owner, buildId, count, ids);
-  const list = aList(segments);
+  const list = cutList(segments);
   const edit = await takeEdit(owner, episode, editOf(...list), clipIds);
   const place = await timed(() => services.db.transaction((transaction) => placeEdit(transaction, edit)));
   const next = { edit: editOf(...list.slice(segments / 20)), clipIds: new Map(Object.entries(clipIds)) };

@@ -3,35 +3,13 @@ import { carryNotes } from '../../src/domain/place/carry-notes.ts';
 import { type ClipMoment, placeNotes } from '../../src/domain/place/place-notes.ts';
 import { type Edit } from '../../src/domain/edit/edit.ts';
 import { readEdl } from '../../src/domain/edit/read-edl.ts';
-import { formatTimecode } from '../../src/domain/time/timecode.ts';
 import { type Bench, formatTable, median } from './support/bench.ts';
+import { CLIP_FRAMES, CLIPS, cutList, RATE, SIZES } from './support/cut-list.ts';
 
-const RATE = { num: 25, den: 1 };
 const ROUNDS = 5;
-/** Segments and notes; the last is the largest edit that is thought of. */
-const SIZES = [
-  [500, 2500],
-  [1000, 5000],
-  [2000, 10_000],
-] as const;
 /** The most that the largest may take, and the most that twice the size may take of the time of once. */
 const MOST_MS = 500;
 const MOST_GROWTH = 3;
-
-const CLIPS = 40;
-const CLIP_FRAMES = 60_000;
-
-/** A list of cuts of 1 to 4 s, taken from a few long clips in no order. The same one each time. */
-function aList(segments: number): string {
-  let at = 0;
-  return Array.from({ length: segments }, (_none, index) => {
-    const length = 25 + ((index * 37) % 75);
-    const from = (index * 7919) % (CLIP_FRAMES - 100);
-    const times = [from, from + length, at, at + length].map((frame) => formatTimecode(frame, RATE));
-    at += length;
-    return `${String(index + 1)} C${String(index % CLIPS)} V C ${times.join(' ')}`;
-  }).join('\n');
-}
 
 function someNotes(notes: number): ClipMoment[] {
   return Array.from({ length: notes }, (_none, index) => ({
@@ -57,7 +35,7 @@ function readList(text: string): Edit {
 }
 
 function measure([segments, notes]: (typeof SIZES)[number]) {
-  const list = aList(segments);
+  const list = cutList(segments).join('\n');
   const edit = readList(list);
   const moments = someNotes(notes);
   const read = timed(() => readList(list));

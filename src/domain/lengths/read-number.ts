@@ -10,7 +10,8 @@ export interface NumberRead {
   readonly decimals: number | null;
 }
 
-const VULGAR: Readonly<Record<string, string>> = {
+/** Fractions that are one character. */
+export const VULGAR: Readonly<Record<string, string>> = {
   '½': '1/2',
   '¼': '1/4',
   '¾': '3/4',

@@ -1,7 +1,6 @@
 import { z } from 'zod';
-import { type EditWarning } from '../../domain/edit/edit.ts';
 import { type ComparedSegment } from '../../domain/edit/compare-edits.ts';
-import { type Edit } from '../../domain/edit/edit.ts';
+import { type Edit, type EditWarning } from '../../domain/edit/edit.ts';
 import { EDIT_SOURCES, type EditSource, type WrittenSource } from '../../domain/edit/edit-sources.ts';
 import { type UnalignedStretch } from '../../domain/place/align-captions.ts';
 import { type Rate } from '../../domain/time/rate.ts';

@@ -1,3 +1,4 @@
+import { VULGAR } from '../../lengths/read-number.ts';
 import { type Stop } from './speech.ts';
 
 /** A word cut from a caption's text. */
@@ -24,13 +25,7 @@ const SIGNS: Readonly<Record<string, string>> = {
   '″': 'inch',
   '°': 'degrees',
   '%': 'percent',
-  '½': '1/2',
-  '¼': '1/4',
-  '¾': '3/4',
-  '⅛': '1/8',
-  '⅜': '3/8',
-  '⅝': '5/8',
-  '⅞': '7/8',
+  ...VULGAR,
 };
 
 /** Cuts a caption's text into words; sounds and fillers are left out, signs are spelled. */

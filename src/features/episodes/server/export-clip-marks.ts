@@ -11,6 +11,7 @@ import { Invalid } from '../../../server/errors.ts';
 import { read } from '../../../server/verb.ts';
 import { loadBuild } from '../../builds/server/load-build.ts';
 import { loadFilmedClips, type LoadedClip } from '../../footage/server/load-filmed-clips.ts';
+import { secondsOn } from '../../notes/server/footage-of-edits.ts';
 import { type EditFileForm, NO_RATE } from '../edit.ts';
 import { loadPartNumbers } from './load-part-numbers.ts';
 import { writeEditFile } from './write-edit-file.ts';
@@ -90,11 +91,14 @@ async function loadNotesOnClips(
     clips.filter(isTimed),
     shop.map(({ shopAt }) => new Fraction(shopAt?.getTime() ?? 0)),
   );
+  const known = new Map(clips.map((clip) => [clip.id, clip]));
   const byAnchor = new Map(shop.map(({ id }, index) => [id, ran[index]]));
   return rows.flatMap(({ note: { id, kind, text, topic }, anchor }) => {
     const { clipId, frame, rateNum, rateDen } = anchor;
-    if (anchor.clock === 'clip' && clipId !== null && frame !== null)
-      return [{ id, kind, text, topic, clipId, at: new Fraction(frame).mul(rateDen ?? 1).div(rateNum ?? 1) }];
+    if (anchor.clock === 'clip' && clipId !== null && frame !== null) {
+      const counted = { num: rateNum ?? 1, den: rateDen ?? 1 };
+      return [{ id, kind, text, topic, clipId, at: secondsOn(known.get(clipId), frame, counted) }];
+    }
     const places = byAnchor.get(anchor.id);
     if (places === undefined || (places.status !== 'running' && places.status !== 'edge')) return [];
     return places.clips.map((on) => ({ id, kind, text, topic, clipId: on.id, at: on.at }));

@@ -26,9 +26,7 @@ async function loadEarlier(
     .innerJoin(edits, eq(edits.id, editClips.editId))
     .innerJoin(episodes, eq(episodes.id, edits.episodeId))
     .leftJoin(clips, eq(clips.id, editClips.clipId))
-    .where(
-      and(eq(episodes.buildId, episode.buildId), or(isNull(editClips.clipId), and(isNull(clips.deletedAt)))),
-    )
+    .where(and(eq(episodes.buildId, episode.buildId), or(isNull(editClips.clipId), isNull(clips.deletedAt))))
     .orderBy(asc(edits.createdAt), asc(edits.id));
   const earlier = new Map<string, Earlier>();
   for (const { name, clipId, episodeId } of rows) {
