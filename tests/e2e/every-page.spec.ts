@@ -4,6 +4,7 @@ import {
   countStops,
   findBarriers,
   overhang,
+  setWidth,
   validateHtml,
   walkByKeyboard,
 } from '../support/e2e/page-checks.ts';
@@ -37,7 +38,7 @@ for (const state of PAGES) {
     expect(answer.headers()['content-security-policy']).toContain("script-src 'self'");
 
     for (const width of WIDTHS) {
-      await page.setViewportSize({ width, height: 900 });
+      await setWidth(page, width);
       for (const colorScheme of SCHEMES) {
         await page.emulateMedia({ colorScheme });
         const here = `${String(width)} px, ${colorScheme}`;

@@ -56,6 +56,15 @@ export async function findBarriers(page: Page, rules: 'all' | 'colour'): Promise
   }, runOnly);
 }
 
+/** Gives a page another width, and waits until it is laid out and drawn at it. */
+export async function setWidth(page: Page, width: number): Promise<void> {
+  await page.setViewportSize({ width, height: 900 });
+  await page.waitForFunction((wanted) => matchMedia(`(width: ${String(wanted)}px)`).matches, width);
+  await page.evaluate(
+    () => new Promise((drawn) => requestAnimationFrame(() => requestAnimationFrame(drawn))),
+  );
+}
+
 /** By how many pixels a page is wider than the window. */
 export function overhang(page: Page): Promise<number> {
   return page.evaluate(() => Math.max(0, document.documentElement.scrollWidth - innerWidth));
