@@ -1,13 +1,8 @@
 import { type Edit, rateOf, type Segment } from '../edit/edit.ts';
 import { shopTimeAt } from './camera-clock.ts';
 import { type OffCameraSign } from './clip-facts.ts';
+import { type ShopStretch } from './find-gaps.ts';
 import { type FilmedClip, isTimed, shopStretch, type TimedClip } from './place-on-clips.ts';
-
-/** A half-open stretch of shop time, in milliseconds since 1970. */
-export interface ShopStretch {
-  readonly from: number;
-  readonly until: number;
-}
 
 /** A stretch in which work is known to have gone on, and by what. */
 export interface WorkStretch extends ShopStretch {
